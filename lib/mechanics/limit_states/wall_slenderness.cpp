@@ -1,0 +1,220 @@
+// SPDX-License-Identifier: MIT
+#include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/value.hpp"
+#include "mechanics/stress_points.hpp"
+#include "mechanics/text.hpp"
+
+#include <bismar/mechanics/stress.hpp>
+#include <bismar/mechanics/wall.hpp>
+
+#include <algorithm>
+#include <string>
+#include <string_view>
+#include <vector>
+
+namespace bismar::mechanics {
+
+namespace {
+
+bool is_compressed(const LoadEffects& effects) {
+  return effects.compression > 0.0 || effects.bends || effects.twists;
+}
+
+Symbol strength_symbol(const MemberMaterial& material) {
+  return material.rule == StressRule::von_mises_yield ? Symbol::sigma_y : Symbol::compressive;
+}
+
+double strength(const MemberMaterial& material) {
+  return material.rule == StressRule::von_mises_yield
+             ? needed(material.sigma_y, Symbol::sigma_y)
+             : needed(material.compressive, Symbol::compressive);
+}
+
+/// Largest compression in the section [Pa]: bending less axial tension, with torsion as principal
+/// compression, so that a thin tube in torsion is looked at too.
+double acting_compression(const CheckInput& input) {
+  double largest = 0.0;
+  for (const Station& station : input.effects.stations) {
+    const StationStresses s = station_stresses(input.section, station.forces);
+    largest = std::max(largest, largest_principal(s.bending - s.axial, s.torsion));
+  }
+  return largest;
+}
+
+/// Which planes bend.
+struct Bending {
+  bool about_y = false;
+  bool about_z = false;
+};
+
+Bending bending(const LoadEffects& effects) {
+  Bending result;
+  for (const Station& station : effects.stations) {
+    result.about_y = result.about_y || station.forces.M_y != 0.0;
+    result.about_z = result.about_z || station.forces.M_z != 0.0;
+  }
+  return result;
+}
+
+/// A section lists its walls for bending about y. Axial compression makes its webs uniformly
+/// compressed, and so does bending about z in a box or a channel; a box bent about z alone has its
+/// roles exchanged.
+PlateElement::Kind acting_kind(const PlateElement& plate,
+                               const CheckInput& input,
+                               const Bending& bends) {
+  using Kind = PlateElement::Kind;
+  const bool squeezed = input.effects.compression > 0.0;
+  const bool box = input.section.family == SectionFamily::rectangular_tube;
+  if (plate.kind == Kind::internal_bending) {
+    const bool side_wall = box || input.section.family == SectionFamily::channel;
+    return squeezed || (bends.about_z && side_wall) ? Kind::internal_compression : plate.kind;
+  }
+  if (plate.kind == Kind::internal_compression && box && !squeezed && bends.about_z &&
+      !bends.about_y) {
+    return Kind::internal_bending;
+  }
+  return plate.kind;
+}
+
+/// The strength that the limit is taken at: the material's where member buckling is verified (axial
+/// compression), otherwise the factored acting stress where that is lower.
+struct Basis {
+  double stress = 0.0;  ///< [Pa]; zero where nothing is compressed.
+  double acting = 0.0;  ///< Acting compression, unfactored [Pa].
+  bool plain = true;
+};
+
+Basis basis(const CheckInput& input) {
+  Basis result;
+  result.stress = strength(input.material);
+  if (input.effects.compression > 0.0) {
+    return result;
+  }
+  result.acting = acting_compression(input);
+  const double factored = input.factor * result.acting;
+  if (factored < result.stress) {
+    result.stress = factored;
+    result.plain = false;
+  }
+  return result;
+}
+
+struct Worst {
+  PlateElement plate;
+  PlateElement::Kind kind = PlateElement::Kind::round;
+  double limit = 0.0;
+  double ratio = 0.0;
+};
+
+Worst worst_wall(const CheckInput& input, double stress) {
+  const double epsilon = wall_epsilon(stress, needed(input.material.E, Symbol::E));
+  const Bending bends = bending(input.effects);
+  Worst worst;
+  worst.ratio = -1.0;
+  for (const PlateElement& plate : input.section.plates) {
+    const PlateElement::Kind kind = acting_kind(plate, input, bends);
+    const double limit = class_3_limit(kind, epsilon);
+    if (plate.ratio / limit > worst.ratio) {
+      worst = {.plate = plate, .kind = kind, .limit = limit, .ratio = plate.ratio / limit};
+    }
+  }
+  return worst;
+}
+
+std::string_view name(PlateElement::Kind kind) {
+  switch (kind) {
+    case PlateElement::Kind::internal_compression:
+      return "internal wall in compression, c/t";
+    case PlateElement::Kind::internal_bending:
+      return "internal wall in bending, c/t";
+    case PlateElement::Kind::outstand:
+      return "outstanding flange, c/t";
+    case PlateElement::Kind::round:
+      return "round wall, d/t";
+  }
+  throw InternalError("plate element without a name");
+}
+
+class WallSlenderness final : public LimitState {
+ public:
+  std::string_view id() const override { return "wall slenderness"; }
+  std::string_view source() const override {
+    return "class 3 limits of EN 1993-1-1:2005 Table 5.2; on acting stress 5.5.2(9), only where no "
+           "member buckling is verified, 5.5.2(10)";
+  }
+  /// On the acting stress, as for stability; the plain limit has no factor.
+  double default_factor(const MemberMaterial&) const override { return 1.5; }
+  bool applies(const LoadEffects&,
+               const MemberLimits&,
+               const MemberMaterial&,
+               const SectionProperties& section) const override {
+    return !section.plates.empty();
+  }
+  std::vector<Symbol> needs(const LoadEffects& effects,
+                            const MemberMaterial& material) const override {
+    if (!is_compressed(effects)) {
+      return {};
+    }
+    return {Symbol::E, strength_symbol(material)};
+  }
+  double utilisation(const CheckInput& input) const override {
+    if (!is_compressed(input.effects)) {
+      return 0.0;
+    }
+    const double stress = basis(input).stress;
+    return stress > 0.0 ? std::max(0.0, worst_wall(input, stress).ratio) : 0.0;
+  }
+  Explanation explain(const CheckInput& input) const override;
+  /// The ratios of the walls stay; the acting stress falls, and the plain limit does not move.
+  Trend trend_with_scale() const override { return Trend::falls; }
+  /// A stronger grade is allowed more stress and so gets the stricter limit.
+  Trend trend_with(Symbol symbol) const override {
+    switch (symbol) {
+      case Symbol::E:
+        return Trend::falls;
+      case Symbol::sigma_y:
+      case Symbol::compressive:
+        return Trend::rises;
+      default:
+        return Trend::constant;
+    }
+  }
+};
+
+Explanation WallSlenderness::explain(const CheckInput& input) const {
+  Explanation text;
+  const Basis on = is_compressed(input.effects) ? basis(input) : Basis{};
+  if (on.stress <= 0.0) {
+    text.line = "Wall slenderness: no wall is compressed: u = 0.";
+    text.steps = {"Neither axial compression nor bending nor torsion acts."};
+    return text;
+  }
+  const Worst worst = worst_wall(input, on.stress);
+  const double u = utilisation(input);
+  const double epsilon = wall_epsilon(on.stress, *input.material.E);
+  text.line = "Wall slenderness: " + std::string(name(worst.kind)) + " = " +
+              number(worst.plate.ratio) + " against a class 3 limit of " + number(worst.limit) +
+              (on.plain ? " at the material's strength" : " on the acting stress") +
+              ": u = " + number(u) + ".";
+  text.steps.push_back(
+      on.plain ? "The limit is taken at the strength f = " + megapascals(on.stress) +
+                     (input.effects.compression > 0.0 ? ", because member buckling is verified."
+                                                      : ", because the factored stress reaches it.")
+               : "No axial compression: the limit is taken at the factored acting compression, " +
+                     number(input.factor) + " x " + megapascals(on.acting) + " = " +
+                     megapascals(on.stress) + ".");
+  text.steps.push_back("epsilon = root of (235 MPa / " + megapascals(on.stress) + " x " +
+                       gigapascals(*input.material.E) + " / 210 GPa) = " + number(epsilon) + ".");
+  text.steps.push_back("u = " + number(worst.plate.ratio) + " / " + number(worst.limit) + " = " +
+                       number(u) + ".");
+  return text;
+}
+
+}  // namespace
+
+const LimitState& wall_slenderness_limit_state() {
+  static const WallSlenderness state;
+  return state;
+}
+
+}  // namespace bismar::mechanics

@@ -1,0 +1,111 @@
+// SPDX-License-Identifier: MIT
+#include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/value.hpp"
+#include "mechanics/stress_points.hpp"
+#include "mechanics/text.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <string>
+#include <string_view>
+#include <vector>
+
+namespace bismar::mechanics {
+
+namespace {
+
+struct Worst {
+  const Station* station = nullptr;
+  StressPoint point;
+  double equivalent = 0.0;  ///< [Pa]
+};
+
+Worst worst_point(const CheckInput& input) {
+  Worst worst;
+  double largest = -1.0;
+  for (const Station& station : input.effects.stations) {
+    const StressPoints points =
+        stress_points(input.section, station_stresses(input.section, station.forces));
+    for (const StressPoint& point : points) {
+      const double squared = equivalent_squared(point);
+      if (squared > largest) {
+        largest = squared;
+        worst.station = &station;
+        worst.point = point;
+      }
+    }
+  }
+  worst.equivalent = std::sqrt(std::max(0.0, largest));
+  return worst;
+}
+
+class Yield final : public LimitState {
+ public:
+  std::string_view id() const override { return "yield"; }
+  std::string_view source() const override {
+    return "von Mises criterion on elastic stresses; EN 1993-1-1:2005 6.2.1(5)";
+  }
+  double default_factor(const MemberMaterial&) const override { return 1.5; }
+  bool applies(const LoadEffects&,
+               const MemberLimits&,
+               const MemberMaterial& material,
+               const SectionProperties&) const override {
+    return material.rule == StressRule::von_mises_yield;
+  }
+  std::vector<Symbol> needs(const LoadEffects&, const MemberMaterial&) const override {
+    return {Symbol::sigma_y};
+  }
+  double utilisation(const CheckInput& input) const override {
+    return input.factor * worst_point(input).equivalent /
+           needed(input.material.sigma_y, Symbol::sigma_y);
+  }
+  Explanation explain(const CheckInput& input) const override;
+  /// Every stress falls: N/A and V/A_v with the square of the scale, M/W and T/W_t with its cube;
+  /// the equivalent stress rises with each of their magnitudes.
+  Trend trend_with_scale() const override { return Trend::falls; }
+  Trend trend_with(Symbol symbol) const override {
+    return symbol == Symbol::sigma_y ? Trend::falls : Trend::constant;
+  }
+};
+
+Explanation Yield::explain(const CheckInput& input) const {
+  const double strength = needed(input.material.sigma_y, Symbol::sigma_y);
+  const Worst worst = worst_point(input);
+  const double u = utilisation(input);
+  Explanation text;
+  if (worst.station == nullptr) {
+    throw InternalError("load effects without a station");
+  }
+  const StressPoint& p = worst.point;
+  text.line = "Yield: " + number(input.factor) + " x " + megapascals(worst.equivalent) +
+              " von Mises stress " + std::string(p.place) +
+              " at x = " + millimetres(worst.station->x) + " against a yield strength of " +
+              megapascals(strength) + ": u = " + number(u) + ".";
+  text.steps = {
+      "Axial stress N / A = " + megapascals(p.axial) +
+          ", from N = " + kilonewtons(worst.station->forces.N) +
+          " and A = " + square_millimetres(input.section.area) + ".",
+      "Bending stress there = " + megapascals(p.bending) +
+          ", from M_y = " + newton_metres(worst.station->forces.M_y) +
+          ", W_y = " + cubic_millimetres(input.section.W_el_y) +
+          ", M_z = " + newton_metres(worst.station->forces.M_z) +
+          ", W_z = " + cubic_millimetres(input.section.W_el_z) + ".",
+      "Shear stress there = " + megapascals(p.shear) +
+          ", from V_z = " + kilonewtons(worst.station->forces.V_z) +
+          ", V_y = " + kilonewtons(worst.station->forces.V_y) +
+          ", T = " + newton_metres(worst.station->forces.T) + ".",
+      "Von Mises stress, the square root of sigma^2 + 3 tau^2, = " + megapascals(worst.equivalent) +
+          ".",
+      "u = factor x stress / yield strength = " + number(input.factor) + " x " +
+          megapascals(worst.equivalent) + " / " + megapascals(strength) + " = " + number(u) + "."};
+  return text;
+}
+
+}  // namespace
+
+const LimitState& yield_limit_state() {
+  static const Yield state;
+  return state;
+}
+
+}  // namespace bismar::mechanics

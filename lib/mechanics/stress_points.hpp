@@ -1,0 +1,56 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include <bismar/mechanics/load_effects.hpp>
+#include <bismar/mechanics/section.hpp>
+
+#include <array>
+#include <cstddef>
+#include <string_view>
+
+namespace bismar::mechanics {
+
+/// Elastic stresses that one station's forces cause, each at its own worst point [Pa].
+struct StationStresses {
+  double axial = 0.0;      ///< N/A, tension positive.
+  double bending_y = 0.0;  ///< |M_y| / W_el,y
+  double bending_z = 0.0;  ///< |M_z| / W_el,z
+  double bending = 0.0;    ///< Both, summed or as the root of the sum of squares by the outline.
+  double shear_y = 0.0;    ///< |V_y| / A_v,y
+  double shear_z = 0.0;    ///< |V_z| / A_v,z
+  double torsion = 0.0;    ///< |T| / W_t
+};
+[[nodiscard]] StationStresses station_stresses(const SectionProperties& section,
+                                               const InternalForces& forces);
+
+/// One point of the section: what acts there together.
+struct StressPoint {
+  std::string_view place;
+  double axial = 0.0;    ///< Tension positive.
+  double bending = 0.0;  ///< Bending stress at the point, >= 0; it occurs with both signs.
+  double beyond = 0.0;   ///< Bending stress that the way from here to the extreme fibre adds.
+  double shear = 0.0;    ///< Shear force's and torsion's stress.
+  double extra = 0.0;    ///< Square of stress to add, see stress_points().
+};
+using StressPoints = std::array<StressPoint, 5>;
+
+/// The points that bound the section: extreme fibre, both neutral axes, centre, junction.
+///
+/// The peak torsion stress is taken everywhere, which is exact for round sections and on the safe
+/// side for the rest (a rectangle has no torsion stress in its corners).
+///
+/// `beyond` and `extra` make the square of the von Mises stress a bound on everything between the
+/// points: along a depth coordinate s in [0, 1] (0 at the neutral axis) the direct stress n + m s
+/// obeys
+///     (n + m s)^2 <= (n + m) (n + m s^2)            (Jensen's inequality with weights n and m)
+/// and the shear stress of a solid or a web is linear in s^2, so that the bound is convex in s^2
+/// and largest at an end. In the wall of a round tube the shear stress is v c with c^2 + s^2 = 1;
+/// the bound is then a parabola in c whose crest, where it lies inside, adds `extra` at the extreme
+/// fibre.
+[[nodiscard]] StressPoints stress_points(const SectionProperties& section,
+                                         const StationStresses& stresses);
+
+/// Square of the von Mises stress that bounds the point's part of the section [Pa^2].
+[[nodiscard]] double equivalent_squared(const StressPoint& point);
+
+}  // namespace bismar::mechanics

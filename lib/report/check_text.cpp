@@ -1,0 +1,196 @@
+// SPDX-License-Identifier: MIT
+#include <string>
+#include <vector>
+
+#include <bismar/report/table.hpp>
+#include <bismar/report/text_report.hpp>
+
+#include "report/words.hpp"
+
+namespace bismar {
+namespace {
+
+using report::number;
+
+std::string mm(double metres) { return number(metres * 1e3) + " mm"; }
+
+std::string listed(const std::vector<std::string>& words) {
+  std::string out;
+  for (const std::string& word : words) out += (out.empty() ? "" : ", ") + word;
+  return out;
+}
+
+std::string sizes_text(const Sizes& sizes) {
+  switch (sizes.kind) {
+    case Sizes::Kind::continuous:
+      return "any size";
+    case Sizes::Kind::step:
+      return "in steps of " + mm(sizes.step);
+    case Sizes::Kind::series:
+      return "in sizes of " + sizes.series;
+    case Sizes::Kind::list:
+      return "in " + report::count(sizes.values.size()) + " listed sizes";
+  }
+  return {};
+}
+
+std::string shape_text(const Shape& shape) {
+  std::string out(name(shape.family));
+  if (shape.height_to_width) out += ", height/width " + report::exact(*shape.height_to_width);
+  if (shape.wall_to_height) out += ", wall/height " + report::exact(*shape.wall_to_height);
+  return out + ", height " + number(shape.height_min * 1e3) + " to " + mm(shape.height_max) + ", " +
+         sizes_text(shape.sizes);
+}
+
+std::string_view support_text(Support support) {
+  return support == Support::cantilever ? "cantilever, fixed at x = 0" : "pinned at both ends";
+}
+
+std::string load_text(const Load& load) {
+  const std::string along = load.along == Along::z ? " along z" : " along y";
+  switch (load.kind) {
+    case Load::Kind::force:
+      return "force " + number(load.value) + " N" + along + " at " + mm(load.at);
+    case Load::Kind::moment:
+      return "moment " + number(load.value) + " N.m from loads" + along + " at " + mm(load.at);
+    case Load::Kind::distributed:
+      return "distributed " + number(load.value) + " to " + number(load.value_to) + " N/m" + along +
+             " from " + mm(load.at) + " to " + mm(load.to);
+    case Load::Kind::axial:
+      return std::string(load.value < 0.0 ? "axial compression " : "axial tension ") +
+             number(load.value < 0.0 ? -load.value : load.value) + " N";
+    case Load::Kind::torque:
+      return "torque " + number(load.value) + " N.m at " + mm(load.at);
+  }
+  return {};
+}
+
+std::vector<std::string> load_case_lines(const LoadCase& load_case) {
+  std::vector<std::string> lines;
+  std::string support(support_text(load_case.support_z));
+  if (load_case.support_y != load_case.support_z) {
+    support += " for loads along z, ";
+    support += support_text(load_case.support_y);
+    support += " for loads along y";
+  }
+  lines.push_back(std::move(support));
+  for (const Load& load : load_case.loads) lines.push_back(load_text(load));
+  if (load_case.direct) {
+    const InternalForces& f = *load_case.direct;
+    lines.push_back("direct N " + number(f.N) + " N, V_y " + number(f.V_y) + " N, V_z " +
+                    number(f.V_z) + " N, M_y " + number(f.M_y) + " N.m, M_z " + number(f.M_z) +
+                    " N.m, T " + number(f.T) + " N.m");
+  }
+  for (const auto& [limit, factor] : load_case.factors) {
+    lines.push_back("factor " + report::exact(factor) + " on " + limit);
+  }
+  if (load_case.duration > 0.0) {
+    lines.push_back("lasts " + number(load_case.duration / 3600.0) + " h");
+  }
+  if (load_case.hand_loaded) lines.emplace_back("loaded by hand");
+  if (load_case.impact) lines.emplace_back("loaded by impact");
+  return lines;
+}
+
+class Facts {
+ public:
+  void add(std::string what, std::string value) {
+    table_.add_row({std::move(what), std::move(value)});
+  }
+  void add_list(const std::string& what, const std::vector<std::string>& words) {
+    if (!words.empty()) add(what, listed(words));
+  }
+  void add_length(const std::string& what, const std::optional<double>& metres) {
+    if (metres) add(what, mm(*metres));
+  }
+  [[nodiscard]] std::string text(const TextOptions& options) const {
+    return table_.text(options.width,
+                       0,
+                       options.colour ? report::bold_on : "",
+                       options.colour ? report::emphasis_off : "");
+  }
+
+ private:
+  report::Table table_{
+      {{"what", report::Align::left, false}, {"as read", report::Align::left, true}}};
+};
+
+void add_limits(Facts& facts, const Limits& limits, const std::string& currency) {
+  facts.add_length("deflection at most", limits.deflection);
+  if (limits.twist) facts.add("twist at most", number(*limits.twist) + " rad");
+  facts.add_length("height at most", limits.height);
+  facts.add_length("width at most", limits.width);
+  facts.add_length("wall at least", limits.wall);
+  facts.add("slenderness at most", report::exact(limits.slenderness) + " (members in compression)");
+  if (limits.column_method == ColumnMethod::euler) {
+    facts.add("columns", "Euler load alone, as asked: no imperfection, no yielding");
+  }
+  if (limits.mass) facts.add("mass at most", number(*limits.mass) + " kg");
+  if (limits.cost) facts.add("cost at most", report::money(*limits.cost) + " " + currency);
+  facts.add_list("only routes", limits.routes);
+  facts.add_list("not by routes", limits.forbidden_routes);
+  facts.add_list("processes needed", limits.processes);
+  facts.add_list("sold as", limits.forms);
+  facts.add_list("only classes", limits.classes);
+  facts.add_list("only materials", limits.materials);
+  facts.add_list("not these materials", limits.forbidden_materials);
+  for (const PropertyLimit& p : limits.properties) {
+    std::string bounds;
+    if (p.at_least) bounds = "at least " + report::exact(*p.at_least);
+    if (p.at_most) {
+      bounds += (bounds.empty() ? "at most " : ", at most ") + report::exact(*p.at_most);
+    }
+    facts.add(p.property, bounds + " (SI)");
+  }
+  if (limits.medium) {
+    constexpr std::string_view words[] = {"poor", "fair", "good"};
+    facts.add("medium",
+              *limits.medium + ", resistance at least " +
+                  std::string(words[static_cast<std::size_t>(limits.corrosion_at_least)]));
+  }
+  if (limits.temperature) {
+    facts.add("service temperature", number(*limits.temperature - 273.15) + " degC");
+  }
+  if (limits.allow_brittle) facts.add("brittle materials", "allowed");
+  if (limits.allow_hard) facts.add("very hard materials", "allowed");
+}
+
+}  // namespace
+
+std::string check_text(const Part& part, const Catalogue& catalogue, const TextOptions& options) {
+  std::string out =
+      report::emphasised(part.name + ": the job is valid. It reads as follows.", options.colour);
+  out += "\n\n";
+
+  Facts facts;
+  facts.add("quantity", number(part.quantity) + " parts");
+  if (part.batch) facts.add("batch", number(*part.batch) + " parts");
+  facts.add("length", mm(part.body.length));
+  for (const Shape& shape : part.body.shapes) facts.add("shape", shape_text(shape));
+  facts.add_list("stock lists", part.body.stock);
+  for (const LoadCase& load_case : part.body.load_cases) {
+    std::string lines;
+    for (const std::string& line : load_case_lines(load_case)) {
+      lines += (lines.empty() ? "" : "\n") + line;
+    }
+    facts.add("load case " + load_case.name, std::move(lines));
+  }
+  add_limits(facts, part.limits, catalogue.currency);
+  facts.add_list("finishes to try", part.finishes);
+  for (const OperationUse& use : part.operations) {
+    facts.add("operation", report::exact(use.units) + " x " + use.operation);
+  }
+  std::size_t sizes = 0;
+  for (const StockList& list : catalogue.stock) sizes += list.items.size();
+  facts.add("tables",
+            report::count(catalogue.materials.size()) + " materials, " + report::count(sizes) +
+                " stock sizes in " + report::count(catalogue.stock.size()) + " lists, " +
+                report::count(catalogue.routes.size()) + " routes, " +
+                report::count(catalogue.finishes.size()) + " finishes, prices in " +
+                catalogue.currency);
+  out += facts.text(options);
+  out += "\nLoads are service values; the factors of each limit act when it is checked.\n\n";
+  return out + report::paragraph(caution(), options.width);
+}
+
+}  // namespace bismar

@@ -1,0 +1,182 @@
+// SPDX-License-Identifier: MIT
+#include "sizing/blank.hpp"
+
+#include "sizing/words.hpp"
+
+#include <bismar/sizing/cost.hpp>
+
+#include <algorithm>
+#include <cmath>
+#include <limits>
+
+namespace bismar {
+
+namespace {
+
+/// Largest height at which the part, allowance included, fits into a bar. All dimensions of the part are
+/// multiples of its height: `unit` is its section at height 1.
+double largest_size_in(const StockItem& item, const SectionProperties& unit, SectionFamily list,
+                       double allowance) {
+  const double larger = std::max(unit.height, unit.width);
+  const double smaller = std::min(unit.height, unit.width);
+  const bool round_part =
+      unit.family == SectionFamily::solid_round || unit.family == SectionFamily::solid_ellipse;
+  if (list == SectionFamily::solid_round) {
+    // A round or elliptical part needs its larger diameter, an angular one its diagonal. The diagonal of
+    // the enlarged rectangle grows faster than linearly by the allowance: solve the quadratic.
+    if (round_part) {
+      return (item.section.height - allowance) / larger;
+    }
+    const double a = larger * larger + smaller * smaller;
+    const double b = 2.0 * allowance * (larger + smaller);
+    const double c = 2.0 * allowance * allowance - item.section.height * item.section.height;
+    const double discriminant = b * b - 4.0 * a * c;
+    return c >= 0.0 ? 0.0 : (-b + std::sqrt(discriminant)) / (2.0 * a);
+  }
+  const double bar_larger = std::max(item.section.height, item.section.width);
+  const double bar_smaller = std::min(item.section.height, item.section.width);
+  return std::min((bar_larger - allowance) / larger, (bar_smaller - allowance) / smaller);
+}
+
+bool is_solid(SectionFamily family) {
+  return family == SectionFamily::solid_round || family == SectionFamily::solid_square ||
+         family == SectionFamily::solid_rectangle;
+}
+
+bool usable(const StockItem& item, const MaterialInfo& material, const Route& route,
+            const Settings& settings) {
+  return made_of(item, material) && shares_word(item.forms, route.takes) &&
+         (settings.doubtful_sizes || item.availability != Availability::doubtful);
+}
+
+/// Keeps, by rising largest size, those that no other beats in both room and weight.
+std::vector<Blank> lightest(std::vector<Blank> all) {
+  std::sort(all.begin(), all.end(), [](const Blank& a, const Blank& b) {
+    if (a.largest_size != b.largest_size) {
+      return a.largest_size > b.largest_size;
+    }
+    return a.area != b.area ? a.area < b.area : a.item->id < b.item->id;
+  });
+  std::vector<Blank> kept;
+  double least = std::numeric_limits<double>::infinity();
+  // From the roomiest down: a smaller one is worth keeping only if it is lighter than all roomier ones.
+  for (const auto& blank : all) {
+    if (blank.area < least) {
+      least = blank.area;
+      kept.push_back(blank);
+    }
+  }
+  std::reverse(kept.begin(), kept.end());
+  return kept;
+}
+
+}  // namespace
+
+std::optional<Purchase> buy_length(double area, double density, double length,
+                                   std::span<const double> stock_lengths, double kerf) {
+  if (stock_lengths.empty()) {
+    return Purchase{area * density * length, 0.0, 1.0};
+  }
+  std::optional<Purchase> best;
+  for (const double bar : stock_lengths) {
+    const auto pieces = static_cast<double>(pieces_per_bar(bar, length, kerf));
+    if (pieces < 1.0) {
+      continue;
+    }
+    const double mass = area * density * bar / pieces;
+    if (!best || mass < best->mass) {
+      best = Purchase{mass, bar, pieces};
+    }
+  }
+  return best;
+}
+
+std::vector<Blank> blanks(const SectionProperties& unit, double length, double height_max,
+                          const MaterialInfo& material, const Route& route,
+                          const Catalogue& catalogue, const Settings& settings) {
+  const double allowance = settings.machining_allowance;
+  std::vector<Blank> bars;
+  std::vector<Blank> plates;
+  bool listed = false;
+  for (const auto& list : catalogue.stock) {
+    if (!list.sheet && !is_solid(list.family)) {
+      continue;
+    }
+    for (const auto& item : list.items) {
+      if (!usable(item, material, route, settings)) {
+        continue;
+      }
+      listed = true;
+      Blank blank;
+      blank.item = &item;
+      blank.plate = list.sheet;
+      if (list.sheet) {
+        const double smaller = std::min(unit.height, unit.width);
+        blank.largest_size = (item.thickness - allowance) / smaller;
+        blank.ruling_dimension = item.thickness;
+        blank.area = item.thickness;  // per metre of width: the order of plates is that of thickness
+      } else {
+        blank.largest_size = largest_size_in(item, unit, list.family, allowance);
+        blank.ruling_dimension = item.section.ruling_dimension;
+        blank.area = item.section.area;
+      }
+      const bool long_enough =
+          item.lengths.empty() ||
+          std::any_of(item.lengths.begin(), item.lengths.end(), [&](double bar) { return bar >= length; });
+      if (blank.largest_size > 0.0 && long_enough) {
+        (list.sheet ? plates : bars).push_back(blank);
+      }
+    }
+  }
+  if (!bars.empty()) {
+    return lightest(std::move(bars));
+  }
+  if (!plates.empty()) {
+    return lightest(std::move(plates));
+  }
+  if (listed) {
+    return {};
+  }
+  // No list of the catalogue holds the material: a rectangular or round blank cut to measure.
+  Blank blank;
+  blank.largest_size = height_max;
+  return {blank};
+}
+
+std::optional<Purchase> buy(const Blank& blank, const SectionProperties& section, double density,
+                            double length, const Settings& settings) {
+  const double allowance = settings.machining_allowance;
+  if (blank.item == nullptr) {
+    const double h = section.height + allowance;
+    const double b = section.width + allowance;
+    const bool round = section.family == SectionFamily::solid_round;
+    const double area = round ? 0.25 * 3.141592653589793 * h * h : h * b;
+    return Purchase{area * density * (length + settings.kerf), 0.0, 1.0};
+  }
+  if (blank.plate) {
+    const double across = std::max(section.height, section.width) + allowance + settings.kerf;
+    const double mass = across * blank.item->thickness * density * (length + settings.kerf);
+    return Purchase{mass, 0.0, 1.0};
+  }
+  return buy_length(blank.item->section.area, density, length, blank.item->lengths, settings.kerf);
+}
+
+std::string describe_stock(const std::string& designation, const Purchase& purchase, double length) {
+  if (purchase.bar_length == 0.0) {
+    return designation + ", cut to measure";
+  }
+  return designation + ", " + plain(purchase.pieces) + " of " + plain(length * 1e3, 6) + " mm from " +
+         plain(purchase.bar_length, 4) + " m";
+}
+
+std::string describe(const Blank& blank, const Purchase& purchase, double length) {
+  if (blank.item == nullptr) {
+    return "blank cut to measure (no stock list of the catalogue holds this material)";
+  }
+  if (blank.plate) {
+    return blank.item->designation + ", cut to width";
+  }
+  return describe_stock(blank.item->designation, purchase, length);
+}
+
+}  // namespace bismar

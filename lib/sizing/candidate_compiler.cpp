@@ -1,0 +1,384 @@
+// SPDX-License-Identifier: MIT
+#include "sizing/candidate_compiler.hpp"
+
+#include "sizing/words.hpp"
+
+#include <bismar/error.hpp>
+#include <bismar/sizing/existence.hpp>
+
+#include <algorithm>
+#include <cmath>
+#include <set>
+
+namespace bismar {
+
+namespace {
+
+/// Sorts and makes unique, where values closer than a billionth are one.
+void tidy(std::vector<double>& values) {
+  std::sort(values.begin(), values.end());
+  values.erase(std::unique(values.begin(), values.end(),
+                           [](double a, double b) { return b - a <= 1e-9 * b; }),
+               values.end());
+}
+
+}  // namespace
+
+std::optional<Range> limited_value(const MaterialTable& table, const PropertyLimit& limit,
+                                   std::size_t row) {
+  if (const auto known = property(limit.property)) {
+    return table.value(*known, row);
+  }
+  return table.extra(limit.property, row);
+}
+
+double limited_end(const PropertyReader& reader, const PropertyLimit& limit, const Range& range,
+                   bool at_least) {
+  if (const auto known = property(limit.property)) {
+    const auto& ends = reader.settings().range_ends;
+    if (const auto own = ends.find(*known); own != ends.end()) {
+      return range.at(own->second);
+    }
+    if (*known == Property::price || *known == Property::density) {
+      return range.at(reader.end(*known));
+    }
+  }
+  return at_least ? range.low : range.high;
+}
+
+SectionProperties section_of(const Shape& shape, const Route& route, double height) {
+  const double width = height / shape.height_to_width.value_or(1.0);
+  const double wall = height * shape.wall_to_height.value_or(0.0);
+  const bool rolled = contains_word(route.leaves, "welded tube");
+  const bool drawn = contains_word(route.leaves, "tube");
+  const Forming forming =
+      rolled ? Forming::cold_formed : drawn ? Forming::extruded : Forming::unknown;
+  switch (shape.family) {
+    case SectionFamily::solid_round: return solid_round(height);
+    case SectionFamily::solid_square: return solid_square(height);
+    case SectionFamily::solid_rectangle: return solid_rectangle(height, width);
+    case SectionFamily::solid_ellipse: return solid_ellipse(height, width);
+    case SectionFamily::round_tube: return round_tube(height, wall, forming);
+    case SectionFamily::rectangular_tube:
+      return rectangular_tube(height, width, wall, rolled ? Corners::en_10219 : Corners::sharp,
+                              forming);
+    case SectionFamily::i_section:
+    case SectionFamily::channel: break;
+  }
+  throw InternalError("section_of: a shape without one free size passed the checks");
+}
+
+CandidateCompiler::CandidateCompiler(SizingProblem& problem, const Candidate& candidate)
+    : problem_(problem),
+      out_(std::make_unique<CompiledCandidate>()),
+      material_(problem.catalogue().materials.info(candidate.material)),
+      route_(problem.catalogue().routes[candidate.route]) {
+  out_->candidate = candidate;
+  out_->cost.emplace(problem.part(), problem.catalogue(), problem.settings(), candidate);
+}
+
+std::unique_ptr<CompiledCandidate> CandidateCompiler::run() {
+  states_ = &problem_.states(out_->candidate.material);
+  if (out_->candidate.stock != Candidate::none) {
+    stock_pieces();
+  } else {
+    shape_pieces();
+  }
+  collect_constraints();
+  find_undecided();
+  return std::move(out_);
+}
+
+const StepState* CandidateCompiler::state_at(double thickness) const {
+  const auto steps = problem_.catalogue().materials.steps(out_->candidate.material);
+  for (std::size_t s = 0; s < steps.size(); ++s) {
+    if (thickness > steps[s].above && thickness <= steps[s].up_to) {
+      return &(*states_)[s];
+    }
+  }
+  return nullptr;
+}
+
+void CandidateCompiler::stock_pieces() {
+  const auto& list = problem_.catalogue().stock[out_->candidate.stock];
+  out_->variable.kind = Variable::Kind::ordered_set;
+  for (std::size_t i = 0; i < list.items.size(); ++i) {
+    const auto& item = list.items[i];
+    const bool offered = problem_.settings().doubtful_sizes ||
+                         item.availability != Availability::doubtful;
+    if (!offered || !made_of(item, material_) || !shares_word(item.forms, route_.takes)) {
+      continue;
+    }
+    Piece piece;
+    piece.lower = piece.upper = piece.size = static_cast<double>(i);
+    piece.item = &item;
+    piece.section = item.section;
+    piece.step = state_at(item.section.ruling_dimension);
+    out_->variable.values.push_back(piece.size);
+    out_->pieces.push_back(std::move(piece));
+  }
+  if (!out_->variable.values.empty()) {
+    out_->variable.lower = out_->variable.values.front();
+    out_->variable.upper = out_->variable.values.back();
+  }
+}
+
+void CandidateCompiler::shape_pieces() {
+  const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
+  const double lower = shape.height_min;
+  const double upper = shape.height_max;
+  const auto unit = section_of(shape, route_, 1.0);
+  const bool machined = machines_blank(route_);
+
+  std::vector<double> ends;
+  const auto add_end = [&](double size) {
+    if (size > lower && size < upper) {
+      ends.push_back(size);
+    }
+  };
+  if (machined) {
+    // The strength of a machined part was set in its blank, so its steps are those of the blanks.
+    out_->blanks = blanks(unit, problem_.part().body.length, upper, material_, route_,
+                          problem_.catalogue(), problem_.settings());
+    for (const auto& blank : out_->blanks) {
+      add_end(blank.largest_size);
+    }
+  }
+  const bool own_thickness =
+      !machined || (out_->blanks.size() == 1 && out_->blanks[0].item == nullptr);
+  if (own_thickness) {
+    for (const auto& step : problem_.catalogue().materials.steps(out_->candidate.material)) {
+      add_end(step.above / unit.ruling_dimension);
+      add_end(step.up_to / unit.ruling_dimension);
+    }
+  }
+  if (shape.family == SectionFamily::rectangular_tube) {
+    // EN 10219-2 changes its corner radii at walls of 6 and 10 mm.
+    add_end(6e-3 / unit.wall);
+    add_end(10e-3 / unit.wall);
+  }
+  tidy(ends);
+  out_->variable.breakpoints = ends;
+  ends.push_back(upper);
+
+  double from = lower;
+  for (const double to : ends) {
+    Piece piece;
+    piece.lower = from;
+    piece.upper = to;
+    piece.size = to;
+    piece.section = section_of(shape, route_, to);
+    double thickness = piece.section.ruling_dimension;
+    if (machined) {
+      // The smallest blank that holds the upper end of the piece; a rounding of the division above
+      // must not push the end itself out of it.
+      const auto fits =
+          std::find_if(out_->blanks.begin(), out_->blanks.end(), [&](const Blank& blank) {
+            return blank.largest_size * (1.0 + 1e-12) >= to;
+          });
+      piece.blank = fits == out_->blanks.end() ? nullptr : &*fits;
+      if (piece.blank != nullptr && piece.blank->item != nullptr) {
+        thickness = piece.blank->ruling_dimension;
+      }
+    }
+    if (own_thickness) {
+      // A point inside decides, so that rounding at the end of a step does not.
+      thickness = 0.5 * (from + to) * unit.ruling_dimension;
+    }
+    piece.step = state_at(thickness);
+    out_->pieces.push_back(std::move(piece));
+    from = to;
+  }
+  set_sizes();
+}
+
+std::vector<double> CandidateCompiler::sheet_sizes() const {
+  const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
+  // The smaller dimension of the section is the thickness of the sheet.
+  const double height_per_thickness = std::max(shape.height_to_width.value_or(1.0), 1.0);
+  std::vector<double> out;
+  for (const auto& list : problem_.catalogue().stock) {
+    if (!list.sheet) {
+      continue;
+    }
+    for (const auto& item : list.items) {
+      const bool offered = problem_.settings().doubtful_sizes ||
+                           item.availability != Availability::doubtful;
+      if (offered && made_of(item, material_) && shares_word(item.forms, route_.takes)) {
+        out.push_back(item.thickness * height_per_thickness);
+      }
+    }
+  }
+  tidy(out);
+  return out;
+}
+
+std::vector<double> CandidateCompiler::wanted_sizes(double lower, double upper) const {
+  const auto& sizes = problem_.part().body.shapes[out_->candidate.shape].sizes;
+  std::vector<double> out;
+  switch (sizes.kind) {
+    case Sizes::Kind::continuous: break;
+    case Sizes::Kind::step: {
+      const double first = std::ceil(lower / sizes.step * (1.0 - 1e-12));
+      const double last = std::floor(upper / sizes.step * (1.0 + 1e-12));
+      for (double k = first; k <= last; k += 1.0) {
+        out.push_back(k * sizes.step);
+      }
+      break;
+    }
+    case Sizes::Kind::series: out = preferred_numbers(sizes.series, lower, upper); break;
+    case Sizes::Kind::list: out = sizes.values; break;
+  }
+  tidy(out);
+  return out;
+}
+
+void CandidateCompiler::set_sizes() {
+  const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
+  auto& variable = out_->variable;
+  variable.lower = shape.height_min;
+  variable.upper = shape.height_max;
+  const bool wanted = shape.sizes.kind != Sizes::Kind::continuous;
+  if (!wanted && !cuts_sheet(route_)) {
+    return;
+  }
+  auto values = wanted ? wanted_sizes(variable.lower, variable.upper) : sheet_sizes();
+  if (wanted && cuts_sheet(route_)) {
+    const auto bought = sheet_sizes();
+    std::erase_if(values, [&](double value) {
+      return std::none_of(bought.begin(), bought.end(), [&](double other) {
+        return std::abs(value - other) <= 1e-9 * other;
+      });
+    });
+  }
+  std::erase_if(values, [&](double value) {
+    return value < variable.lower * (1.0 - 1e-12) || value > variable.upper * (1.0 + 1e-12);
+  });
+  variable.kind = Variable::Kind::ordered_set;
+  variable.breakpoints.clear();
+  variable.values = std::move(values);
+  if (!variable.values.empty()) {
+    variable.lower = variable.values.front();
+    variable.upper = variable.values.back();
+  }
+}
+
+void CandidateCompiler::collect_constraints() {
+  using Kind = Constraint::Kind;
+  const auto& limits = problem_.part().limits;
+  const auto add = [&](Kind kind, Trend trend, std::string label) {
+    Constraint constraint;
+    constraint.kind = kind;
+    constraint.trend = trend;
+    constraint.label = std::move(label);
+    out_->constraints.push_back(std::move(constraint));
+  };
+  for (std::size_t p = 0; p < limits.properties.size(); ++p) {
+    add(Kind::property, Trend::constant, "limit on " + limits.properties[p].property);
+    out_->constraints.back().property_limit = p;
+  }
+  if (limits.medium) {
+    add(Kind::corrosion, Trend::constant, "corrosion in " + *limits.medium);
+  }
+  if (limits.temperature) {
+    add(Kind::temperature, Trend::constant, "service temperature");
+  }
+  add(Kind::thickness_limit, Trend::constant, "tabulated thickness");
+  add_limit_states();
+  add(Kind::route_wall, Trend::falls, "least section of the route");
+  add(Kind::route_section, Trend::rises, "largest section of the route");
+  add(Kind::route_mass_min, Trend::falls, "least mass of the route");
+  add(Kind::route_mass_max, Trend::rises, "largest mass of the route");
+  add(Kind::blank, Trend::constant, "blank or stock length");
+  if (limits.mass) {
+    add(Kind::mass_cap, Trend::rises, "mass cap");
+  }
+  if (limits.cost) {
+    add(Kind::cost_cap, Trend::rises, "cost cap");
+  }
+  for (auto& piece : out_->pieces) {
+    piece.applies.assign(out_->constraints.size(), false);
+    for (std::size_t i = 0; i < out_->constraints.size(); ++i) {
+      const auto& constraint = out_->constraints[i];
+      piece.applies[i] = constraint.kind == Kind::limit_state && piece.step != nullptr &&
+                         constraint.state->applies(problem_.effects()[constraint.load_case],
+                                                   problem_.member_limits(),
+                                                   piece.step->cases[constraint.load_case].member,
+                                                   piece.section);
+    }
+  }
+}
+
+void CandidateCompiler::add_limit_states() {
+  const auto first = std::find_if(out_->pieces.begin(), out_->pieces.end(),
+                                  [](const Piece& piece) { return piece.step != nullptr; });
+  if (first == out_->pieces.end()) {
+    return;
+  }
+  const auto& cases = problem_.part().body.load_cases;
+  for (const LimitState* state : limit_states()) {
+    for (std::size_t c = 0; c < cases.size(); ++c) {
+      if (c > 0 && !state->reads_loads()) {
+        break;
+      }
+      const bool anywhere =
+          std::any_of(out_->pieces.begin(), out_->pieces.end(), [&](const Piece& piece) {
+            return piece.step != nullptr &&
+                   state->applies(problem_.effects()[c], problem_.member_limits(),
+                                  piece.step->cases[c].member, piece.section);
+          });
+      if (!anywhere) {
+        continue;
+      }
+      Constraint constraint;
+      constraint.state = state;
+      constraint.load_case = c;
+      constraint.trend = state->trend_with_scale();
+      constraint.label = std::string(state->id());
+      const auto own = cases[c].factors.find(constraint.label);
+      constraint.factor = own != cases[c].factors.end()
+                              ? own->second
+                              : state->default_factor(first->step->cases[c].member);
+      out_->constraints.push_back(std::move(constraint));
+    }
+  }
+}
+
+void CandidateCompiler::find_undecided() {
+  std::set<Property> missing;
+  for (auto& piece : out_->pieces) {
+    if (piece.step == nullptr) {
+      continue;
+    }
+    for (const auto& resolved : piece.step->cases) {
+      missing.insert(resolved.missing.begin(), resolved.missing.end());
+      if (!resolved.member.rho) {
+        missing.insert(Property::density);
+      }
+    }
+    for (std::size_t i = 0; i < out_->constraints.size(); ++i) {
+      if (!piece.applies[i]) {
+        continue;
+      }
+      const auto& constraint = out_->constraints[i];
+      const auto& member = piece.step->cases[constraint.load_case].member;
+      for (const Symbol symbol :
+           constraint.state->needs(problem_.effects()[constraint.load_case], member)) {
+        if (!value_of(member, symbol)) {
+          missing.insert(property_of(symbol));
+        }
+      }
+    }
+    if (!piece.step->priced) {
+      missing.insert(Property::price);
+    }
+    for (const auto& limit : problem_.part().limits.properties) {
+      if (!limited_value(problem_.catalogue().materials, limit, piece.step->row)) {
+        out_->undecided_limit = limit.property;
+      }
+    }
+  }
+  out_->undecided.assign(missing.begin(), missing.end());
+}
+
+}  // namespace bismar

@@ -1,0 +1,257 @@
+// SPDX-License-Identifier: MIT
+#include <bismar/sizing/existence.hpp>
+
+#include "sizing/strength.hpp"
+#include "sizing/words.hpp"
+
+#include <algorithm>
+#include <array>
+#include <cctype>
+
+namespace bismar {
+
+namespace {
+
+bool found_in(std::string_view text, std::string_view word) {
+  return text.find(word) != std::string_view::npos;
+}
+
+/// "T6", "H14", "H900", "P1070", "TH1050" as a word of its own: heat-treatment and strain-hardening tempers.
+bool has_temper(std::string_view condition) {
+  static constexpr std::array<std::string_view, 4> prefixes = {"TH", "T", "H", "P"};
+  for (std::size_t at = 0; at < condition.size(); ++at) {
+    const bool starts = at == 0 || std::isalnum(static_cast<unsigned char>(condition[at - 1])) == 0;
+    for (const auto prefix : prefixes) {
+      const std::size_t digit = at + prefix.size();
+      if (starts && condition.substr(at, prefix.size()) == prefix && digit < condition.size() &&
+          std::isdigit(static_cast<unsigned char>(condition[digit])) != 0) {
+        return true;
+      }
+    }
+  }
+  return false;
+}
+
+}  // namespace
+
+std::string_view name(Rule rule) {
+  switch (rule) {
+    case Rule::not_asked_for: return "not asked for";
+    case Rule::structural_use: return "not for structural use";
+    case Rule::material_class: return "route does not serve the class";
+    case Rule::process: return "process not possible";
+    case Rule::output_form: return "route cannot leave the shape";
+    case Rule::input_form: return "not sold in a form the route takes";
+    case Rule::casting_route: return "cast grade, other route";
+    case Rule::condition_lost: return "condition lost";
+    case Rule::treatment: return "treatment does not fit";
+    case Rule::stock_family: return "no such stock";
+    case Rule::stock_thickness: return "no such thickness";
+    case Rule::finish: return "finish does not go on it";
+  }
+  return "unknown rule";
+}
+
+bool keeps_stock(const Route& route) { return contains_word(route.leaves, "stock"); }
+
+bool machines_blank(const Route& route) { return contains_word(route.process_words, "machining"); }
+
+bool cuts_sheet(const Route& route) {
+  return contains_word(route.leaves, "flat") && shares_word(route.takes, std::array<std::string, 2>{"sheet", "plate"});
+}
+
+bool forms_hot(const Route& route) {
+  return contains_word(route.process_words, "hot forging") || contains_word(route.process_words, "hot forming");
+}
+
+bool can_leave(const Route& route, SectionFamily family) {
+  if (route.kind != RouteKind::primary || keeps_stock(route)) {
+    return false;
+  }
+  const auto leaves = [&](std::string_view word) { return contains_word(route.leaves, word); };
+  switch (family) {
+    case SectionFamily::solid_round:
+    case SectionFamily::solid_ellipse: return leaves("solid");
+    case SectionFamily::solid_square: return leaves("solid") || leaves("rectangle");
+    case SectionFamily::solid_rectangle:
+      return leaves("solid") || leaves("rectangle") || leaves("flat");
+    case SectionFamily::round_tube:
+      return leaves("tube") || leaves("cored tube") || leaves("welded tube");
+    case SectionFamily::rectangular_tube: {
+      const bool wound = contains_word(route.process_words, "filament winding");
+      return (leaves("tube") && !wound) || leaves("cored tube") || leaves("welded tube");
+    }
+    case SectionFamily::i_section:
+    case SectionFamily::channel: return false;
+  }
+  return false;
+}
+
+bool strength_is_lost_when_hot(std::string_view condition) {
+  // "controlled cooled from hot forming" and "normalised" are reached by the forging itself.
+  static constexpr std::array<std::string_view, 9> words = {
+      "quenched", "hardened",    "tempered",   "aged",           "cold drawn",
+      "cold rolled", "cold worked", "stress relieved", "thermomechanically"};
+  return has_temper(condition) || std::any_of(words.begin(), words.end(), [&](std::string_view word) {
+           return found_in(condition, word);
+         });
+}
+
+bool restores(const Route& treatment, const MaterialInfo& material) {
+  if (treatment.kind != RouteKind::treatment ||
+      !contains_word(treatment.classes, material.material_class)) {
+    return false;
+  }
+  if (!treatment.process_words.empty() && !shares_word(treatment.process_words, material.processes)) {
+    return false;
+  }
+  return std::any_of(treatment.restores.begin(), treatment.restores.end(),
+                     [&](const std::string& word) { return found_in(material.condition, word); });
+}
+
+std::optional<Exclusion> material_rules(const MaterialInfo& material, const Limits& limits) {
+  const auto exclude = [&](std::string text) { return Exclusion{Rule::not_asked_for, std::move(text)}; };
+  if (!limits.classes.empty() && !contains_word(limits.classes, material.material_class)) {
+    return exclude("The job asks for " + joined(limits.classes) + "; this is " +
+                   material.material_class + ".");
+  }
+  if (!limits.materials.empty() && !contains_word(limits.materials, material.id)) {
+    return exclude("The job names its materials and this is not one of them.");
+  }
+  if (contains_word(limits.forbidden_materials, material.id) ||
+      contains_word(limits.forbidden_materials, material.material_class)) {
+    return exclude("The job forbids this material or its class.");
+  }
+  if (!limits.forms.empty() && !shares_word(limits.forms, material.forms)) {
+    return exclude("The job asks for the form " + joined(limits.forms, " or ") +
+                   "; it is sold as " + joined(material.forms) + ".");
+  }
+  for (const auto& process : limits.processes) {
+    if (!contains_word(material.processes, process)) {
+      return exclude("The job requires the process \"" + process + "\"; it allows " +
+                     joined(material.processes) + ".");
+    }
+  }
+  if (material.use == StructuralUse::no) {
+    return Exclusion{Rule::structural_use,
+                     "Its values are means or it is a core material: it is never a member."};
+  }
+  if (material.use == StructuralUse::on_request) {
+    const bool hard = is_metal(material.material_class);
+    if (hard ? !limits.allow_hard : !limits.allow_brittle) {
+      return Exclusion{Rule::structural_use,
+                       hard ? "Very hard: admitted only with \"allow_hard\"."
+                            : "Brittle: admitted only with \"allow_brittle\"."};
+    }
+  }
+  return std::nullopt;
+}
+
+std::optional<Exclusion> route_rules(const MaterialInfo& material, const Route& route) {
+  if (!contains_word(route.classes, material.material_class)) {
+    return Exclusion{Rule::material_class, "The route \"" + route.title + "\" serves " +
+                                               joined(route.classes) + ", not " +
+                                               material.material_class + "."};
+  }
+  if (!route.process_words.empty() && !shares_word(route.process_words, material.processes)) {
+    return Exclusion{Rule::process, "The route needs " + joined(route.process_words, " or ") +
+                                        "; the material allows " + joined(material.processes) + "."};
+  }
+  if (is_cast(material) && machines_blank(route)) {
+    return Exclusion{Rule::casting_route,
+                     "A cast grade becomes a part by its own casting route (" +
+                         joined(material.processes) + "), not from bar or plate."};
+  }
+  // Hot forging makes its own blank: it takes bar, and grades that are listed as forgings.
+  const bool takes = shares_word(route.takes, material.forms) ||
+                     (forms_hot(route) && contains_word(material.forms, "forging"));
+  if (!takes) {
+    return Exclusion{Rule::input_form, "The route takes " + joined(route.takes, " or ") +
+                                           "; the material is sold as " + joined(material.forms) +
+                                           "."};
+  }
+  return std::nullopt;
+}
+
+std::optional<Exclusion> shape_rules(const Route& route, SectionFamily family, bool from_stock) {
+  if (from_stock && !keeps_stock(route)) {
+    return Exclusion{Rule::output_form,
+                     "The route \"" + route.title + "\" leaves " + joined(route.leaves) +
+                         ", never a bought section unchanged."};
+  }
+  if (!from_stock && !can_leave(route, family)) {
+    return Exclusion{Rule::output_form, "The route \"" + route.title + "\" leaves " +
+                                            joined(route.leaves) + ", not a free size of " +
+                                            std::string(name(family)) + "."};
+  }
+  return std::nullopt;
+}
+
+std::optional<Exclusion> finish_rules(const MaterialInfo& material, const Finish& finish) {
+  if (!contains_word(finish.classes, material.material_class) ||
+      (!finish.process_words.empty() && !shares_word(finish.process_words, material.processes))) {
+    return Exclusion{Rule::finish, "The finish \"" + finish.title + "\" goes on " +
+                                       joined(finish.classes) + " that allow " +
+                                       joined(finish.process_words, " or ") + "."};
+  }
+  return std::nullopt;
+}
+
+std::vector<std::uint32_t> needed_treatments(const MaterialInfo& material, const Route& route,
+                                             const Catalogue& catalogue) {
+  if (!forms_hot(route) || !strength_is_lost_when_hot(material.condition)) {
+    return {Candidate::none};
+  }
+  std::vector<std::uint32_t> out;
+  for (std::size_t r = 0; r < catalogue.routes.size(); ++r) {
+    if (restores(catalogue.routes[r], material)) {
+      out.push_back(static_cast<std::uint32_t>(r));
+    }
+  }
+  return out;
+}
+
+std::optional<Exclusion> first_broken_rule(const Candidate& candidate, const Part& part,
+                                           const Catalogue& catalogue) {
+  const auto& material = catalogue.materials.info(candidate.material);
+  const auto& route = catalogue.routes[candidate.route];
+  const bool from_stock = candidate.stock != Candidate::none;
+  if (auto broken = material_rules(material, part.limits)) {
+    return broken;
+  }
+  if (auto broken = route_rules(material, route)) {
+    return broken;
+  }
+  const auto needed = needed_treatments(material, route, catalogue);
+  if (needed.empty()) {
+    return Exclusion{Rule::condition_lost,
+                     "Its strength comes from the condition \"" + material.condition +
+                         "\", which hot forming destroys, and no treatment of the catalogue sets it anew."};
+  }
+  if (std::find(needed.begin(), needed.end(), candidate.treatment) == needed.end()) {
+    return Exclusion{Rule::treatment, candidate.treatment == Candidate::none
+                                          ? "Its condition needs a treatment after hot forming."
+                                          : "The treatment does not set the strength of this condition."};
+  }
+  const auto family = from_stock ? catalogue.stock[candidate.stock].family
+                                 : part.body.shapes[candidate.shape].family;
+  if (auto broken = shape_rules(route, family, from_stock)) {
+    return broken;
+  }
+  if (from_stock) {
+    const auto& items = catalogue.stock[candidate.stock].items;
+    const bool any = std::any_of(items.begin(), items.end(), [&](const StockItem& item) {
+      return made_of(item, material) && shares_word(item.forms, route.takes);
+    });
+    if (!any) {
+      return Exclusion{Rule::stock_family, "No size of \"" + catalogue.stock[candidate.stock].title +
+                                               "\" is made of it."};
+    }
+  }
+  if (candidate.finish != Candidate::none) {
+    return finish_rules(material, catalogue.finishes[candidate.finish]);
+  }
+  return std::nullopt;
+}
+
+}  // namespace bismar

@@ -1,0 +1,224 @@
+// SPDX-License-Identifier: MIT
+#include "sizing/explain.hpp"
+
+#include "sizing/words.hpp"
+
+#include <bismar/quantity/format.hpp>
+
+#include <algorithm>
+#include <cmath>
+#include <set>
+
+namespace bismar {
+
+namespace {
+
+std::string evidence_text(Evidence evidence) {
+  switch (evidence) {
+    case Evidence::from_memory: return "unverified";
+    case Evidence::seen: return "seen in print";
+    case Evidence::estimated: return "estimated";
+    case Evidence::user: return "user's table";
+  }
+  return {};
+}
+
+std::string basis_text(Basis basis) {
+  switch (basis) {
+    case Basis::minimum: return "minimum";
+    case Basis::typical: return "typical";
+    case Basis::indicative: return "indicative";
+  }
+  return {};
+}
+
+std::string value_text(double value, const PropertyInfo& info) {
+  return info.unit.empty() ? plain(value, 4) : format_engineering(value, info.unit, 4);
+}
+
+std::string range_text(const Range& range, const PropertyInfo& info) {
+  return range.low == range.high
+             ? value_text(range.low, info)
+             : value_text(range.low, info) + " .. " + value_text(range.high, info);
+}
+
+/// Symbols that the failing limit states read and that a larger value of would help.
+std::vector<Symbol> helpful_symbols(const SizingProblem& problem, const CompiledCandidate& compiled,
+                                    const std::string& reason) {
+  std::set<Symbol> out;
+  for (const auto& constraint : compiled.constraints) {
+    if (constraint.kind != Constraint::Kind::limit_state ||
+        reason.find(constraint.label) == std::string::npos) {
+      continue;
+    }
+    for (const auto& piece : compiled.pieces) {
+      if (piece.step == nullptr) {
+        continue;
+      }
+      const auto& member = piece.step->cases[constraint.load_case].member;
+      for (const Symbol symbol :
+           constraint.state->needs(problem.effects()[constraint.load_case], member)) {
+        if (constraint.state->trend_with(symbol) == Trend::falls) {
+          out.insert(symbol);
+        }
+      }
+      break;
+    }
+  }
+  return {out.begin(), out.end()};
+}
+
+/// The least factor on a value of the material that makes the candidate feasible, up to ten.
+std::optional<double> factor_needed(SizingProblem& problem, const Outcome& outcome, Symbol symbol) {
+  const auto material = outcome.candidate.material;
+  std::size_t evaluations = 0;
+  const auto feasible_at = [&](double factor) {
+    problem.multiply(material, symbol, factor);
+    const bool good =
+        solve_group(problem, outcome.group, evaluations).kind == Outcome::Kind::feasible;
+    problem.multiply(material, symbol, 1.0 / factor);
+    return good;
+  };
+  double high = 10.0;
+  if (!feasible_at(high)) {
+    return std::nullopt;
+  }
+  double low = 1.0;
+  // To three digits: it is advice.
+  while (high / low > 1.0005) {
+    const double middle = std::sqrt(low * high);
+    (feasible_at(middle) ? high : low) = middle;
+  }
+  return high;
+}
+
+}  // namespace
+
+std::string mass_text(double kilograms) { return format_significant(kilograms, 4) + " kg"; }
+
+std::string money_text(double amount, const std::string& currency) {
+  return format_significant(amount, 4) + " " + currency;
+}
+
+std::vector<std::string> provenance_lines(const SizingProblem& problem, std::size_t group,
+                                          const Design& design) {
+  const auto& compiled = problem.compiled(group);
+  const auto detail = problem.detail(group, design.size);
+  const auto& step = *detail.piece->step;
+  std::set<Property> used = {Property::density, Property::price, Property::elongation};
+  for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
+    const auto& constraint = compiled.constraints[i];
+    if (detail.piece->applies[i]) {
+      for (const Symbol symbol :
+           constraint.state->needs(problem.effects()[constraint.load_case],
+                                   step.cases[constraint.load_case].member)) {
+        used.insert(property_of(symbol));
+      }
+    }
+  }
+  std::vector<std::string> out;
+  for (const Property property : used) {
+    const auto range = problem.catalogue().materials.value(property, step.row);
+    if (!range) {
+      continue;
+    }
+    const auto from = problem.catalogue().materials.provenance(property, step.row);
+    std::string line = std::string(info(property).name) + " " + range_text(*range, info(property)) +
+                       ": " + from.table;
+    if (from.row > 0) {
+      line += " line " + std::to_string(from.row);
+    }
+    line += ", " + (from.source.empty() ? "no source given" : from.source) + ", " +
+            basis_text(from.basis) + ", " + evidence_text(from.evidence);
+    out.push_back(std::move(line));
+  }
+  return out;
+}
+
+std::vector<std::string> limit_lines(const SizingProblem& problem, std::size_t group,
+                                     const Design& design) {
+  const auto& compiled = problem.compiled(group);
+  const auto detail = problem.detail(group, design.size);
+  const auto& governing = design.utilisations[design.governing];
+  std::vector<std::string> out;
+  for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
+    const auto& constraint = compiled.constraints[i];
+    if (!detail.piece->applies[i]) {
+      continue;
+    }
+    const auto& resolved = detail.piece->step->cases[constraint.load_case];
+    const CheckInput input{detail.section, resolved.member,
+                           problem.effects()[constraint.load_case], problem.member_limits(),
+                           problem.part().body.length, constraint.factor};
+    const auto explanation = constraint.state->explain(input);
+    out.push_back(explanation.line);
+    const bool governs =
+        constraint.label == governing.limit &&
+        (governing.load_case.empty() ||
+         governing.load_case == problem.part().body.load_cases[constraint.load_case].name);
+    if (governs) {
+      for (const auto& one : explanation.steps) {
+        out.push_back("  " + one);
+      }
+      out.push_back("  Source: " + std::string(constraint.state->source()));
+    }
+  }
+  for (const auto& u : design.utilisations) {
+    const bool other = limit_state(u.limit) == nullptr;
+    if (other && u.value > 0.0) {
+      out.push_back(u.limit + ": " + plain(u.value, 3) + " of what is allowed");
+    }
+  }
+  return out;
+}
+
+std::vector<std::string> cost_lines(const Design& design, const std::string& currency) {
+  std::vector<std::string> out;
+  for (const auto& line : design.cost_breakdown.lines) {
+    out.push_back(money_text(line.amount, currency) + "  " + line.item + ": " + line.how);
+  }
+  out.push_back(money_text(design.cost_breakdown.total, currency) + "  in all; " +
+                money_text(design.cost_breakdown.low, currency) + " .. " +
+                money_text(design.cost_breakdown.high, currency) +
+                " over the ranges of price, tooling and rates");
+  if (!design.cost_breakdown.blank.empty()) {
+    out.push_back("bought as " + design.cost_breakdown.blank);
+  }
+  return out;
+}
+
+std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome& outcome) {
+  const auto& compiled = problem.compiled(outcome.group);
+  const auto labels = names(outcome.candidate, problem.part(), problem.catalogue());
+  std::string how = labels.shape + ", " + labels.route +
+                    (labels.treatment.empty() ? "" : " and " + labels.treatment) +
+                    (labels.finish == "none" ? "" : ", " + labels.finish);
+  std::string line = how + ": " + outcome.reason;
+  if (std::isfinite(outcome.least_utilisation) && outcome.least_utilisation > 1.0) {
+    line += ", at best " + format_significant(outcome.least_utilisation, 3) +
+            " times what is allowed";
+  }
+  std::vector<std::string> out = {line + "."};
+  for (const Symbol symbol : helpful_symbols(problem, compiled, outcome.reason)) {
+    const auto factor = factor_needed(problem, outcome, symbol);
+    if (!factor) {
+      continue;
+    }
+    const auto property = property_of(symbol);
+    for (const auto& piece : compiled.pieces) {
+      if (piece.step == nullptr) {
+        continue;
+      }
+      // The table's own value, so that the advice can be looked up in a table.
+      if (const auto value = problem.reader().value(property, piece.step->row)) {
+        out.push_back("  It would come in with a " + std::string(info(property).name) +
+                      " of at least about " + value_text(*value * *factor, info(property)) +
+                      " instead of " + value_text(*value, info(property)) + ".");
+      }
+      break;
+    }
+  }
+  return out;
+}
+
+}  // namespace bismar

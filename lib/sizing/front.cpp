@@ -1,0 +1,309 @@
+// SPDX-License-Identifier: MIT
+#include <bismar/sizing/front.hpp>
+
+#include "sizing/study.hpp"
+#include "sizing/words.hpp"
+
+#include <bismar/error.hpp>
+#include <bismar/numeric/floating_point_guard.hpp>
+#include <bismar/pareto/front.hpp>
+
+#include <algorithm>
+#include <chrono>
+#include <cmath>
+#include <set>
+#include <tuple>
+
+namespace bismar {
+
+namespace {
+
+constexpr double plain_path_tolerance = 1e-12;
+
+/// One feasible point with all that orders it.
+struct Ranked {
+  std::size_t outcome = 0;
+  Outcome::Point point;
+  const CandidateNames* names = nullptr;
+  std::string item;  ///< Stock item id: the index in a list depends on the order of the table.
+};
+
+bool before(const Ranked& a, const Ranked& b) {
+  return std::tie(a.point.mass, a.point.cost, *a.names, a.item, a.point.size) <
+         std::tie(b.point.mass, b.point.cost, *b.names, b.item, b.point.size);
+}
+
+std::string item_id(const Solved& solved, const Outcome& outcome, double size) {
+  if (outcome.candidate.stock == Candidate::none) {
+    return {};
+  }
+  const auto& list = solved.problem->catalogue().stock[outcome.candidate.stock];
+  return list.items[static_cast<std::size_t>(size)].id;
+}
+
+/// Whether no front point is better by the margin in both objectives. The front is given by rising mass.
+bool is_near(double mass, double cost, std::span<const Outcome::Point> front, double margin) {
+  const double inflated = 1.0 + margin;
+  const auto heavier = std::partition_point(front.begin(), front.end(), [&](const auto& point) {
+    return inflated * point.mass < mass;
+  });
+  // Of the points lighter by the margin the heaviest is the cheapest.
+  return heavier == front.begin() || !(inflated * std::prev(heavier)->cost < cost);
+}
+
+void check_plain_path(const Design& design, const SizingProblem& problem, std::size_t group,
+                      Result& result) {
+  std::vector<double> objectives(2);
+  std::vector<double> utilisations(problem.constraints(group));
+  problem.evaluate(group, std::span(&design.size, 1), objectives, utilisations);
+  const auto differs = [](double a, double b) {
+    return std::abs(a - b) > plain_path_tolerance * std::max(std::abs(a), std::abs(b));
+  };
+  bool wrong = differs(objectives[0], design.mass) || differs(objectives[1], design.cost);
+  wrong = wrong || std::any_of(design.utilisations.begin(), design.utilisations.end(),
+                               [](const Utilisation& u) { return !(u.value <= 1.0); });
+  if (wrong) {
+    result.exact = false;
+    result.notes.push_back("INTERNAL FAULT: " + design.id +
+                           " differs from its re-evaluation on the plain path; do not use it and report it.");
+  }
+}
+
+class FrontBuilder {
+ public:
+  FrontBuilder(const Part& part, const Settings& settings, Solved& solved)
+      : part_(part), settings_(settings), solved_(solved) {}
+
+  Result run() {
+    Result result;
+    result.part = part_.name;
+    result.currency = solved_.problem->catalogue().currency;
+    rank();
+    split(result);
+    fill_funnel(result);
+    add_notes(result);
+    result.telemetry.evaluations = solved_.evaluations;
+    return result;
+  }
+
+ private:
+  void rank() {
+    names_.reserve(solved_.outcomes.size());
+    for (std::size_t o = 0; o < solved_.outcomes.size(); ++o) {
+      const auto& outcome = solved_.outcomes[o];
+      names_.push_back(names(outcome.candidate, part_, solved_.problem->catalogue()));
+      for (const auto& point : outcome.points) {
+        ranked_.push_back({o, point, &names_.back(), item_id(solved_, outcome, point.size)});
+      }
+    }
+    std::sort(ranked_.begin(), ranked_.end(), before);
+  }
+
+  void split(Result& result) {
+    std::vector<double> objectives;
+    for (const auto& one : ranked_) {
+      objectives.insert(objectives.end(), {one.point.mass, one.point.cost});
+    }
+    // Ties come back in the order of the rows, which is the canonical one.
+    const auto front_rows = front_2d(objectives);
+    std::vector<bool> on_front(ranked_.size(), false);
+    std::vector<Outcome::Point> front;
+    for (const auto row : front_rows) {
+      on_front[row] = true;
+      front.push_back(ranked_[row].point);
+      add_design(ranked_[row], result);
+      stage_[ranked_[row].outcome] = FunnelLine::Stage::front;
+    }
+    result.front_count = result.designs.size();
+    for (std::size_t row = 0; row < ranked_.size(); ++row) {
+      if (on_front[row]) {
+        continue;
+      }
+      const auto& one = ranked_[row];
+      if (is_near(one.point.mass, one.point.cost, front, settings_.near)) {
+        add_design(one, result);
+        stage_.try_emplace(one.outcome, FunnelLine::Stage::near);
+      } else {
+        result.others.push_back({solved_.outcomes[one.outcome].candidate, one.point.size,
+                                 one.point.mass, one.point.cost});
+      }
+    }
+  }
+
+  void add_design(const Ranked& one, Result& result) {
+    const auto group = solved_.outcomes[one.outcome].group;
+    result.designs.push_back(make_design(*solved_.problem, group, one.point.size));
+    check_plain_path(result.designs.back(), *solved_.problem, group, result);
+  }
+
+  void fill_funnel(Result& result) {
+    using Stage = FunnelLine::Stage;
+    auto& funnel = result.funnel;
+    funnel.considered = solved_.considered;
+    funnel.doubtful_sizes = solved_.doubtful_sizes;
+    for (const auto& [rule, count] : solved_.cannot_exist) {
+      funnel.lines.push_back({Stage::cannot_exist, std::string(name(rule)), count});
+    }
+    std::map<std::string, std::size_t> excluded;
+    std::map<std::string, std::size_t> undecided;
+    std::map<std::string, std::size_t> infeasible;
+    std::set<std::string> undecided_text;
+    std::size_t front = 0;
+    std::size_t near = 0;
+    std::size_t not_better = 0;
+    for (std::size_t o = 0; o < solved_.outcomes.size(); ++o) {
+      const auto& outcome = solved_.outcomes[o];
+      const auto stage = stage_.find(o);
+      if (outcome.kind == Outcome::Kind::undecided) {
+        ++undecided[outcome.reason];
+        undecided_text.insert(names_[o].material + ": " + outcome.reason);
+      } else if (outcome.kind == Outcome::Kind::excluded) {
+        ++excluded["value missing: " + outcome.reason];
+      } else if (outcome.kind == Outcome::Kind::infeasible) {
+        ++infeasible[outcome.reason];
+      } else if (stage == stage_.end()) {
+        ++not_better;
+      } else {
+        ++(stage->second == Stage::front ? front : near);
+      }
+    }
+    const auto add = [&](Stage stage_of, const std::map<std::string, std::size_t>& counts) {
+      std::vector<std::pair<std::string, std::size_t>> sorted(counts.begin(), counts.end());
+      std::stable_sort(sorted.begin(), sorted.end(),
+                       [](const auto& a, const auto& b) { return a.second > b.second; });
+      for (const auto& [reason, count] : sorted) {
+        funnel.lines.push_back({stage_of, reason, count});
+      }
+    };
+    add(Stage::cannot_exist, excluded);
+    add(Stage::undecided, undecided);
+    add(Stage::infeasible, infeasible);
+    funnel.lines.push_back({Stage::not_better, "", not_better});
+    funnel.lines.push_back({Stage::near, "", near});
+    funnel.lines.push_back({Stage::front, "", front});
+    result.undecided.assign(undecided_text.begin(), undecided_text.end());
+  }
+
+  void add_notes(Result& result) const {
+    if (part_.limits.column_method == ColumnMethod::euler) {
+      result.notes.emplace_back(
+          "Columns by Euler's load alone: no imperfection and no yielding are in it. It is an upper bound on "
+          "the resistance, not a check by itself.");
+    }
+    if (solved_.stopped) {
+      result.exact = false;
+      result.notes.emplace_back(
+          "Stopped before the end: designs shown are sound, but lighter or cheaper ones may be missing.");
+    }
+  }
+
+  const Part& part_;
+  const Settings& settings_;
+  Solved& solved_;
+  std::vector<CandidateNames> names_;
+  std::vector<Ranked> ranked_;
+  std::map<std::size_t, FunnelLine::Stage> stage_;
+};
+
+std::string group_label(const Solved& solved, const Outcome& outcome, const CandidateNames& labels,
+                        double size, GroupBy group_by) {
+  switch (group_by) {
+    case GroupBy::material: return labels.material;
+    case GroupBy::stock_item: {
+      const auto item = item_id(solved, outcome, size);
+      return item.empty() ? labels.material + "/" + labels.shape : labels.material + "/" + item;
+    }
+    case GroupBy::material_and_shape: return labels.material + "/" + labels.shape;
+    case GroupBy::route: return labels.route;
+  }
+  throw InternalError("fronts: unknown grouping");
+}
+
+/// The functions that the guard protects are compiled apart from it (see FloatingPointGuard).
+Result build_front(const Part& part, const Catalogue& catalogue, const Settings& settings,
+                   const RunOptions& run) {
+  auto solved = solve_candidates(part, catalogue, settings, run);
+  return FrontBuilder(part, settings, solved).run();
+}
+
+}  // namespace
+
+Result front(const Part& part, const Catalogue& catalogue, const Settings& settings,
+             const RunOptions& run) {
+  const auto start = std::chrono::steady_clock::now();
+  const FloatingPointGuard guard;
+  validate(part, catalogue, settings);
+  Result result = build_front(part, catalogue, settings, run);
+  result.telemetry.seconds =
+      std::chrono::duration<double>(std::chrono::steady_clock::now() - start).count();
+  return result;
+}
+
+std::vector<GroupedFront> fronts(const Part& part, const Catalogue& catalogue, GroupBy group_by,
+                                 const Settings& settings) {
+  const FloatingPointGuard guard;
+  validate(part, catalogue, settings);
+  const auto solved = solve_candidates(part, catalogue, settings);
+  std::vector<CandidateNames> labels;
+  labels.reserve(solved.outcomes.size());
+  std::map<std::string, std::vector<Ranked>> groups;
+  for (std::size_t o = 0; o < solved.outcomes.size(); ++o) {
+    const auto& outcome = solved.outcomes[o];
+    labels.push_back(names(outcome.candidate, part, catalogue));
+    for (const auto& point : outcome.points) {
+      groups[group_label(solved, outcome, labels.back(), point.size, group_by)].push_back(
+          {o, point, &labels.back(), item_id(solved, outcome, point.size)});
+    }
+  }
+  std::vector<GroupedFront> out;
+  for (auto& [label, points] : groups) {
+    std::sort(points.begin(), points.end(), before);
+    std::vector<double> objectives;
+    for (const auto& one : points) {
+      objectives.insert(objectives.end(), {one.point.mass, one.point.cost});
+    }
+    GroupedFront group{label, {}};
+    for (const auto row : front_2d(objectives)) {
+      const auto& one = points[row];
+      group.points.push_back({solved.outcomes[one.outcome].candidate, one.point.size,
+                              one.point.mass, one.point.cost});
+    }
+    out.push_back(std::move(group));
+  }
+  return out;
+}
+
+Design evaluate(const Part& part, const Catalogue& catalogue, const Candidate& candidate,
+                double size, const Settings& settings) {
+  const FloatingPointGuard guard;
+  validate(part, catalogue, settings);
+  if (const auto broken = first_broken_rule(candidate, part, catalogue)) {
+    throw Error({Code::conflict, std::string(name(broken->rule)), {}, {}, broken->text});
+  }
+  SizingProblem problem(part, catalogue, settings);
+  const auto& compiled = problem.add(candidate);
+  FaultList faults;
+  for (const Property property : compiled.undecided) {
+    faults.add({Code::missing, std::string(info(property).name), {}, {},
+                "The material has no value for " + std::string(info(property).name) +
+                    ", which this part needs."});
+  }
+  if (!compiled.undecided_limit.empty()) {
+    faults.add({Code::missing, compiled.undecided_limit, {}, {},
+                "The material has no value for " + compiled.undecided_limit +
+                    ", on which the part has a limit."});
+  }
+  faults.throw_if_any();
+  const auto& variable = compiled.variable;
+  const bool listed = variable.kind == Variable::Kind::continuous
+                          ? size >= variable.lower && size <= variable.upper
+                          : std::find(variable.values.begin(), variable.values.end(), size) !=
+                                variable.values.end();
+  if (!listed) {
+    throw Error({Code::out_of_range, "size", plain(size), "a size that the part asks for",
+                 "The size is not one of those that the part asks for."});
+  }
+  return make_design(problem, 0, size);
+}
+
+}  // namespace bismar

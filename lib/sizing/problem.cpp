@@ -1,0 +1,310 @@
+// SPDX-License-Identifier: MIT
+#include "sizing/problem.hpp"
+
+#include "sizing/candidate_compiler.hpp"
+
+#include <bismar/mechanics/scaled_section.hpp>
+#include <bismar/sizing/existence.hpp>
+
+#include <algorithm>
+#include <cmath>
+#include <limits>
+#include <set>
+
+namespace bismar {
+
+namespace {
+
+constexpr double infinity = std::numeric_limits<double>::infinity();
+
+MemberLimits limits_of_member(const Limits& limits) {
+  MemberLimits out;
+  out.deflection = limits.deflection;
+  out.twist = limits.twist;
+  out.height = limits.height;
+  out.width = limits.width;
+  out.wall = limits.wall;
+  out.slenderness = limits.slenderness;
+  out.column_method = limits.column_method;
+  return out;
+}
+
+/// A yes-or-no condition as a utilisation.
+double pass(bool good) { return good ? 0.0 : infinity; }
+
+}  // namespace
+
+SizingProblem::SizingProblem(const Part& part, const Catalogue& catalogue, const Settings& settings)
+    : part_(part),
+      catalogue_(catalogue),
+      settings_(settings),
+      reader_(catalogue, settings),
+      member_limits_(limits_of_member(part.limits)) {
+  for (const auto& load_case : part.body.load_cases) {
+    effects_.push_back(reduce(load_case, part.body.length));
+  }
+}
+
+const CompiledCandidate& SizingProblem::add(const Candidate& candidate) {
+  groups_.push_back(CandidateCompiler(*this, candidate).run());
+  return *groups_.back();
+}
+
+std::span<const Variable> SizingProblem::variables(std::size_t group) const {
+  return {&groups_[group]->variable, 1};
+}
+
+std::size_t SizingProblem::constraints(std::size_t group) const {
+  return groups_[group]->constraints.size();
+}
+
+Trend SizingProblem::objective_trend(std::size_t /*group*/, std::size_t /*i*/,
+                                     std::size_t /*v*/) const {
+  return Trend::rises;
+}
+
+Trend SizingProblem::utilisation_trend(std::size_t group, std::size_t i, std::size_t /*v*/) const {
+  return groups_[group]->constraints[i].trend;
+}
+
+const std::vector<StepState>& SizingProblem::states(std::size_t material) {
+  const auto [entry, added] = states_.try_emplace(material);
+  if (added) {
+    for (const auto& step : catalogue_.materials.steps(material)) {
+      entry->second.push_back(make_state(material, step.row));
+    }
+  }
+  return entry->second;
+}
+
+StepState SizingProblem::make_state(std::size_t material, std::size_t row) const {
+  const auto& material_class = catalogue_.materials.info(material).material_class;
+  StepState state;
+  state.row = row;
+  for (std::size_t c = 0; c < effects_.size(); ++c) {
+    state.cases.push_back(
+        resolve(reader_, material, row, part_.body.load_cases[c], part_.service_class));
+    fill_from_class(material, c, state.cases.back());
+  }
+  state.density = state.cases.front().member.rho.value_or(0.0);
+  if (const auto price = catalogue_.materials.value(Property::price, row)) {
+    state.price = *price;
+    state.usual_price = price->at(reader_.end(Property::price));
+    state.priced = true;
+  } else if (const auto median = reader_.class_median(Property::price, material_class)) {
+    state.price = {*median, *median};
+    state.usual_price = *median;
+    state.priced = true;
+    state.cases.front().notes.push_back(class_median_note(Property::price));
+  }
+  return state;
+}
+
+void SizingProblem::fill_from_class(std::size_t material, std::size_t load_case,
+                                    ResolvedMaterial& resolved) const {
+  if (settings_.missing != Missing::class_median) {
+    return;
+  }
+  // Whatever a limit state of this load case may read; the section is not known yet, so a tube stands for
+  // all: it has walls.
+  const auto any_section = bismar::round_tube(0.1, 0.01, Forming::unknown);
+  std::set<Symbol> wanted = {Symbol::rho};
+  for (const LimitState* state : limit_states()) {
+    if (state->applies(effects_[load_case], member_limits_, resolved.member, any_section)) {
+      const auto needs = state->needs(effects_[load_case], resolved.member);
+      wanted.insert(needs.begin(), needs.end());
+    }
+  }
+  for (const Symbol symbol : wanted) {
+    auto& value = value_of(resolved.member, symbol);
+    if (!value) {
+      value = reader_.class_median(property_of(symbol),
+                                   catalogue_.materials.info(material).material_class);
+      if (value) {
+        resolved.notes.push_back(class_median_note(property_of(symbol)));
+      }
+    }
+  }
+}
+
+void SizingProblem::multiply(std::size_t material, Symbol symbol, double factor) {
+  for (auto& state : states_[material]) {
+    for (auto& resolved : state.cases) {
+      if (auto& value = value_of(resolved.member, symbol)) {
+        *value *= factor;
+      }
+    }
+  }
+}
+
+const Piece& SizingProblem::piece_at(const CompiledCandidate& group, double x) const {
+  const auto found = std::lower_bound(group.pieces.begin(), group.pieces.end(), x,
+                                      [](const Piece& piece, double at) { return piece.upper < at; });
+  return found == group.pieces.end() ? group.pieces.back() : *found;
+}
+
+std::optional<Purchase> SizingProblem::purchase(const CompiledCandidate& group, const Piece& piece,
+                                                const SectionProperties& section,
+                                                double net_mass) const {
+  const double length = part_.body.length;
+  const Route& route = catalogue_.routes[group.candidate.route];
+  if (piece.item != nullptr) {
+    return buy_length(section.area, piece.step->density, length, piece.item->lengths,
+                      settings_.kerf);
+  }
+  if (machines_blank(route)) {
+    return piece.blank == nullptr
+               ? std::nullopt
+               : buy(*piece.blank, section, piece.step->density, length, settings_);
+  }
+  return Purchase{net_mass / (1.0 - route.scrap), 0.0, 1.0};
+}
+
+double SizingProblem::material_utilisation(const CompiledCandidate& group,
+                                           const Constraint& constraint,
+                                           const StepState& step) const {
+  const auto& info = catalogue_.materials.info(group.candidate.material);
+  const Finish* finish = group.candidate.finish == Candidate::none
+                             ? nullptr
+                             : &catalogue_.finishes[group.candidate.finish];
+  if (constraint.kind == Constraint::Kind::corrosion) {
+    const auto& medium = *part_.limits.medium;
+    // The finish decides where it states a rating; otherwise the grade's own stands.
+    if (finish != nullptr) {
+      if (const auto after = finish->corrosion_after.find(medium);
+          after != finish->corrosion_after.end()) {
+        return pass(after->second >= part_.limits.corrosion_at_least);
+      }
+    }
+    const auto own = info.corrosion.find(medium);
+    return pass(own != info.corrosion.end() && own->second >= part_.limits.corrosion_at_least);
+  }
+  if (constraint.kind == Constraint::Kind::temperature) {
+    const double service = *part_.limits.temperature;
+    const auto lowest = reader_.value(Property::service_temperature_min, step.row);
+    auto highest = reader_.value(Property::loaded_temperature_max, step.row);
+    if (!highest) {
+      highest = reader_.value(Property::service_temperature_max, step.row);
+    }
+    const bool finish_stands = finish == nullptr || !finish->service_temperature_max ||
+                               service <= *finish->service_temperature_max;
+    return pass((!lowest || service >= *lowest) && (!highest || service <= *highest) &&
+                finish_stands);
+  }
+  const auto& limit = part_.limits.properties[constraint.property_limit];
+  const auto range = limited_value(catalogue_.materials, limit, step.row);
+  double u = 0.0;
+  if (limit.at_least) {
+    const double value = limited_end(reader_, limit, *range, true);
+    u = value > 0.0 && *limit.at_least > 0.0 ? *limit.at_least / value
+                                             : pass(value >= *limit.at_least);
+  }
+  if (limit.at_most) {
+    const double value = limited_end(reader_, limit, *range, false);
+    u = std::max(u, value > 0.0 && *limit.at_most > 0.0 ? value / *limit.at_most
+                                                        : pass(value <= *limit.at_most));
+  }
+  return u;
+}
+
+void SizingProblem::evaluate_section(const CompiledCandidate& group, const Piece& piece,
+                                     const SectionProperties& section,
+                                     std::span<double> objectives,
+                                     std::span<double> utilisations) const {
+  const double length = part_.body.length;
+  std::optional<Purchase> bought;
+  double net_mass = infinity;
+  double mass = infinity;
+  double cost = infinity;
+  if (piece.step != nullptr) {
+    net_mass = piece.step->density * section.area * length;
+    bought = purchase(group, piece, section, net_mass);
+    mass = net_mass + group.cost->finish_mass(section);
+    if (bought) {
+      cost = group.cost->total({section, net_mass, *bought}, piece.step->price,
+                               piece.step->usual_price);
+    }
+  }
+  objectives[0] = mass;
+  objectives[1] = cost;
+
+  const Route& route = catalogue_.routes[group.candidate.route];
+  for (std::size_t i = 0; i < group.constraints.size(); ++i) {
+    const auto& constraint = group.constraints[i];
+    double u = 0.0;
+    switch (constraint.kind) {
+      case Constraint::Kind::thickness_limit: u = pass(piece.step != nullptr); break;
+      case Constraint::Kind::blank: u = pass(piece.step == nullptr || bought.has_value()); break;
+      case Constraint::Kind::property:
+      case Constraint::Kind::corrosion:
+      case Constraint::Kind::temperature:
+        u = piece.step == nullptr ? 0.0 : material_utilisation(group, constraint, *piece.step);
+        break;
+      case Constraint::Kind::limit_state:
+        if (piece.step != nullptr && piece.applies[i]) {
+          const auto& resolved = piece.step->cases[constraint.load_case];
+          const CheckInput input{section, resolved.member, effects_[constraint.load_case],
+                                 member_limits_, length, constraint.factor};
+          if (resolved.depth_reference > 0.0 && section.height > resolved.depth_reference &&
+              resolved.member.flexural) {
+            MemberMaterial weaker = resolved.member;
+            *weaker.flexural *=
+                std::pow(resolved.depth_reference / section.height, resolved.depth_exponent);
+            u = constraint.state->utilisation({section, weaker, effects_[constraint.load_case],
+                                               member_limits_, length, constraint.factor});
+          } else {
+            u = constraint.state->utilisation(input);
+          }
+        }
+        break;
+      case Constraint::Kind::route_wall: {
+        const auto& material = catalogue_.materials.info(group.candidate.material);
+        const auto own = route.min_wall_by_class.find(material.material_class);
+        const double least = own != route.min_wall_by_class.end() ? own->second : route.section_min;
+        u = least / section.wall;
+        break;
+      }
+      case Constraint::Kind::route_section: u = section.wall / route.section_max; break;
+      case Constraint::Kind::route_mass_min: u = route.mass_min / net_mass; break;
+      case Constraint::Kind::route_mass_max: u = net_mass / route.mass_max; break;
+      case Constraint::Kind::mass_cap: u = mass / *part_.limits.mass; break;
+      case Constraint::Kind::cost_cap: u = cost / *part_.limits.cost; break;
+    }
+    utilisations[i] = u;
+  }
+}
+
+void SizingProblem::evaluate(std::size_t group, std::span<const double> x,
+                             std::span<double> objectives, std::span<double> utilisations) const {
+  const auto& compiled = *groups_[group];
+  const Piece& piece = piece_at(compiled, x[0]);
+  if (piece.item != nullptr || x[0] == piece.size) {
+    evaluate_section(compiled, piece, piece.section, objectives, utilisations);
+  } else {
+    evaluate_section(compiled, piece, scaled(piece.section, x[0] / piece.size), objectives,
+                     utilisations);
+  }
+}
+
+void SizingProblem::evaluate_plain(std::size_t group, double x, std::span<double> objectives,
+                                   std::span<double> utilisations) const {
+  const auto one = detail(group, x);
+  evaluate_section(*groups_[group], *one.piece, one.section, objectives, utilisations);
+}
+
+SizingProblem::Detail SizingProblem::detail(std::size_t group, double x) const {
+  const auto& compiled = *groups_[group];
+  Detail out;
+  out.piece = &piece_at(compiled, x);
+  out.section = out.piece->item != nullptr
+                    ? out.piece->section
+                    : section_of(part_.body.shapes[compiled.candidate.shape],
+                                 catalogue_.routes[compiled.candidate.route], x);
+  if (out.piece->step != nullptr) {
+    out.net_mass = out.piece->step->density * out.section.area * part_.body.length;
+    out.purchase = purchase(compiled, *out.piece, out.section, out.net_mass);
+  }
+  return out;
+}
+
+}  // namespace bismar

@@ -1,0 +1,154 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include "sizing/blank.hpp"
+#include "sizing/candidate_cost.hpp"
+#include "sizing/strength.hpp"
+
+#include <bismar/solver/box_problem.hpp>
+
+#include <map>
+#include <memory>
+#include <optional>
+#include <span>
+#include <string>
+#include <vector>
+
+namespace bismar {
+
+/// A material at one thickness step, as the limit states see it in each load case.
+struct StepState {
+  std::size_t row = 0;
+  std::vector<ResolvedMaterial> cases;
+  double density = 0.0;
+  bool priced = false;  ///< Whether there is a price at all.
+  Range price;
+  double usual_price = 0.0;
+};
+
+/// One condition of a candidate that its utilisation must not exceed 1.
+struct Constraint {
+  enum class Kind : std::uint8_t {
+    property,         ///< A limit on a property of the material.
+    corrosion,
+    temperature,
+    thickness_limit,  ///< No strength is tabulated for so thick a piece.
+    blank,            ///< No bar or stock length is large enough.
+    limit_state,
+    route_wall,
+    route_section,
+    route_mass_min,
+    route_mass_max,
+    mass_cap,
+    cost_cap,
+  };
+  Kind kind = Kind::limit_state;
+  const LimitState* state = nullptr;
+  std::size_t load_case = 0;
+  double factor = 1.0;
+  std::size_t property_limit = 0;
+  Trend trend = Trend::constant;
+  std::string label;  ///< As results and messages call it.
+};
+
+/// A stretch of sizes over which everything but the size stays: strength step, blank, corner rule.
+struct Piece {
+  double lower = 0.0;  ///< Exclusive but for the first piece.
+  double upper = 0.0;  ///< Inclusive.
+  const StepState* step = nullptr;    ///< Null: thicker than the table's last limit.
+  const Blank* blank = nullptr;       ///< Machined parts.
+  const StockItem* item = nullptr;    ///< Stock.
+  SectionProperties section;          ///< At `size`; other sizes of the piece are scaled from it.
+  double size = 0.0;
+  std::vector<bool> applies;          ///< Per constraint: can this load case cause it here?
+};
+
+/// A candidate made ready for solving.
+struct CompiledCandidate {
+  Candidate candidate;
+  Variable variable;
+  std::vector<Piece> pieces;  ///< Ascending; one a value for stock.
+  std::vector<Constraint> constraints;
+  std::vector<Blank> blanks;
+  std::optional<CandidateCost> cost;
+  std::vector<Property> undecided;    ///< Needed and missing; the candidate is not solved then.
+  std::string undecided_limit;        ///< A property limit whose property has no value.
+};
+
+/// A part's sizing as the solver sees it. One group a candidate; the variable is the height of the section
+/// [m], or the index of the item for stock. Objectives: mass [kg], unit cost.
+///
+/// Why the trends hold, on each piece: dimensions are multiples of the height, so every stress is a load over
+/// a power of it and falls; mass, surface, bought mass and process time rise; ratios of walls stay.
+class SizingProblem : public BoxProblem {
+ public:
+  SizingProblem(const Part& part, const Catalogue& catalogue, const Settings& settings);
+
+  /// Adds a candidate; the returned reference holds until the next call.
+  const CompiledCandidate& add(const Candidate& candidate);
+  [[nodiscard]] const CompiledCandidate& compiled(std::size_t group) const { return *groups_[group]; }
+
+  [[nodiscard]] std::size_t groups() const override { return groups_.size(); }
+  [[nodiscard]] std::size_t objectives() const override { return 2; }
+  [[nodiscard]] std::span<const Variable> variables(std::size_t group) const override;
+  [[nodiscard]] std::size_t constraints(std::size_t group) const override;
+  [[nodiscard]] Trend objective_trend(std::size_t group, std::size_t i, std::size_t v) const override;
+  [[nodiscard]] Trend utilisation_trend(std::size_t group, std::size_t i,
+                                        std::size_t v) const override;
+  void evaluate(std::size_t group, std::span<const double> x, std::span<double> objectives,
+                std::span<double> utilisations) const override;
+
+  /// The plain path: section from its own formulas at this size, not scaled from the piece.
+  void evaluate_plain(std::size_t group, double x, std::span<double> objectives,
+                      std::span<double> utilisations) const;
+
+  /// What a design shows beyond objectives and utilisations.
+  struct Detail {
+    SectionProperties section;
+    const Piece* piece = nullptr;
+    double net_mass = 0.0;
+    std::optional<Purchase> purchase;
+  };
+  [[nodiscard]] Detail detail(std::size_t group, double x) const;
+
+  /// Multiplies a value of a material in every state, to ask what a better one would change.
+  void multiply(std::size_t material, Symbol symbol, double factor);
+
+  [[nodiscard]] const Part& part() const { return part_; }
+  [[nodiscard]] const Catalogue& catalogue() const { return catalogue_; }
+  [[nodiscard]] const Settings& settings() const { return settings_; }
+  [[nodiscard]] const PropertyReader& reader() const { return reader_; }
+  [[nodiscard]] std::span<const LoadEffects> effects() const { return effects_; }
+  [[nodiscard]] const MemberLimits& member_limits() const { return member_limits_; }
+
+ private:
+  friend class CandidateCompiler;
+
+  /// States of a material at each of its thickness steps, made once.
+  const std::vector<StepState>& states(std::size_t material);
+  [[nodiscard]] StepState make_state(std::size_t material, std::size_t row) const;
+  void fill_from_class(std::size_t material, std::size_t load_case, ResolvedMaterial& resolved) const;
+  [[nodiscard]] const Piece& piece_at(const CompiledCandidate& group, double x) const;
+  [[nodiscard]] std::optional<Purchase> purchase(const CompiledCandidate& group, const Piece& piece,
+                                                 const SectionProperties& section,
+                                                 double net_mass) const;
+  void evaluate_section(const CompiledCandidate& group, const Piece& piece,
+                        const SectionProperties& section, std::span<double> objectives,
+                        std::span<double> utilisations) const;
+  [[nodiscard]] double material_utilisation(const CompiledCandidate& group, const Constraint& constraint,
+                                            const StepState& step) const;
+
+  const Part& part_;
+  const Catalogue& catalogue_;
+  const Settings& settings_;
+  PropertyReader reader_;
+  MemberLimits member_limits_;
+  std::vector<LoadEffects> effects_;
+  std::map<std::size_t, std::vector<StepState>> states_;
+  std::vector<std::unique_ptr<CompiledCandidate>> groups_;
+};
+
+/// Section of a parametric shape at one height, by its own formulas.
+[[nodiscard]] SectionProperties section_of(const Shape& shape, const Route& route, double height);
+
+}  // namespace bismar

@@ -1,0 +1,65 @@
+// SPDX-License-Identifier: MIT
+#pragma once
+
+#include <bismar/mechanics/limit_state.hpp>
+#include <bismar/sizing/part.hpp>
+
+#include <map>
+#include <optional>
+#include <set>
+#include <string>
+#include <utility>
+#include <vector>
+
+namespace bismar {
+
+[[nodiscard]] bool is_metal(std::string_view material_class);
+[[nodiscard]] bool is_cast(const MaterialInfo& material);
+/// The mark of a value that was filled in: every use is flagged.
+[[nodiscard]] std::string class_median_note(Property property);
+/// The table property behind a symbol that a limit state reads.
+[[nodiscard]] Property property_of(Symbol symbol);
+
+[[nodiscard]] std::optional<double>& value_of(MemberMaterial& material, Symbol symbol);
+[[nodiscard]] const std::optional<double>& value_of(const MemberMaterial& material, Symbol symbol);
+
+/// Reads properties by a study's rules: range ends, and what to do where a value is missing.
+class PropertyReader {
+ public:
+  PropertyReader(const Catalogue& catalogue, const Settings& settings)
+      : catalogue_(catalogue), settings_(settings) {}
+
+  [[nodiscard]] RangeEnd end(Property property) const;
+  [[nodiscard]] std::optional<double> value(Property property, std::size_t row) const;
+  /// What stands in for a missing value under Missing::class_median; nothing under the other policies.
+  [[nodiscard]] std::optional<double> class_median(Property property,
+                                                   const std::string& material_class) const;
+  [[nodiscard]] const Catalogue& catalogue() const { return catalogue_; }
+  [[nodiscard]] const Settings& settings() const { return settings_; }
+
+ private:
+  const Catalogue& catalogue_;
+  const Settings& settings_;
+  mutable std::map<std::pair<std::string, Property>, std::optional<double>> medians_;
+};
+
+/// A material as the limit states see it, in one load case.
+struct ResolvedMaterial {
+  MemberMaterial member;
+  std::set<Property> missing;       ///< Needed by the strength rules and not there.
+  std::vector<std::string> notes;   ///< What was done to its values.
+  double depth_reference = 0.0;     ///< LVL: bending strength falls above this depth [m]; 0 = no size effect.
+  double depth_exponent = 0.0;
+};
+
+/// Which strength counts, by rule:
+/// - ductile (a yield value, elongation at least 5 %, wrought metal 2 %): von Mises against yield;
+/// - anisotropic rows: direct and shear stress apart;
+/// - otherwise brittle: largest principal stress.
+/// Typical strengths are divided by 1.25 and marked. Graded timber: k_mod / gamma_M of its row. Lasting
+/// loads: creep and long-term factors of the row, otherwise undecided beyond an hour.
+[[nodiscard]] ResolvedMaterial resolve(const PropertyReader& reader, std::size_t material,
+                                       std::size_t row, const LoadCase& load_case,
+                                       ServiceClass service_class);
+
+}  // namespace bismar

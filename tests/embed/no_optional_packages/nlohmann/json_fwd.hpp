@@ -1,0 +1,3 @@
+// SPDX-License-Identifier: MIT
+// Stands before the real header where the core is built alone.
+#error "bismar::core must not include <nlohmann/json_fwd.hpp>"

@@ -18,7 +18,7 @@ echo "Building the program in $build_dir"
 mkdir -p "$build_dir"
 if ! {
   cmake -S "$source_dir" -B "$build_dir" -G Ninja -DCMAKE_BUILD_TYPE=Release \
-    -DBISMAR_BUILD_TESTS=OFF -DBISMAR_WITH_EIGEN=OFF &&
+    -DBISMAR_BUILD_TESTS=OFF -DBISMAR_WITH_PAGMO=OFF -DBISMAR_WITH_EIGEN=OFF &&
     cmake --build "$build_dir" --parallel "$jobs" --target bismar_cli
 } >"$build_dir/build.log" 2>&1; then
   tail -n 40 "$build_dir/build.log" >&2

@@ -4,6 +4,7 @@
 #include <algorithm>
 #include <filesystem>
 #include <functional>
+#include <iterator>
 #include <set>
 #include <system_error>
 #include <utility>
@@ -179,7 +180,8 @@ Catalogue read_catalogue(const std::string& folder) {
   faults.throw_if_any();
 
   catalogue.currency = catalogue.materials.currency();
-  catalogue.warnings = unused_names(catalogue);
+  catalogue.warnings = catalogue.materials.warnings();
+  std::ranges::move(unused_names(catalogue), std::back_inserter(catalogue.warnings));
   return catalogue;
 }
 

@@ -38,8 +38,12 @@ std::size_t utf8_length(std::string_view text, std::size_t at) {
     return i < text.size() && byte(i) >= low && byte(i) <= high;
   };
   const unsigned lead = byte(at);
-  if (lead < 0x80) return 1;
-  if (lead >= 0xC2 && lead <= 0xDF) return follows(at + 1) ? 2 : 0;
+  if (lead < 0x80) {
+    return 1;
+  }
+  if (lead >= 0xC2 && lead <= 0xDF) {
+    return follows(at + 1) ? 2 : 0;
+  }
   if (lead >= 0xE0 && lead <= 0xEF) {
     const unsigned low = lead == 0xE0 ? 0xA0 : 0x80;
     const unsigned high = lead == 0xED ? 0x9F : 0xBF;
@@ -66,9 +70,15 @@ class CsvParser {
   }
 
   void run() {
-    if (!is_text()) return;
-    if (std::string_view(text_).substr(0, 3) == "\xEF\xBB\xBF") at_ = 3;
-    while (at_ < end_) read_row();
+    if (!is_text()) {
+      return;
+    }
+    if (std::string_view(text_).substr(0, 3) == "\xEF\xBB\xBF") {
+      at_ = 3;
+    }
+    while (at_ < end_) {
+      read_row();
+    }
     if (document_.columns_ == 0 && !malformed_) {
       report(Code::empty,
              1,
@@ -90,25 +100,33 @@ class CsvParser {
       report(Code::table_malformed, 1, 1, "the file is UTF-16 text: save it as \"CSV UTF-8\".");
       return false;
     }
-    std::size_t line = 1;
-    std::size_t line_start = 0;
     for (std::size_t i = 0; i < text.size();) {
-      const std::size_t length = utf8_length(text, i);
+      const bool is_ascii = text[i] > '\0' && static_cast<unsigned char>(text[i]) < 0x80U;
+      const std::size_t length = is_ascii ? 1 : utf8_length(text, i);
       if (text[i] == '\0' || length == 0) {
-        const std::string byte = std::to_string(i - line_start + 1);
-        const char* what = text[i] == '\0'
-                               ? " of the line is a NUL: this is no CSV text."
-                               : " of the line is not UTF-8: save the file as \"CSV UTF-8\".";
-        report(Code::table_malformed, line, column_at(line_start, i), "byte " + byte + what);
+        report_byte(i);
         return false;
-      }
-      if (is_line_end(i)) {
-        ++line;
-        line_start = i + 1;
       }
       i += length;
     }
     return true;
+  }
+
+  void report_byte(std::size_t at) {
+    std::size_t line = 1;
+    std::size_t line_start = 0;
+    for (std::size_t i = 0; i < at; ++i) {
+      if (!is_line_end(i)) {
+        continue;
+      }
+      ++line;
+      line_start = i + 1;
+    }
+    const std::string byte = std::to_string(at - line_start + 1);
+    const char* what = text_[at] == '\0'
+                           ? " of the line is a NUL: this is no CSV text."
+                           : " of the line is not UTF-8: save the file as \"CSV UTF-8\".";
+    report(Code::table_malformed, line, column_at(line_start, at), "byte " + byte + what);
   }
 
   [[nodiscard]] bool is_line_end(std::size_t i) const {
@@ -133,10 +151,14 @@ class CsvParser {
           holds_something || quoted || !catalogue::trim(document_.view(piece)).empty();
       row_.push_back(piece);
       more = at_ < end_ && text_[at_] == delimiter_;
-      if (more) ++at_;
+      if (more) {
+        ++at_;
+      }
     }
     pass_line_end();
-    if (!holds_something) return;
+    if (!holds_something) {
+      return;
+    }
     if (document_.columns_ == 0) {
       take_header(row_line);
     } else {
@@ -145,8 +167,12 @@ class CsvParser {
   }
 
   void pass_line_end() {
-    if (at_ >= end_) return;
-    if (text_[at_] == '\r' && at_ + 1 < end_ && text_[at_ + 1] == '\n') ++at_;
+    if (at_ >= end_) {
+      return;
+    }
+    if (text_[at_] == '\r' && at_ + 1 < end_ && text_[at_ + 1] == '\n') {
+      ++at_;
+    }
     ++at_;
     ++line_;
   }
@@ -159,7 +185,9 @@ class CsvParser {
   CsvDocument::Piece read_plain() {
     const std::size_t begin = at_;
     bool quote = false;
-    for (; at_ < end_ && !at_cell_end(); ++at_) quote = quote || text_[at_] == '"';
+    for (; at_ < end_ && !at_cell_end(); ++at_) {
+      quote = quote || text_[at_] == '"';
+    }
     if (quote) {
       report(Code::table_malformed,
              line_,
@@ -176,7 +204,9 @@ class CsvParser {
     bool doubled = false;
     while (at_ < end_) {
       if (text_[at_] != '"') {
-        if (is_line_end(at_)) ++line_;
+        if (is_line_end(at_)) {
+          ++line_;
+        }
         ++at_;
       } else if (at_ + 1 < end_ && text_[at_ + 1] == '"') {
         doubled = true;
@@ -212,7 +242,9 @@ class CsvParser {
     const std::size_t start = text_.size();
     for (std::size_t i = begin; i < close; ++i) {
       text_ += text_[i];
-      if (text_[i] == '"') ++i;
+      if (text_[i] == '"') {
+        ++i;
+      }
     }
     return {start, text_.size()};
   }
@@ -224,9 +256,13 @@ class CsvParser {
     std::unordered_map<std::string, std::size_t> first;
     for (std::size_t i = 0; i < row_.size(); ++i) {
       const std::string key = catalogue::folded(document_.view(row_[i]));
-      if (key.empty()) continue;
+      if (key.empty()) {
+        continue;
+      }
       const auto [known, is_new] = first.emplace(key, i);
-      if (is_new) continue;
+      if (is_new) {
+        continue;
+      }
       report(Code::duplicate,
              line,
              i + 1,
@@ -292,11 +328,15 @@ std::string CsvDocument::where_header(std::size_t column) const {
 }
 
 CsvWriter::CsvWriter(char delimiter) : delimiter_(delimiter) {
-  if (!is_usable_delimiter(delimiter)) throw Error(bad_delimiter(delimiter));
+  if (!is_usable_delimiter(delimiter)) {
+    throw Error(bad_delimiter(delimiter));
+  }
 }
 
 void CsvWriter::add_cell(std::string_view cell, bool first) {
-  if (!first) text_ += delimiter_;
+  if (!first) {
+    text_ += delimiter_;
+  }
   const auto special = [&](char c) {
     return c == delimiter_ || c == '"' || c == '\n' || c == '\r';
   };
@@ -312,7 +352,9 @@ void CsvWriter::add_cell(std::string_view cell, bool first) {
   text_ += '"';
   for (const char c : cell) {
     text_ += c;
-    if (c == '"') text_ += c;
+    if (c == '"') {
+      text_ += c;
+    }
   }
   text_ += '"';
 }
@@ -321,8 +363,12 @@ void CsvWriter::add_row(std::span<const std::string_view> cells) {
   // A row of empty cells alone would be no row for the reader.
   const bool all_empty =
       std::all_of(cells.begin(), cells.end(), [](std::string_view cell) { return cell.empty(); });
-  for (std::size_t i = 0; i < cells.size(); ++i) add_cell(cells[i], i == 0);
-  if (all_empty && !cells.empty()) text_.insert(text_.size() - (cells.size() - 1), "\"\"");
+  for (std::size_t i = 0; i < cells.size(); ++i) {
+    add_cell(cells[i], i == 0);
+  }
+  if (all_empty && !cells.empty()) {
+    text_.insert(text_.size() - (cells.size() - 1), "\"\"");
+  }
   text_ += '\n';
 }
 
@@ -342,18 +388,26 @@ std::string read_table_file(const std::string& path) {
     return Error(std::move(fault));
   };
   std::error_code status_error;
-  if (std::filesystem::is_directory(path, status_error)) throw unreadable("it is a folder");
+  if (std::filesystem::is_directory(path, status_error)) {
+    throw unreadable("it is a folder");
+  }
   const auto close = [](std::FILE* file) { std::fclose(file); };
   const std::unique_ptr<std::FILE, decltype(close)> file(std::fopen(path.c_str(), "rb"), close);
-  if (!file) throw unreadable(std::generic_category().message(errno));
+  if (!file) {
+    throw unreadable(std::generic_category().message(errno));
+  }
   std::string text;
   const auto size = std::filesystem::file_size(path, status_error);
-  if (!status_error) text.reserve(static_cast<std::size_t>(size));
+  if (!status_error) {
+    text.reserve(static_cast<std::size_t>(size));
+  }
   char block[65536];
   while (const std::size_t read = std::fread(block, 1, sizeof block, file.get())) {
     text.append(block, read);
   }
-  if (std::ferror(file.get()) != 0) throw unreadable("reading failed half way");
+  if (std::ferror(file.get()) != 0) {
+    throw unreadable("reading failed half way");
+  }
   return text;
 }
 

@@ -34,7 +34,9 @@ std::string bounds_text(const catalogue::PropertyLimits& limits, double greatest
     text = (limits.above_least ? "above " : "at least ") + format_number(limits.least);
   }
   if (std::isfinite(greatest)) {
-    if (!text.empty()) text += " and ";
+    if (!text.empty()) {
+      text += " and ";
+    }
     text += (limits.below_greatest ? "below " : "at most ") + format_number(greatest);
   }
   return text;
@@ -57,7 +59,9 @@ class MaterialAssembly {
       faults_.add(
           Code::empty, builder_.table_name_, "the table has no materials: add at least one.");
     }
-    for (const Row& row : builder_.rows_) check(row);
+    for (const Row& row : builder_.rows_) {
+      check(row);
+    }
     group();
     faults_.throw_if_any();
     fill();
@@ -75,7 +79,9 @@ class MaterialAssembly {
   // ---------------------------------------------------------------------------
 
   [[nodiscard]] std::string place(const Row& row) const {
-    if (row.line == 0) return builder_.table_name_ + ": material " + quoted(row.info.id);
+    if (row.line == 0) {
+      return builder_.table_name_ + ": material " + quoted(row.info.id);
+    }
     return builder_.table_name_ + ':' + std::to_string(row.line);
   }
 
@@ -96,7 +102,9 @@ class MaterialAssembly {
   /// In the usual unit, as a person would write it.
   [[nodiscard]] std::string shown(Property property, double value) const {
     const PropertyInfo& known = info(property);
-    if (!std::isfinite(value)) return "a value that is not finite";
+    if (!std::isfinite(value)) {
+      return "a value that is not finite";
+    }
     if (property == Property::price) {
       return format_number(value) + ' ' + builder_.currency_ + "/kg";
     }
@@ -123,7 +131,9 @@ class MaterialAssembly {
   // ------------------------------------------------------------------------------------
 
   void check(const Row& row) {
-    if (row.info.id.empty()) fault(row, Code::missing, "the material has no id.");
+    if (row.info.id.empty()) {
+      fault(row, Code::missing, "the material has no id.");
+    }
     if (row.info.material_class.empty()) {
       fault(row,
             Code::missing,
@@ -136,7 +146,9 @@ class MaterialAssembly {
     } else if (has_limit && row.above >= *row.up_to) {
       fault(row, Code::conflict, "the lower thickness limit is not below the upper one.");
     }
-    for (const auto& [property, range] : row.values) check_value(row, property, range);
+    for (const auto& [property, range] : row.values) {
+      check_value(row, property, range);
+    }
     for (const auto& [name, range] : row.extras) {
       if (!is_finite(range)) {
         fault(row, Code::not_finite, quoted(name) + " is not finite: leave out what is not known.");
@@ -191,7 +203,9 @@ class MaterialAssembly {
 
   [[nodiscard]] static const Range* value(const Row& row, Property property) {
     const auto found = row.values.find(property);
-    if (found == row.values.end() || !is_finite(found->second)) return nullptr;
+    if (found == row.values.end() || !is_finite(found->second)) {
+      return nullptr;
+    }
     return &found->second;
   }
 
@@ -199,10 +213,14 @@ class MaterialAssembly {
   void check_pair(const Row& row, Property small, Property large) {
     const Range* low = value(row, small);
     const Range* high = value(row, large);
-    if (low == nullptr || high == nullptr) return;
+    if (low == nullptr || high == nullptr) {
+      return;
+    }
     const bool both_ranges = low->low < low->high && high->low < high->high;
     const bool low_ends = low->low > high->low;
-    if (!low_ends && !(both_ranges && low->high > high->high)) return;
+    if (!low_ends && !(both_ranges && low->high > high->high)) {
+      return;
+    }
     fault(row,
           small,
           Code::conflict,
@@ -215,10 +233,14 @@ class MaterialAssembly {
     const Range* E = value(row, Property::youngs_modulus);
     const Range* G = value(row, Property::shear_modulus);
     const Range* nu = value(row, Property::poisson_ratio);
-    if (E == nullptr || G == nullptr || nu == nullptr || row.info.in_plane_only) return;
+    if (E == nullptr || G == nullptr || nu == nullptr || row.info.in_plane_only) {
+      return;
+    }
     const double expected = E->mid() / (2.0 * (1.0 + nu->mid()));
     const double deviation = G->mid() / expected - 1.0;
-    if (!std::isfinite(deviation) || std::abs(deviation) <= shear_modulus_tolerance) return;
+    if (!std::isfinite(deviation) || std::abs(deviation) <= shear_modulus_tolerance) {
+      return;
+    }
     warn(row,
          Property::shear_modulus,
          shown(Property::shear_modulus, G->mid()) + " is " +
@@ -237,13 +259,17 @@ class MaterialAssembly {
            Property::elongation,
            "0 beside a yield strength: leave the cell empty where the elongation is not known.");
     }
-    if (E == nullptr || (elongation != nullptr && elongation->high >= 1.0)) return;
+    if (E == nullptr || (elongation != nullptr && elongation->high >= 1.0)) {
+      return;
+    }
     for (const Property strength : {Property::yield_strength,
                                     Property::tensile_strength,
                                     Property::compressive_strength,
                                     Property::flexural_strength}) {
       const Range* found = value(row, strength);
-      if (found == nullptr || found->low <= E->high) continue;
+      if (found == nullptr || found->low <= E->high) {
+        continue;
+      }
       warn(row,
            strength,
            shown(strength, found->low) +
@@ -258,7 +284,9 @@ class MaterialAssembly {
     std::vector<std::vector<std::size_t>> members;
     for (std::size_t i = 0; i < builder_.rows_.size(); ++i) {
       const auto [known, is_new] = table_.by_id_.emplace(builder_.rows_[i].info.id, members.size());
-      if (is_new) members.emplace_back();
+      if (is_new) {
+        members.emplace_back();
+      }
       members[known->second].push_back(i);
     }
     table_.materials_.resize(members.size());
@@ -275,7 +303,9 @@ class MaterialAssembly {
   void join(std::size_t material, std::vector<std::size_t>& members) {
     const std::vector<Row>& rows = builder_.rows_;
     const Row& first = rows[members.front()];
-    for (std::size_t i = 1; i < members.size(); ++i) compare(first, rows[members[i]]);
+    for (std::size_t i = 1; i < members.size(); ++i) {
+      compare(first, rows[members[i]]);
+    }
     std::stable_sort(members.begin(), members.end(), [&](std::size_t a, std::size_t b) {
       return limit(rows[a]) < limit(rows[b]);
     });
@@ -316,10 +346,15 @@ class MaterialAssembly {
       all_same = all_same && row.info.notes == first;
       const bool goes_on =
           i + 1 < members.size() && builder_.rows_[members[i + 1]].info.notes == row.info.notes;
-      if (goes_on || row.info.notes.empty()) continue;
-      if (!text.empty()) text += "; ";
-      if (row.up_to && std::isfinite(*row.up_to))
+      if (goes_on || row.info.notes.empty()) {
+        continue;
+      }
+      if (!text.empty()) {
+        text += "; ";
+      }
+      if (row.up_to && std::isfinite(*row.up_to)) {
         text += "up to " + format_quantity(*row.up_to, "mm") + ": ";
+      }
       text += row.info.notes;
     }
     return all_same ? first : text;
@@ -341,15 +376,21 @@ class MaterialAssembly {
         {a.corrosion == b.corrosion, "corrosion"},
     }};
     for (const auto& [is_same, name] : fields) {
-      if (!is_same) fault(row, Code::conflict, differs(first, row, quoted(name)));
+      if (!is_same) {
+        fault(row, Code::conflict, differs(first, row, quoted(name)));
+      }
     }
     for (const PropertyInfo& known : properties()) {
-      if (known.steps_with_thickness) continue;
+      if (known.steps_with_thickness) {
+        continue;
+      }
       const auto one = first.values.find(known.property);
       const auto other = row.values.find(known.property);
       const bool is_in_one = one != first.values.end();
       const bool is_in_other = other != row.values.end();
-      if (is_in_one == is_in_other && (!is_in_one || one->second == other->second)) continue;
+      if (is_in_one == is_in_other && (!is_in_one || one->second == other->second)) {
+        continue;
+      }
       faults_.add(Code::conflict,
                   place(row, known.property),
                   differs(first, row, quoted(header(known.property))));
@@ -381,7 +422,9 @@ class MaterialAssembly {
       Row& row = builder_.rows_[i];
       for (const auto& [property, range] : row.values) {
         std::vector<Range>& column = table_.columns_[static_cast<std::size_t>(property)];
-        if (column.empty()) column.assign(n, {not_a_number, not_a_number});
+        if (column.empty()) {
+          column.assign(n, {not_a_number, not_a_number});
+        }
         column[i] = range;
       }
       for (const auto& [name, range] : row.extras) {
@@ -393,7 +436,9 @@ class MaterialAssembly {
       }
       for (auto& [name, text] : row.texts) {
         const auto [known, is_new] = text_index.emplace(name, table_.texts_.size());
-        if (is_new) table_.texts_.push_back({name, std::vector<std::string>(n)});
+        if (is_new) {
+          table_.texts_.push_back({name, std::vector<std::string>(n)});
+        }
         table_.texts_[known->second].values[i] = std::move(text);
       }
       MaterialTable::RowInfo& info = table_.rows_[i];

@@ -20,15 +20,23 @@ std::string_view without_unit(std::string_view header) {
 }
 
 std::optional<Range> present(const std::vector<Range>& values, std::size_t row) {
-  if (row >= values.size() || std::isnan(values[row].low)) return std::nullopt;
+  if (row >= values.size() || std::isnan(values[row].low)) {
+    return std::nullopt;
+  }
   return values[row];
 }
 
 std::optional<Basis> basis_word(std::string_view text) {
   const std::string word = folded(text);
-  if (word == "minimum") return Basis::minimum;
-  if (word == "typical") return Basis::typical;
-  if (word == "indicative") return Basis::indicative;
+  if (word == "minimum") {
+    return Basis::minimum;
+  }
+  if (word == "typical") {
+    return Basis::typical;
+  }
+  if (word == "indicative") {
+    return Basis::indicative;
+  }
   return std::nullopt;
 }
 
@@ -64,21 +72,27 @@ std::optional<Range> MaterialTable::extra(std::string_view name, std::size_t row
 
 std::vector<std::string> MaterialTable::extra_names() const {
   std::vector<std::string> names;
-  for (const ExtraColumn& column : extras_) names.push_back(column.name);
+  for (const ExtraColumn& column : extras_) {
+    names.push_back(column.name);
+  }
   return names;
 }
 
 std::string_view MaterialTable::text(std::string_view name, std::size_t row) const {
   const std::string wanted = folded(name);
   for (const TextColumn& column : texts_) {
-    if (wanted == folded(column.name)) return column.values[row];
+    if (wanted == folded(column.name)) {
+      return column.values[row];
+    }
   }
   return {};
 }
 
 std::vector<std::string> MaterialTable::text_names() const {
   std::vector<std::string> names;
-  for (const TextColumn& column : texts_) names.push_back(column.name);
+  for (const TextColumn& column : texts_) {
+    names.push_back(column.name);
+  }
   return names;
 }
 
@@ -114,7 +128,9 @@ Provenance MaterialTable::provenance(Property property, std::size_t row) const {
 std::optional<Provenance> MaterialTable::extra_provenance(std::string_view name,
                                                           std::size_t row) const {
   const ExtraColumn* column = find_extra(name);
-  if (column == nullptr) return std::nullopt;
+  if (column == nullptr) {
+    return std::nullopt;
+  }
   Provenance provenance = row_provenance(row);
   provenance.column = column->name;
   return provenance;
@@ -162,7 +178,9 @@ void MaterialTableBuilder::add_columns(std::span<const MaterialInfo> infos,
     row.info = infos[material];
     for (std::size_t i = 0; i < properties.size(); ++i) {
       const double value = values[i][material];
-      if (!std::isnan(value)) row.values[properties[i]] = {value, value};
+      if (!std::isnan(value)) {
+        row.values[properties[i]] = {value, value};
+      }
     }
     rows_.push_back(std::move(row));
   }

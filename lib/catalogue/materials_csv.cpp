@@ -41,7 +41,9 @@ std::string slug(std::string_view text) {
       result += '-';
     }
   }
-  while (!result.empty() && result.back() == '-') result.pop_back();
+  while (!result.empty() && result.back() == '-') {
+    result.pop_back();
+  }
   return result;
 }
 
@@ -60,10 +62,17 @@ class MaterialReader {
                            *index + 1);
       }
     }
-    for (const std::string& note : table_.notes()) builder.add_warning(note);
-    for (std::size_t row = 0; row < table_.rows(); ++row) builder.add(read_row(row));
+    for (const std::string& note : table_.notes()) {
+      builder.add_warning(note);
+    }
+    builder.reserve(table_.rows());
+    for (std::size_t row = 0; row < table_.rows(); ++row) {
+      builder.add(read_row(row));
+    }
     // What the rows mean can be checked although some cells are faulty: they read as missing.
-    if (faults_.empty()) return builder.build();
+    if (faults_.empty()) {
+      return builder.build();
+    }
     if (table_.rows() > 0) {
       try {
         static_cast<void>(builder.build());
@@ -113,7 +122,9 @@ class MaterialReader {
     }
     for (const PropertyInfo& known : properties()) {
       const std::string name = std::string(known.name) + " basis";
-      if (table_.has_column(name)) texts_.push_back({name, table_.text_column(name)});
+      if (table_.has_column(name)) {
+        texts_.push_back({name, table_.text_column(name)});
+      }
     }
     table_.finish_columns();
     for (const TableReader::UnknownColumn& unknown : table_.unknown_columns()) {
@@ -140,11 +151,15 @@ class MaterialReader {
       }
     }
     for (const ExtraColumn& extra : extras_) {
-      if (const auto range = table_.range(row, extra.column)) result.extras[extra.name] = *range;
+      if (const auto range = table_.range(row, extra.column)) {
+        result.extras[extra.name] = *range;
+      }
     }
     for (const TextColumn& text : texts_) {
       const std::string_view cell = table_.text(row, text.column);
-      if (!cell.empty()) result.texts[text.name] = std::string(cell);
+      if (!cell.empty()) {
+        result.texts[text.name] = std::string(cell);
+      }
     }
     read_seen(row, result);
     read_estimated(row, result);
@@ -192,7 +207,9 @@ class MaterialReader {
   std::optional<Property> listed_property(std::size_t row,
                                           const Column& column,
                                           std::string_view name) {
-    if (const auto found = property(name)) return found;
+    if (const auto found = property(name)) {
+      return found;
+    }
     table_.add_fault(
         row,
         *column.index,
@@ -214,10 +231,14 @@ class MaterialReader {
       const std::string key(catalogue::trim(std::string_view(item).substr(0, colon)));
       for (const std::string_view word :
            catalogue::split(std::string_view(item).substr(colon + 1), ',')) {
-        if (folded(word) == "thickness limit") continue;
+        if (folded(word) == "thickness limit") {
+          continue;
+        }
         const auto [name, part] = split_seen(word);
         const auto found = listed_property(row, seen_, name);
-        if (found) add_seen(result, *found, part, key);
+        if (found) {
+          add_seen(result, *found, part, key);
+        }
       }
     }
   }
@@ -240,20 +261,26 @@ class MaterialReader {
     static constexpr std::array<std::string_view, 4> remarks = {
         "", " (low end)", " (high end)", " (a value within)"};
     std::string& keys = result.keys[seen];
-    if (!keys.empty()) keys += ", ";
+    if (!keys.empty()) {
+      keys += ", ";
+    }
     keys += key + std::string(remarks[static_cast<std::size_t>(part)]);
     const RangeEnd used = info(seen).default_end;
     const bool counts = part == SeenPart::whole ||
                         (part == SeenPart::low && used == RangeEnd::low) ||
                         (part == SeenPart::high && used == RangeEnd::high);
-    if (counts) result.evidence[seen] = Evidence::seen;
+    if (counts) {
+      result.evidence[seen] = Evidence::seen;
+    }
   }
 
   void read_estimated(std::size_t row, MaterialTableBuilder::Row& result) {
     for (const std::string& name : table_.list(row, estimated_)) {
       const auto found = listed_property(row, estimated_, name);
-      if (!found) continue;
-      if (result.evidence.count(*found) != 0) {
+      if (!found) {
+        continue;
+      }
+      if (result.evidence.contains(*found)) {
         table_.add_fault(row,
                          *estimated_.index,
                          Code::conflict,
@@ -266,7 +293,9 @@ class MaterialReader {
   /// A required cell that is empty was reported with its column already.
   void append_unreported(const Error& error) {
     for (const Fault& fault : error.faults()) {
-      if (fault.code != Code::missing) faults_.add(fault);
+      if (fault.code != Code::missing) {
+        faults_.add(fault);
+      }
     }
   }
 

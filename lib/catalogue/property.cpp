@@ -174,8 +174,12 @@ constexpr std::array<catalogue::PropertyLimits, property_count> all_limits = {{
 
 constexpr bool in_order() {
   for (std::size_t i = 0; i < property_count; ++i) {
-    if (static_cast<std::size_t>(infos[i].property) != i) return false;
-    if (static_cast<std::size_t>(all_limits[i].property) != i) return false;
+    if (static_cast<std::size_t>(infos[i].property) != i) {
+      return false;
+    }
+    if (static_cast<std::size_t>(all_limits[i].property) != i) {
+      return false;
+    }
   }
   return true;
 }
@@ -188,6 +192,11 @@ std::span<const PropertyInfo> properties() { return infos; }
 const PropertyInfo& info(Property property) { return infos.at(static_cast<std::size_t>(property)); }
 
 std::optional<Property> property(std::string_view name) {
+  for (const PropertyInfo& known : infos) {
+    if (name == known.name) {
+      return known.property;
+    }
+  }
   const std::string wanted = catalogue::folded(name);
   const auto is_same = [](char folded, char known) {
     return folded == (known >= 'A' && known <= 'Z' ? static_cast<char>(known - 'A' + 'a') : known);

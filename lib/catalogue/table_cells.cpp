@@ -58,7 +58,9 @@ std::vector<std::string> TableReader::list(std::size_t row, const Column& column
 }
 
 std::vector<std::string> TableReader::required_list(std::size_t row, const Column& column) {
-  if (required_text(row, column).empty()) return {};
+  if (required_text(row, column).empty()) {
+    return {};
+  }
   return list(row, column);
 }
 
@@ -72,14 +74,20 @@ std::optional<std::size_t> TableReader::word(std::size_t row,
                                              const Column& column,
                                              std::span<const std::string_view> words) {
   const std::string_view cell = text(row, column);
-  if (cell.empty()) return std::nullopt;
+  if (cell.empty()) {
+    return std::nullopt;
+  }
   for (std::size_t i = 0; i < words.size(); ++i) {
-    if (cell == words[i]) return i;
+    if (cell == words[i]) {
+      return i;
+    }
   }
   const std::string wanted = folded(cell);
   std::string allowed;
   for (std::size_t i = 0; i < words.size(); ++i) {
-    if (wanted == folded(words[i])) return i;
+    if (wanted == folded(words[i])) {
+      return i;
+    }
     allowed += (i == 0 ? "" : i + 1 == words.size() ? " or " : ", ") + std::string(words[i]);
   }
   add_cell_fault(
@@ -95,7 +103,9 @@ std::optional<Range> TableReader::number(std::size_t row,
                                          QuantityKind kind,
                                          bool may_be_range) {
   const std::string_view cell = trim(document_.cell(row, part.index));
-  if (cell.empty()) return std::nullopt;
+  if (cell.empty()) {
+    return std::nullopt;
+  }
   const auto refuse = [&](const std::string& message, const char* expected) {
     add_cell_fault(row, part.index, cell_fault(message, expected));
     return std::nullopt;
@@ -132,13 +142,21 @@ std::optional<Range> TableReader::number(std::size_t row,
 }
 
 std::optional<Range> TableReader::range(std::size_t row, const NumberColumn& column) {
-  if (column.whole) return number(row, *column.whole, column.kind, true);
-  if (!column.low) return std::nullopt;
+  if (column.whole) {
+    return number(row, *column.whole, column.kind, true);
+  }
+  if (!column.low) {
+    return std::nullopt;
+  }
   const std::optional<Range> low = number(row, *column.low, column.kind, false);
-  if (!column.high) return low;
+  if (!column.high) {
+    return low;
+  }
   const std::optional<Range> high = number(row, *column.high, column.kind, false);
   if (low && high) {
-    if (low->low <= high->low) return Range{low->low, high->low};
+    if (low->low <= high->low) {
+      return Range{low->low, high->low};
+    }
     add_cell_fault(row,
                    column.high->index,
                    cell_fault("the upper end is below the lower end in " +
@@ -164,8 +182,9 @@ std::optional<double> TableReader::value(std::size_t row, const NumberColumn& co
     return read ? std::optional<double>(read->low) : std::nullopt;
   }
   const std::optional<Range> read = range(row, column);
-  if (!read || read->low == read->high)
+  if (!read || read->low == read->high) {
     return read ? std::optional<double>(read->low) : std::nullopt;
+  }
   add_cell_fault(
       row, column.low->index, cell_fault("one value is needed here, not a range.", "a number"));
   return std::nullopt;
@@ -173,7 +192,9 @@ std::optional<double> TableReader::value(std::size_t row, const NumberColumn& co
 
 Range TableReader::required_range(std::size_t row, const NumberColumn& column) {
   const std::size_t before = faults_->size();
-  if (const std::optional<Range> read = range(row, column)) return *read;
+  if (const std::optional<Range> read = range(row, column)) {
+    return *read;
+  }
   if (column.is_present() && faults_->size() == before) {
     add_fault(row, *column.index(), Code::missing, "the cell must not be empty.");
   }
@@ -182,7 +203,9 @@ Range TableReader::required_range(std::size_t row, const NumberColumn& column) {
 
 double TableReader::required_value(std::size_t row, const NumberColumn& column) {
   const std::size_t before = faults_->size();
-  if (const std::optional<double> read = value(row, column)) return *read;
+  if (const std::optional<double> read = value(row, column)) {
+    return *read;
+  }
   if (column.is_present() && faults_->size() == before) {
     add_fault(row, *column.index(), Code::missing, "the cell must not be empty.");
   }

@@ -33,8 +33,12 @@ std::optional<std::string> currency_in(std::string_view unit) {
   const auto is_letter = [](char c) { return (c >= 'A' && c <= 'Z') || (c >= 'a' && c <= 'z'); };
   for (std::size_t i = 0; i < unit.size();) {
     std::size_t end = i;
-    while (end < unit.size() && is_letter(unit[end])) ++end;
-    if (is_currency_code(unit.substr(i, end - i))) return std::string(unit.substr(i, end - i));
+    while (end < unit.size() && is_letter(unit[end])) {
+      ++end;
+    }
+    if (is_currency_code(unit.substr(i, end - i))) {
+      return std::string(unit.substr(i, end - i));
+    }
     i = std::max(end, i + 1);
   }
   return std::nullopt;
@@ -47,14 +51,18 @@ std::string first_unit(QuantityKind kind) {
 }
 
 std::string header_example(std::string_view name, QuantityKind kind) {
-  if (may_go_without_unit(kind)) return quoted(name);
+  if (may_go_without_unit(kind)) {
+    return quoted(name);
+  }
   return quoted(std::string(name) + " [" + first_unit(kind) + "]");
 }
 
 }  // namespace
 
 std::optional<std::size_t> TableReader::NumberColumn::index() const noexcept {
-  if (whole) return whole->index;
+  if (whole) {
+    return whole->index;
+  }
   return low ? std::optional<std::size_t>(low->index) : std::nullopt;
 }
 
@@ -95,7 +103,9 @@ void TableReader::read_headers() {
     if (trim(document_.header(i)).empty()) {
       header.is_taken = true;
       for (std::size_t row = 0; row < rows(); ++row) {
-        if (trim(document_.cell(row, i)).empty()) continue;
+        if (trim(document_.cell(row, i)).empty()) {
+          continue;
+        }
         faults_->add(Code::table_malformed,
                      document_.where(row, i),
                      "a cell of a column without header: name the column or empty its cells.");
@@ -130,14 +140,18 @@ bool TableReader::has_column(std::string_view name) const {
 
 std::optional<std::size_t> TableReader::take(std::string_view name) {
   const auto found = by_name_.find(folded(name));
-  if (found == by_name_.end()) return std::nullopt;
+  if (found == by_name_.end()) {
+    return std::nullopt;
+  }
   headers_[found->second].is_taken = true;
   return found->second;
 }
 
 TableReader::Column TableReader::text_column(std::string_view name, Presence presence) {
   const std::optional<std::size_t> index = take(name);
-  if (!index) absent_.push_back({std::string(name), QuantityKind::ratio, false, presence});
+  if (!index) {
+    absent_.push_back({std::string(name), QuantityKind::ratio, false, presence});
+  }
   return {index};
 }
 
@@ -164,8 +178,12 @@ TableReader::NumberColumn TableReader::number_column(std::string_view name,
     column.whole = part(*whole, kind);
   } else if (low) {
     column.low = part(*low, kind);
-    if (high) column.high = part(*high, kind);
-    if (!column.low) column.high.reset();
+    if (high) {
+      column.high = part(*high, kind);
+    }
+    if (!column.low) {
+      column.high.reset();
+    }
   } else {
     absent_.push_back({word, kind, true, presence});
   }
@@ -178,7 +196,9 @@ std::vector<TableReader::PrefixedColumn> TableReader::text_columns_with_prefix(
   const std::string start = folded(prefix) + ' ';
   for (std::size_t i = 0; i < headers_.size(); ++i) {
     const std::string name = folded(headers_[i].name);
-    if (headers_[i].is_taken || name.compare(0, start.size(), start) != 0) continue;
+    if (headers_[i].is_taken || name.compare(0, start.size(), start) != 0) {
+      continue;
+    }
     headers_[i].is_taken = true;
     columns.push_back({name.substr(start.size()), Column{i}});
   }
@@ -188,14 +208,20 @@ std::vector<TableReader::PrefixedColumn> TableReader::text_columns_with_prefix(
 std::optional<TableReader::NumberColumn::Part> TableReader::part(std::size_t index,
                                                                  QuantityKind kind) {
   const std::optional<Unit> unit = read_unit(index, kind);
-  if (!unit) return std::nullopt;
+  if (!unit) {
+    return std::nullopt;
+  }
   return NumberColumn::Part{index, *unit};
 }
 
 std::optional<Unit> TableReader::read_unit(std::size_t index, QuantityKind kind) {
   HeaderCell& header = headers_[index];
-  if (header.is_faulty) return std::nullopt;
-  if ((!header.unit || is_plain(*header.unit)) && may_go_without_unit(kind)) return Unit{};
+  if (header.is_faulty) {
+    return std::nullopt;
+  }
+  if ((!header.unit || is_plain(*header.unit)) && may_go_without_unit(kind)) {
+    return Unit{};
+  }
   try {
     if (!header.unit) {
       Fault fault;
@@ -210,9 +236,13 @@ std::optional<Unit> TableReader::read_unit(std::size_t index, QuantityKind kind)
     std::optional<CurrencyRates> own_rates;
     if (is_money) {
       const std::optional<std::string> settled = settle_currency(index, std::move(text));
-      if (!settled) return std::nullopt;
+      if (!settled) {
+        return std::nullopt;
+      }
       text = *settled;
-      if (format_.rates == nullptr) own_rates.emplace(*currency_);
+      if (format_.rates == nullptr) {
+        own_rates.emplace(*currency_);
+      }
     }
     const CurrencyRates* rates = own_rates ? &*own_rates : format_.rates;
     // Read once as a quantity: that compares it with the kind.
@@ -228,8 +258,12 @@ std::optional<Unit> TableReader::read_unit(std::size_t index, QuantityKind kind)
 std::optional<std::string> TableReader::settle_currency(std::size_t index, std::string unit) {
   std::optional<std::string> named = currency_in(unit);
   if (!named) {
-    if (unit.substr(0, 2) == "1/") unit.erase(0, 1);
-    if (!unit.empty() && unit.front() == '/') unit.insert(0, format_.currency);
+    if (unit.substr(0, 2) == "1/") {
+      unit.erase(0, 1);
+    }
+    if (!unit.empty() && unit.front() == '/') {
+      unit.insert(0, format_.currency);
+    }
     named = format_.currency;
   }
   if (format_.rates != nullptr) {
@@ -251,16 +285,22 @@ void TableReader::finish_columns() {
   unknown_.clear();
   std::vector<std::string_view> left_over;
   for (std::size_t i = 0; i < headers_.size(); ++i) {
-    if (headers_[i].is_taken) continue;
+    if (headers_[i].is_taken) {
+      continue;
+    }
     unknown_.push_back({i, headers_[i].name, headers_[i].unit});
     left_over.push_back(headers_[i].name);
   }
   for (const Wanted& wanted : absent_) {
-    if (wanted.presence == Presence::required) report_missing(wanted, left_over);
+    if (wanted.presence == Presence::required) {
+      report_missing(wanted, left_over);
+    }
   }
   std::vector<std::string_view> optional_names;
   for (const Wanted& wanted : absent_) {
-    if (wanted.presence == Presence::optional) optional_names.push_back(wanted.name);
+    if (wanted.presence == Presence::optional) {
+      optional_names.push_back(wanted.name);
+    }
   }
   for (const UnknownColumn& column : unknown_) {
     if (const auto near = nearest_word(column.name, optional_names)) {
@@ -274,7 +314,9 @@ void TableReader::finish_columns() {
 
 void TableReader::report_missing(const Wanted& wanted,
                                  std::span<const std::string_view> left_over) {
-  if (document_.columns() == 0) return;  // an empty table has its own fault
+  if (document_.columns() == 0) {
+    return;  // an empty table has its own fault
+  }
   const std::string example =
       wanted.is_number ? header_example(wanted.name, wanted.kind) : quoted(wanted.name);
   std::string message = "the column " + example + " is missing.";
@@ -303,7 +345,9 @@ std::optional<TableReader::NumberColumn> TableReader::as_numbers(const UnknownCo
     bool holds_number = false;
     for (std::size_t row = 0; row < rows(); ++row) {
       const std::string_view cell = trim(document_.cell(row, column.index));
-      if (cell.empty()) continue;
+      if (cell.empty()) {
+        continue;
+      }
       try {
         static_cast<void>(parse_number_range(cell, format_.decimal));
         holds_number = true;
@@ -318,8 +362,12 @@ std::optional<TableReader::NumberColumn> TableReader::as_numbers(const UnknownCo
     std::optional<CurrencyRates> own_rates;
     if (currency_in(text)) {
       const std::optional<std::string> settled = settle_currency(column.index, text);
-      if (!settled) return std::nullopt;
-      if (format_.rates == nullptr) own_rates.emplace(*currency_);
+      if (!settled) {
+        return std::nullopt;
+      }
+      if (format_.rates == nullptr) {
+        own_rates.emplace(*currency_);
+      }
     }
     numbers.whole->unit = parse_unit(text, own_rates ? &*own_rates : format_.rates);
     return numbers;

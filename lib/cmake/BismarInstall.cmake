@@ -17,12 +17,12 @@ set(BISMAR_PC_DIR "${CMAKE_INSTALL_LIBDIR}/pkgconfig")
 
 set(BISMAR_COMPONENTS "")
 set(BISMAR_PC_LIBS "")
-foreach(component IN ITEMS core job eigen bismar)
+foreach(component IN ITEMS core job evolve eigen bismar)
   if(TARGET bismar_${component})
     list(APPEND BISMAR_COMPONENTS ${component})
-    get_target_property(kind bismar_${component} TYPE)
-    if(NOT kind STREQUAL "INTERFACE_LIBRARY")
-      # A static linker wants users of a library before the library.
+    if(component MATCHES "^(core|job)$")
+      # A static linker wants users of a library before the library. bismar::evolve is left out, so
+      # that not every program comes to need pagmo2.
       list(PREPEND BISMAR_PC_LIBS -lbismar_${component})
     endif()
     install(
@@ -46,8 +46,12 @@ install(
 
 set_property(GLOBAL PROPERTY BISMAR_COMPONENTS "${BISMAR_COMPONENTS}")
 
-# The config file has to find Threads, and Eigen for bismar::eigen. nlohmann/json is headers only and
-# has been compiled in.
+# A shared library carries its private dependencies itself; with a static one the consumer's link
+# needs them. nlohmann/json is headers only and has been compiled in.
+set(BISMAR_EVOLVE_NEEDS_PAGMO OFF)
+if(TARGET bismar_evolve AND NOT BUILD_SHARED_LIBS)
+  set(BISMAR_EVOLVE_NEEDS_PAGMO ON)
+endif()
 configure_package_config_file(
   "${CMAKE_CURRENT_LIST_DIR}/bismarConfig.cmake.in" "${CMAKE_CURRENT_BINARY_DIR}/bismarConfig.cmake"
   INSTALL_DESTINATION "${BISMAR_CMAKE_DIR}"

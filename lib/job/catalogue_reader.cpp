@@ -86,6 +86,8 @@ MaterialTableBuilder::Row row_of(const MaterialTable& table,
       row.values.emplace(property.property, *value);
       row.evidence.emplace(property.property,
                            table.provenance(property.property, step.row).evidence);
+    } else {  // an empty cell has the evidence of its row
+      row.row_evidence = table.provenance(property.property, step.row).evidence;
     }
   }
   for (const std::string& name : extras) {
@@ -180,7 +182,10 @@ class CatalogueReader {
       table.format.currency = "EUR";
       table.paths = starter_files(kind);
     } catch (const Error& error) {
-      add(error, value);
+      if (!starter_is_lost_) {  // once, not for every kind of table
+        add(error, value);
+      }
+      starter_is_lost_ = true;
     }
     return table;
   }
@@ -368,12 +373,16 @@ class CatalogueReader {
 
   Checker& checker_;
   Job& job_;
+  bool starter_is_lost_ = false;
 };
 
 }  // namespace
 
 void JobReader::read_catalogue(const JsonValue* value) {
+  const std::size_t before = checker_.faults();
   CatalogueReader(checker_, job_).read(value);
+  const bool well_formed = value == nullptr || checker_.good(*value);
+  tables_read_ = checker_.faults() == before && well_formed;
 }
 
 }  // namespace bismar::detail

@@ -7,6 +7,7 @@
 #include <bismar/error.hpp>
 #include <bismar/quantity/currency.hpp>
 
+#include <cstddef>
 #include <map>
 #include <span>
 #include <string>
@@ -38,6 +39,7 @@ class Checker {
 
   /// Whether the value itself (not what it contains) was found right.
   [[nodiscard]] bool good(const JsonValue& value) const { return !bad_.contains(&value); }
+  [[nodiscard]] std::size_t faults() const { return faults_.size(); }
   [[nodiscard]] std::string where(const JsonValue& value) const;
   /// Pointer and "file:line:column" of every value that was looked at.
   [[nodiscard]] std::map<std::string, std::string> places() const;

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
+#include <bismar/export.hpp>
 #include <bismar/quantity/kind.hpp>
 
 #include <cstdint>
@@ -60,7 +61,7 @@ struct Format {
 };
 
 /// The format of a job file.
-[[nodiscard]] const Format& job_format();
+[[nodiscard]] BISMAR_API const Format& job_format();
 
 /// Whether a plain JSON number may stand for this kind.
 [[nodiscard]] bool takes_plain_number(QuantityKind kind);

@@ -88,7 +88,7 @@ std::vector<std::string> JobReader::names(const JsonValue& object,
     if (!checker_.good(item)) {
       continue;
     }
-    if (std::find(words.begin(), words.end(), item.text) == words.end()) {
+    if (tables_read_ && std::find(words.begin(), words.end(), item.text) == words.end()) {
       checker_.add_unknown(item, what, words);
     } else if (std::find(all.begin(), all.end(), item.text) != all.end()) {
       checker_.add(Code::duplicate,

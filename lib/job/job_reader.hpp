@@ -75,6 +75,8 @@ class JobReader {
   Checker& checker_;
   Job& job_;
   CatalogueWords words_;
+  bool tables_read_ =
+      true;  ///< Otherwise a name that is not found may stand in the table that failed.
 };
 
 }  // namespace bismar::detail

@@ -2,6 +2,7 @@
 #pragma once
 
 #include <bismar/error.hpp>
+#include <bismar/export.hpp>
 
 #include <cstddef>
 #include <cstdint>
@@ -27,7 +28,7 @@ struct JsonValue {
   std::vector<Member> members;  ///< In the order of the text, repeated keys included.
   std::size_t offset = 0;       ///< Byte in the text.
 
-  [[nodiscard]] const JsonValue* find(std::string_view key) const;
+  [[nodiscard]] BISMAR_API const JsonValue* find(std::string_view key) const;
   [[nodiscard]] bool is(Kind other) const noexcept { return kind == other; }
 };
 
@@ -44,7 +45,7 @@ struct JsonValue::Member {
 [[nodiscard]] std::string shown(const JsonValue& value);
 
 /// A JSON text with // and /* */ comments, and where everything stands in it.
-class JsonDocument {
+class BISMAR_API JsonDocument {
  public:
   /// Reads `text`. Faults: json_malformed (not JSON, not UTF-8, nested deeper than the limit),
   /// not_finite (a number too large for a double), duplicate (a key twice in one object). A text
@@ -72,6 +73,6 @@ class JsonDocument {
 [[nodiscard]] std::string pointer_step(std::string_view key);
 
 /// The value without comments, keys in the order of the text, on one line.
-[[nodiscard]] std::string to_compact_text(const JsonValue& value);
+[[nodiscard]] BISMAR_API std::string to_compact_text(const JsonValue& value);
 
 }  // namespace bismar::detail

@@ -110,8 +110,11 @@ Part JobReader::read_part(const JsonValue& value) {
   part.name = text(value, "name").value_or("");
   set(part.quantity, value, "quantity", QuantityKind::count);
   set(part.batch, value, "batch", QuantityKind::count);
-  if (const JsonValue* batch = get(value, "batch");
-      batch != nullptr && part.batch.has_value() && *part.batch > part.quantity) {
+  const JsonValue* whole = value.find("quantity");
+  const bool quantity_is_known = whole == nullptr || checker_.good(*whole);
+  if (const JsonValue* batch = get(value, "batch"); batch != nullptr && quantity_is_known &&
+                                                    part.batch.has_value() &&
+                                                    *part.batch > part.quantity) {
     checker_.add(Code::conflict,
                  *batch,
                  shown(*batch),
@@ -268,7 +271,8 @@ void JobReader::read_limits(const JsonValue& value, Limits& limits) {
     }
   }
   if (const JsonValue* medium = get(value, "medium"); medium != nullptr) {
-    if (std::find(words_.media.begin(), words_.media.end(), medium->text) == words_.media.end()) {
+    if (tables_read_ &&
+        std::find(words_.media.begin(), words_.media.end(), medium->text) == words_.media.end()) {
       checker_.add_unknown(*medium, "medium for which the tables have ratings", words_.media);
     }
     limits.medium = medium->text;
@@ -315,7 +319,9 @@ void JobReader::read_property_limit(const JsonValue& value, Limits& limits) {
     unit = std::string(bismar::info(*known).unit);
   }
   if (!unit.has_value()) {
-    checker_.add_unknown(*value.find("property"), "property", words);
+    if (tables_read_) {
+      checker_.add_unknown(*value.find("property"), "property", words);
+    }
     return;
   }
   PropertyLimit limit;
@@ -382,7 +388,7 @@ void JobReader::read_operations(const JsonValue* value, Part& part) {
       continue;
     }
     use.operation = name->text;
-    if (job_.catalogue.find_operation(use.operation) == nullptr) {
+    if (tables_read_ && job_.catalogue.find_operation(use.operation) == nullptr) {
       checker_.add_unknown(*name, "operation of the catalogue", words_.operations);
     }
     set(use.units, item, "units", QuantityKind::ratio);

@@ -18,11 +18,19 @@ namespace {
 using Json = nlohmann::ordered_json;
 using detail::word_of;
 
-Json number(double value) {
-  if (!std::isfinite(value)) {
-    throw InternalError("a result holds a number that is not finite");
+/// No "-0.0": the sign of a zero means nothing here.
+Json number(double value) { return value == 0.0 ? Json(0.0) : Json(value); }
+
+/// JSON has no words for what is not finite; a result never holds it.
+void require_finite(const Json& json, const std::string& pointer) {
+  if (json.is_number_float() && !std::isfinite(json.get<double>())) {
+    throw InternalError("the result's " + pointer + " is not finite");
   }
-  return value == 0.0 ? Json(0.0) : Json(value);  // no "-0.0"
+  if (json.is_structured()) {
+    for (const auto& [key, value] : json.items()) {
+      require_finite(value, pointer + '/' + key);
+    }
+  }
 }
 
 void add_if(Json& object, const char* key, const std::optional<double>& value) {
@@ -257,6 +265,7 @@ std::string result_json(const Job& job, std::span<const PartResult> results) {
             {"tables", std::move(sources)},
             {"job", Json::parse(job.text)},
             {"results", std::move(parts)}};
+  require_finite(json, "");
   detail::Digest digest;
   digest.add(json.dump());
   json["digest"] = digest.text();

@@ -125,8 +125,8 @@ class Placer {
     double sum = 0.0;
     for (const Segment& stroke : field_.strokes) sum += crosses(stroke, box) ? stroke_dislike : 0.0;
     sum = std::min(sum, most_stroke_dislike);
-    constexpr double dot_dislike = 1.2;
-    constexpr double most_dot_dislike = 6.0;
+    constexpr double dot_dislike = 2.0;
+    constexpr double most_dot_dislike = 8.0;
     double dots = 0.0;
     for (const Point& dot : field_.dots) {
       dots += box.overlaps({dot.x - 3.0, dot.y - 3.0, 6.0, 6.0}) ? dot_dislike : 0.0;

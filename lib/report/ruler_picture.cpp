@@ -60,7 +60,7 @@ NameBlock name_block(const Result& result,
   NameBlock block;
   block.letter = letter;
   const double indent = text_width(letter, name_size, true) + 5.0;
-  block.lines = wrap_text(stretch.choice, name_size, wrap_at - indent);
+  block.lines = wrap_text(choice_name(result, stretch.choice), name_size, wrap_at - indent);
   block.strong = block.lines.size();
   if (stretch.design < result.designs.size()) {
     for (std::string& line :
@@ -136,7 +136,7 @@ double draw_names(Svg& svg,
   const double beam = top + name_row + 26.0;
   for (std::size_t i = 0; i < cuts.size(); ++i) {
     const NamedStretch& stretch = ruler.stretches[cuts[i].stretch];
-    std::string text = stretch.choice;
+    std::string text = choice_name(result, stretch.choice);
     if (stretch.design < result.designs.size()) {
       text += ", " + shape_and_size(result.designs[stretch.design]);
     }
@@ -160,18 +160,18 @@ double draw_names(Svg& svg,
 }
 
 void draw_beam(Svg& svg,
+               const Result& result,
                const ExchangeRuler& ruler,
                const Axis& axis,
                const std::vector<Cut>& cuts,
-               const std::string& currency,
                double top) {
   const double bottom = top + beam_height;
   const double middle = top + 0.5 * beam_height;
   for (std::size_t i = 0; i < cuts.size(); ++i) {
     const Cut& c = cuts[i];
     const NamedStretch& stretch = ruler.stretches[c.stretch];
-    svg.begin_group(alpha_span(stretch.from, stretch.to) + " " + currency +
-                    "/kg: " + stretch.choice);
+    svg.begin_group(alpha_span(stretch.from, stretch.to) + " " + result.currency +
+                    "/kg: " + choice_name(result, stretch.choice));
     std::vector<Point> outline = {{c.from, top}, {c.to, top}};
     if (c.to >= right - 0.01) outline.push_back({right + beam_tip, middle});
     outline.push_back({c.to, bottom});
@@ -297,14 +297,14 @@ double draw_ruler(Svg& svg,
   const ChoiceLetters letters(ruler);
   bool lettered = true;
   const double beam = draw_names(svg, result, ruler, letters, cuts, y + 12.0, key, lettered);
-  draw_beam(svg, ruler, axis, cuts, result.currency, beam);
+  draw_beam(svg, result, ruler, axis, cuts, beam);
   y = draw_breakpoints(svg, ruler, axis, beam + beam_height);
 
   const std::vector<SubStretch> subs = sub_stretches(ruler, axis);
   std::size_t unnamed = 0;
   if (!subs.empty()) {
     y = draw_regret(svg, result, ruler, axis, subs, y + 22.0);
-    y = draw_runners_up(svg, subs, letters, y + 5.0, unnamed) + 5.0;
+    y = draw_runners_up(svg, result, subs, letters, y + 5.0, unnamed) + 5.0;
   }
   y = draw_scale(svg, axis, result.currency, y + 2.0) + 4.0;
 
@@ -313,7 +313,8 @@ double draw_ruler(Svg& svg,
     const bool chosen = std::any_of(ruler.stretches.begin(),
                                     ruler.stretches.end(),
                                     [&](const NamedStretch& s) { return s.choice == name; });
-    if (!chosen) key.push_back({letters.letter(name), name + " (runner-up only)"});
+    if (!chosen)
+      key.push_back({letters.letter(name), choice_name(result, name) + " (runner-up only)"});
   }
   std::string remarks;
   if (cuts.size() < ruler.stretches.size()) {

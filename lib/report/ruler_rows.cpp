@@ -137,6 +137,7 @@ double draw_regret(Svg& svg,
 }
 
 double draw_runners_up(Svg& svg,
+                       const Result& result,
                        const std::vector<SubStretch>& subs,
                        const ChoiceLetters& letters,
                        double top,
@@ -151,7 +152,7 @@ double draw_runners_up(Svg& svg,
   for (const SubStretch& sub : subs) {
     const std::string letter = letters.letter(sub.runner_up->choice);
     svg.begin_group("runner-up from " + number(sub.from) + " to " + number(sub.to) + ": " +
-                    sub.runner_up->choice);
+                    choice_name(result, sub.runner_up->choice));
     svg.rectangle({sub.cut.from, top, sub.cut.width(), height},
                   theme::paper,
                   {.colour = theme::muted, .width = 0.7});

@@ -53,6 +53,7 @@ double draw_regret(Svg& svg,
 /// below.
 /// @param unnamed  Set to the number of sub-stretches without a letter.
 double draw_runners_up(Svg& svg,
+                       const Result& result,
                        const std::vector<SubStretch>& subs,
                        const ChoiceLetters& letters,
                        double top,

@@ -71,6 +71,13 @@ std::string material_of(const Design& design) {
   return design.material_name.empty() ? design.material : design.material_name;
 }
 
+std::string choice_name(const Result& result, const std::string& choice) {
+  for (const Design& design : result.designs) {
+    if (design.material == choice) return material_of(design);
+  }
+  return choice;
+}
+
 std::string ruler_table(const Result& result,
                         const ExchangeRuler& ruler,
                         const TextOptions& options) {
@@ -86,7 +93,7 @@ std::string ruler_table(const Result& result,
       span += "\n(" + number(stretch.from_band->low) + ".." + number(stretch.from_band->high) + ")";
       banded = true;
     }
-    std::string choice = stretch.choice;
+    std::string choice = choice_name(result, stretch.choice);
     if (stretch.design < result.designs.size()) {
       const Design& d = result.designs[stretch.design];
       choice += "\n" + shape_and_size(d) + ", " + made_by(d);
@@ -99,7 +106,7 @@ std::string ruler_table(const Result& result,
       const NamedStretch::RunnerUp& r = stretch.runners_up[i];
       if (i > 0) behind += "\n";
       if (all > 1) behind += alpha_span(r.from, r.to) + ": ";
-      behind += r.choice + ", " + regret_span(result, r);
+      behind += choice_name(result, r.choice) + ", " + regret_span(result, r);
     }
     if (shown < all) behind += "\nand " + std::to_string(all - shown) + " more";
     table.add_row({std::move(span),

@@ -32,6 +32,10 @@ std::string regret_span(const Result& result, const NamedStretch::RunnerUp& runn
 /// The material of a design as people call it.
 std::string material_of(const Design& design);
 
+/// A ruler's choice as people call it: the name of the material where the choice is a material's
+/// id.
+std::string choice_name(const Result& result, const std::string& choice);
+
 std::string ruler_table(const Result& result,
                         const ExchangeRuler& ruler,
                         const TextOptions& options);

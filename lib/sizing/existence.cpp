@@ -16,9 +16,10 @@ bool found_in(std::string_view text, std::string_view word) {
   return text.find(word) != std::string_view::npos;
 }
 
-/// "T6", "H14", "H900", "P1070", "TH1050" as a word of its own: heat-treatment and strain-hardening tempers.
+/// "T6", "H14", "H900", "P1070", "TH1050", "R430" as a word of its own: heat-treatment, strain-hardening and
+/// (copper alloys) drawn tempers.
 bool has_temper(std::string_view condition) {
-  static constexpr std::array<std::string_view, 4> prefixes = {"TH", "T", "H", "P"};
+  static constexpr std::array<std::string_view, 5> prefixes = {"TH", "T", "H", "P", "R"};
   for (std::size_t at = 0; at < condition.size(); ++at) {
     const bool starts = at == 0 || std::isalnum(static_cast<unsigned char>(condition[at - 1])) == 0;
     for (const auto prefix : prefixes) {
@@ -97,16 +98,9 @@ bool strength_is_lost_when_hot(std::string_view condition) {
          });
 }
 
-bool restores(const Route& treatment, const MaterialInfo& material) {
-  if (treatment.kind != RouteKind::treatment ||
-      !contains_word(treatment.classes, material.material_class)) {
-    return false;
-  }
-  if (!treatment.process_words.empty() && !shares_word(treatment.process_words, material.processes)) {
-    return false;
-  }
-  return std::any_of(treatment.restores.begin(), treatment.restores.end(),
-                     [&](const std::string& word) { return found_in(material.condition, word); });
+bool sets_strength(const Route& step, const MaterialInfo& material) {
+  return (step.process_words.empty() || shares_word(step.process_words, material.processes)) &&
+         restores(step, material.material_class, material.condition);
 }
 
 std::optional<Exclusion> material_rules(const MaterialInfo& material, const Limits& limits) {
@@ -199,12 +193,15 @@ std::optional<Exclusion> finish_rules(const MaterialInfo& material, const Finish
 
 std::vector<std::uint32_t> needed_treatments(const MaterialInfo& material, const Route& route,
                                              const Catalogue& catalogue) {
-  if (!forms_hot(route) || !strength_is_lost_when_hot(material.condition)) {
+  // A hot route may make the condition itself: press hardening, controlled cooling from the forging heat.
+  if (!forms_hot(route) || !strength_is_lost_when_hot(material.condition) ||
+      sets_strength(route, material)) {
     return {Candidate::none};
   }
   std::vector<std::uint32_t> out;
   for (std::size_t r = 0; r < catalogue.routes.size(); ++r) {
-    if (restores(catalogue.routes[r], material)) {
+    if (catalogue.routes[r].kind == RouteKind::treatment &&
+        sets_strength(catalogue.routes[r], material)) {
       out.push_back(static_cast<std::uint32_t>(r));
     }
   }

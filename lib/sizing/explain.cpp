@@ -32,14 +32,16 @@ std::string basis_text(Basis basis) {
   return {};
 }
 
-std::string value_text(double value, const PropertyInfo& info) {
+std::string value_text(double value, const PropertyInfo& info, const std::string& currency) {
+  if (info.property == Property::price) {
+    return plain(value, 4) + " " + currency + "/kg";
+  }
   return info.unit.empty() ? plain(value, 4) : format_engineering(value, info.unit, 4);
 }
 
-std::string range_text(const Range& range, const PropertyInfo& info) {
-  return range.low == range.high
-             ? value_text(range.low, info)
-             : value_text(range.low, info) + " .. " + value_text(range.high, info);
+std::string range_text(const Range& range, const PropertyInfo& info, const std::string& currency) {
+  const auto low = value_text(range.low, info, currency);
+  return range.low == range.high ? low : low + " .. " + value_text(range.high, info, currency);
 }
 
 /// Symbols that the failing limit states read and that a larger value of would help.
@@ -123,7 +125,7 @@ std::vector<std::string> provenance_lines(const SizingProblem& problem, std::siz
       continue;
     }
     const auto from = problem.catalogue().materials.provenance(property, step.row);
-    std::string line = std::string(info(property).name) + " " + range_text(*range, info(property)) +
+    std::string line = std::string(info(property).name) + " " + range_text(*range, info(property), problem.catalogue().currency) +
                        ": " + from.table;
     if (from.row > 0) {
       line += " line " + std::to_string(from.row);
@@ -199,6 +201,7 @@ std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome&
             " times what is allowed";
   }
   std::vector<std::string> out = {line + "."};
+  const auto& currency = problem.catalogue().currency;
   for (const Symbol symbol : helpful_symbols(problem, compiled, outcome.reason)) {
     const auto factor = factor_needed(problem, outcome, symbol);
     if (!factor) {
@@ -212,8 +215,9 @@ std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome&
       // The table's own value, so that the advice can be looked up in a table.
       if (const auto value = problem.reader().value(property, piece.step->row)) {
         out.push_back("  It would come in with a " + std::string(info(property).name) +
-                      " of at least about " + value_text(*value * *factor, info(property)) +
-                      " instead of " + value_text(*value, info(property)) + ".");
+                      " of at least about " +
+                      value_text(*value * *factor, info(property), currency) + " instead of " +
+                      value_text(*value, info(property), currency) + ".");
       }
       break;
     }

@@ -143,7 +143,8 @@ class OneVariable {
         continue;
       }
       const auto other = std::max_element(utilisations_.begin(), utilisations_.end());
-      if (*other < least_of_second) {
+      // `<=`: where the other limit is a plain no (infinity) it is still the one that clashes.
+      if (*other <= least_of_second) {
         least_of_second = *other;
         second = static_cast<std::size_t>(other - utilisations_.begin());
       }

@@ -501,31 +501,3 @@ TEST_CASE("random tables give a table or faults, and every step has its values")
   }
   CHECK(built > 20);
 }
-
-TEST_CASE("every property has its name, unit and default end, and is found by its name") {
-  REQUIRE(bismar::properties().size() == bismar::property_count);
-  for (const bismar::PropertyInfo& known : bismar::properties()) {
-    INFO(known.name);
-    CHECK(bismar::property(known.name) == known.property);
-    CHECK(&bismar::info(known.property) == &known);
-    // The usual unit is one that a header of the kind may carry.
-    const std::string header =
-        std::string(known.name) + (known.unit.empty() ? "" : " [" + std::string(known.unit) + "]");
-    CHECK(faults_of("id,class," + header + "\na,steel,1\n").empty());
-  }
-  CHECK(bismar::property(" YIELD  strength ") == Property::yield_strength);
-  CHECK_FALSE(bismar::property("yield"));
-  CHECK(bismar::info(Property::yield_strength).default_end == bismar::RangeEnd::low);
-  CHECK(bismar::info(Property::youngs_modulus).default_end == bismar::RangeEnd::low);
-  CHECK(bismar::info(Property::density).default_end == bismar::RangeEnd::mid);
-  CHECK(bismar::info(Property::price).default_end == bismar::RangeEnd::mid);
-}
-
-TEST_CASE("the ends of a range") {
-  const Range range{2.0, 8.0};
-  CHECK(range.at(bismar::RangeEnd::low) == 2.0);
-  CHECK(range.at(bismar::RangeEnd::mid) == 5.0);
-  CHECK(range.at(bismar::RangeEnd::geometric_mid) == Approx(4.0).epsilon(1e-15));
-  CHECK(range.at(bismar::RangeEnd::high) == 8.0);
-  CHECK(Range{0.0, 8.0}.geometric_mid() == 4.0);
-}

@@ -1,4 +1,5 @@
 // SPDX-License-Identifier: MIT
+#include <bismar/error.hpp>
 #include <bismar/job/job.hpp>
 
 #include "full_job.hpp"

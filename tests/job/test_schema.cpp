@@ -71,7 +71,9 @@ void collect_used(const json& value, std::set<std::string>& keys) {
     if (value.is_object()) {
       keys.insert(key);
     }
-    collect_used(child, keys);
+    if (child.is_structured()) {
+      collect_used(child, keys);
+    }
   }
 }
 

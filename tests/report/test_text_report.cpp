@@ -326,3 +326,15 @@ TEST_CASE("the ruler as CSV has a row for each runner-up sub-stretch") {
   REQUIRE(one.rows() == 1);
   CHECK(one.cell(0, column(one, "runner-up")).empty());
 }
+
+TEST_CASE("the ruler calls materials by their names, not by their ids") {
+  synthetic::Study study = synthetic::convex(2);
+  for (Design& d : study.result.designs) d.material = "id-of-" + d.material_name.substr(0, 7);
+  for (NamedStretch& s : study.ruler.stretches) {
+    s.choice = study.result.designs[s.design].material;
+    for (NamedStretch::RunnerUp& r : s.runners_up) r.choice = "id-of-" + r.choice.substr(0, 7);
+  }
+  const std::string text = front_text(study.result, &study.ruler);
+  CHECK_FALSE(has(text, "id-of-"));
+  CHECK(has(text, "up to 0.500  alloy 1, quenched and tempered"));
+}

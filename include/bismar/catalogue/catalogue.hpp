@@ -22,8 +22,8 @@ struct Catalogue {
   std::vector<Finish> finishes;
   std::vector<Operation> operations;
   std::string currency = "EUR";
-  /// What is odd but no fault, one sentence each: a class of material, a material or a form that a
-  /// table names and no material has, so that the row can never be used.
+  /// What is odd but no fault, one sentence each: the warnings of the materials, and every class,
+  /// group, standard, form or id that another table names and no material has (`unused_names`).
   std::vector<std::string> warnings;
 
   /// The entry of this id, or null. Time linear in the number of entries.
@@ -33,8 +33,8 @@ struct Catalogue {
   [[nodiscard]] BISMAR_API const Operation* find_operation(std::string_view id) const;
 };
 
-/// The sentences of Catalogue::warnings for a catalogue made in memory: what its stock, routes,
-/// finishes and operations name and no material has.
+/// What stock, routes, finishes and operations name and no material has, one sentence for each word
+/// of a list or row.
 [[nodiscard]] BISMAR_API std::vector<std::string> unused_names(const Catalogue& catalogue);
 
 /// Reads the starter tables from a folder laid out like data/ (materials.csv, stock/*.csv,

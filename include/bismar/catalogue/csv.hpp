@@ -26,11 +26,12 @@ class BISMAR_API CsvDocument {
   /// Takes `text` apart; never throws for its content. Time and memory are linear in its length.
   ///
   /// Faults go to `faults`, each with the place `name:line:column`, 1-based, where the column is
-  /// the number of the cell: table_malformed for a NUL byte, a byte that is not UTF-8, UTF-16 text,
-  /// a quote inside an unquoted cell, text behind a closing quote, a quote never closed, a row with
-  /// more or fewer cells than the header; duplicate for a header that occurs twice (letter case and
-  /// blanks do not count); empty for a text without header or without a data row. Rows with a wrong
-  /// number of cells are left out, so a document with faults is good only for finding more of them.
+  /// the number of the cell: table_malformed for a NUL byte, a byte that is not UTF-8, UTF-16 text
+  /// (here the cell is counted by delimiters alone), a quote inside an unquoted cell, text behind a
+  /// closing quote, a quote never closed, a row with more or fewer cells than the header; duplicate
+  /// for a header that occurs twice (letter case and blanks do not count); empty for a text without
+  /// header or without a data row. Rows with a wrong number of cells are left out, so a document
+  /// with faults is good only for finding more of them.
   ///
   /// @param text       The whole file, UTF-8.
   /// @param name       Stands for the file in every place.

@@ -180,6 +180,8 @@ class BISMAR_API MaterialTableBuilder {
     std::map<Property, std::string> keys;  ///< See Provenance.
   };
   void add(Row row);
+  /// Makes room for so many rows.
+  void reserve(std::size_t rows) { rows_.reserve(rows); }
   /// Columns at once: `values` has one entry a material, NaN = missing.
   /// @throws bismar::Error  invalid_argument if the lengths differ; duplicate: a property twice.
   /// The

@@ -13,6 +13,7 @@
 
 namespace bismar {
 
+// NOLINTBEGIN(readability-identifier-naming): symbols of the trade keep their capital.
 /// Every numeric property that a material table may carry under a name the library reads. Other
 /// numeric columns are kept as extra properties that limits can name.
 enum class Property : std::uint8_t {
@@ -64,6 +65,7 @@ enum class Property : std::uint8_t {
   long_term_strength_factor_10y,
   orientation_factor,
 };
+// NOLINTEND(readability-identifier-naming)
 inline constexpr std::size_t property_count = 47;
 
 /// What the library knows of a property.

@@ -15,16 +15,21 @@ struct Range {
   double high = 0.0;
 
   [[nodiscard]] double mid() const { return 0.5 * (low + high); }
-  /// sqrt(low high) where both are positive, otherwise the arithmetic mean (a range that starts at 0).
+  /// sqrt(low high) where both are positive, otherwise the arithmetic mean (a range that starts at
+  /// 0).
   [[nodiscard]] double geometric_mid() const {
     return low > 0.0 && high > 0.0 ? std::sqrt(low) * std::sqrt(high) : mid();
   }
   [[nodiscard]] double at(RangeEnd end) const {
     switch (end) {
-      case RangeEnd::low: return low;
-      case RangeEnd::mid: return mid();
-      case RangeEnd::geometric_mid: return geometric_mid();
-      case RangeEnd::high: return high;
+      case RangeEnd::low:
+        return low;
+      case RangeEnd::mid:
+        return mid();
+      case RangeEnd::geometric_mid:
+        return geometric_mid();
+      case RangeEnd::high:
+        return high;
     }
     return mid();
   }

@@ -78,9 +78,9 @@ struct LoadCase {
   std::string name = "service";
   Support support_z = Support::cantilever;  ///< For loads along z (bending about y).
   Support support_y = Support::cantilever;  ///< For loads along y.
-  std::vector<Load> loads;
-  std::optional<InternalForces> direct;  ///< Adds one section with these forces.
-  std::map<std::string, double> factors;
+  std::vector<Load> loads = {};
+  std::optional<InternalForces> direct = {};  ///< Adds one section with these forces.
+  std::map<std::string, double> factors = {};
   double duration = 0.0;     ///< How long the load lasts [s]; 0 = short (not above an hour).
   bool hand_loaded = false;  ///< Loaded by hand: an unknown elongation leaves a material undecided.
   bool impact = false;       ///< Loaded by impact: likewise.

@@ -23,7 +23,7 @@ struct ResourceCost {
   double scrap = 0.0;            ///< f [-], 0 <= f < 1
   double tooling = 0.0;          ///< C_t [currency] per tool set
   double quantity = 1.0;         ///< n
-  std::optional<double> tool_life;  ///< n_t parts per tool set; absent = one set lasts.
+  std::optional<double> tool_life = {};  ///< n_t parts per tool set; absent = one set lasts.
   double rate = 1.0;             ///< parts per time unit, > 0
   double capital = 0.0;          ///< C_c [currency]
   double load_factor = 1.0;      ///< L [-]

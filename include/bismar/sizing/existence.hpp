@@ -59,8 +59,9 @@ struct Exclusion {
 /// forming destroys.
 [[nodiscard]] BISMAR_API bool strength_is_lost_when_hot(std::string_view condition);
 
-/// Whether the treatment sets the strength of this material's condition anew.
-[[nodiscard]] BISMAR_API bool restores(const Route& treatment, const MaterialInfo& material);
+/// Whether a treatment, or a hot route by itself, sets the strength of this material's condition anew: it restores
+/// the condition (see restores()) and the material allows its process.
+[[nodiscard]] BISMAR_API bool sets_strength(const Route& step, const MaterialInfo& material);
 
 // The rules one by one; each returns the first that is broken, or nothing.
 [[nodiscard]] BISMAR_API std::optional<Exclusion> material_rules(const MaterialInfo& material,

@@ -19,8 +19,8 @@ struct Sizes {
   enum class Kind : std::uint8_t { continuous, step, series, list };
   Kind kind = Kind::continuous;
   double step = 0.0;           ///< [m], multiples of it.
-  std::string series;          ///< "R10", "R20", ...: preferred numbers in millimetres.
-  std::vector<double> values;  ///< [m]
+  std::string series = {};          ///< "R10", "R20", ...: preferred numbers in millimetres.
+  std::vector<double> values = {};  ///< [m]
 
   [[nodiscard]] static Sizes any() { return {}; }
   [[nodiscard]] static Sizes multiples_of(double step) { return {Kind::step, step, {}, {}}; }
@@ -36,20 +36,20 @@ struct Sizes {
 /// A ratio that is left out where the shape has one is free, and makes a second free size.
 struct Shape {
   SectionFamily family = SectionFamily::solid_round;
-  std::optional<double> height_to_width;  ///< h/b: ellipse, rectangle, rectangular tube.
-  std::optional<double> wall_to_height;   ///< t/h (t/d): tubes.
+  std::optional<double> height_to_width = {};  ///< h/b: ellipse, rectangle, rectangular tube.
+  std::optional<double> wall_to_height = {};   ///< t/h (t/d): tubes.
   double height_min = 4e-3;               ///< [m]
   double height_max = 0.5;                ///< [m]
-  Sizes sizes;
+  Sizes sizes = {};
 };
 
 /// Options of the short forms below.
 struct ShapeOptions {
-  std::optional<double> height_to_width;
-  std::optional<double> wall_to_height;
+  std::optional<double> height_to_width = {};
+  std::optional<double> wall_to_height = {};
   double height_min = 4e-3;  ///< [m]
   double height_max = 0.5;   ///< [m]
-  Sizes sizes;
+  Sizes sizes = {};
 };
 [[nodiscard]] BISMAR_API Shape round(const ShapeOptions& options = {});
 [[nodiscard]] BISMAR_API Shape square(const ShapeOptions& options = {});
@@ -61,47 +61,47 @@ struct ShapeOptions {
 /// A prismatic member: tie, strut, beam, shaft, or all at once.
 struct Member {
   double length = 0.0;             ///< L [m]
-  std::vector<Shape> shapes;       ///< Parametric shapes to try.
-  std::vector<std::string> stock;  ///< Stock lists to try, by id; "all" for every list of sections.
-  std::vector<LoadCase> load_cases;
+  std::vector<Shape> shapes = {};       ///< Parametric shapes to try.
+  std::vector<std::string> stock = {};  ///< Stock lists to try, by id; "all" for every list of sections.
+  std::vector<LoadCase> load_cases = {};
 };
 
 /// A bound on a property of the material.
 struct PropertyLimit {
-  std::string property;             ///< A property's name, or the name of an extra column.
-  std::optional<double> at_least;   ///< SI (for an extra column: SI of its own unit).
-  std::optional<double> at_most;
+  std::string property = {};             ///< A property's name, or the name of an extra column.
+  std::optional<double> at_least = {};   ///< SI (for an extra column: SI of its own unit).
+  std::optional<double> at_most = {};
 };
 
 /// What the design must stay within.
 struct Limits {
-  std::optional<double> deflection;  ///< [m]
-  std::optional<double> twist;       ///< [rad]
-  std::optional<double> height;      ///< Envelope [m]
-  std::optional<double> width;       ///< Envelope [m]
-  std::optional<double> wall;        ///< Least wall [m]
+  std::optional<double> deflection = {};  ///< [m]
+  std::optional<double> twist = {};       ///< [rad]
+  std::optional<double> height = {};      ///< Envelope [m]
+  std::optional<double> width = {};       ///< Envelope [m]
+  std::optional<double> wall = {};        ///< Least wall [m]
   double slenderness = 200.0;        ///< K L / i of a member in compression.
   ColumnMethod column_method = ColumnMethod::curves;
-  std::optional<double> mass;        ///< Cap [kg]
-  std::optional<double> cost;        ///< Cap [currency]
-  std::vector<std::string> routes;             ///< Only these routes; empty = every primary route.
-  std::vector<std::string> forbidden_routes;
-  std::vector<std::string> processes;          ///< Process words that the material must allow, all of them.
-  std::vector<std::string> forms;              ///< The material must be sold in one of these; empty = any.
-  std::vector<std::string> classes;            ///< Only these material classes; empty = any.
-  std::vector<std::string> materials;          ///< Only these materials, by id; empty = any.
-  std::vector<std::string> forbidden_materials;  ///< Material ids or classes.
-  std::vector<PropertyLimit> properties;
-  std::optional<std::string> medium;           ///< "fresh water", "sea water": corrosion is checked there ...
+  std::optional<double> mass = {};        ///< Cap [kg]
+  std::optional<double> cost = {};        ///< Cap [currency]
+  std::vector<std::string> routes = {};             ///< Only these routes; empty = every primary route.
+  std::vector<std::string> forbidden_routes = {};
+  std::vector<std::string> processes = {};          ///< Process words that the material must allow, all of them.
+  std::vector<std::string> forms = {};              ///< The material must be sold in one of these; empty = any.
+  std::vector<std::string> classes = {};            ///< Only these material classes; empty = any.
+  std::vector<std::string> materials = {};          ///< Only these materials, by id; empty = any.
+  std::vector<std::string> forbidden_materials = {};  ///< Material ids or classes.
+  std::vector<PropertyLimit> properties = {};
+  std::optional<std::string> medium = {};           ///< "fresh water", "sea water": corrosion is checked there ...
   Rating corrosion_at_least = Rating::good;    ///< ... by the material's rating or its finish's.
-  std::optional<double> temperature;           ///< Service temperature [K].
+  std::optional<double> temperature = {};           ///< Service temperature [K].
   bool allow_brittle = false;                  ///< Admits rows marked "on request" that are brittle.
   bool allow_hard = false;                     ///< Admits rows marked "on request" that are very hard.
 };
 
 /// A step that every candidate gets, so many units of it.
 struct OperationUse {
-  std::string operation;  ///< Id in the catalogue.
+  std::string operation = {};  ///< Id in the catalogue.
   double units = 1.0;     ///< Cuts, holes, metres ... a part.
 };
 
@@ -112,11 +112,11 @@ enum class ServiceClass : std::uint8_t { one = 1, two = 2 };
 struct Part {
   std::string name = "part";
   double quantity = 1.0;             ///< Parts made over the life of the tooling.
-  std::optional<double> batch;       ///< Parts a batch; absent = the whole quantity at once.
-  Member body;
-  Limits limits;
+  std::optional<double> batch = {};       ///< Parts a batch; absent = the whole quantity at once.
+  Member body = {};
+  Limits limits = {};
   std::vector<std::string> finishes = {"none"};  ///< Finishes to try, by id.
-  std::vector<OperationUse> operations;
+  std::vector<OperationUse> operations = {};
   ServiceClass service_class = ServiceClass::one;
 };
 
@@ -130,7 +130,7 @@ enum class Missing : std::uint8_t {
 /// How a study reads ranges, what it keeps, and what it shows.
 struct Settings {
   Missing missing = Missing::undecided;
-  std::map<Property, RangeEnd> range_ends;  ///< Overrides of the properties' default ends.
+  std::map<Property, RangeEnd> range_ends = {};  ///< Overrides of the properties' default ends.
   RangeEnd route_end = RangeEnd::geometric_mid;  ///< Of route, finish and operation ranges.
   double near = 0.05;   ///< beta: designs within this of the front are kept.
   double fold = 0.02;   ///< Designs this close are shown under one representative.

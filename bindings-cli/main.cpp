@@ -75,18 +75,20 @@ int explain(const CLI::App& app, const CLI::ParseError& error) {
       command == &app ? std::string("bismar") : "bismar " + command->get_name();
   std::vector<std::string> extras = command->remaining();
   if (error.get_exit_code() == static_cast<int>(CLI::ExitCodes::ExtrasError) && !extras.empty()) {
-    for (const std::string& extra : extras) {
-      if (extra.starts_with('-')) {
-        const std::string option = extra.substr(0, extra.find('='));
-        fmt::print(stderr,
-                   "{}: there is no option \"{}\".{} Options: {}.\n",
-                   name,
-                   option,
-                   suggestion(option, option_names(*command)),
-                   joined(option_names(*command)));
-      } else {
-        fmt::print(stderr, "{}: \"{}\" is one argument too many.\n", name, extra);
-      }
+    // Behind a misspelt option its value is left over too: one message is enough.
+    const auto option = std::find_if(extras.begin(), extras.end(), [](const std::string& extra) {
+      return extra.starts_with('-');
+    });
+    if (option == extras.end()) {
+      fmt::print(stderr, "{}: \"{}\" is one argument too many.\n", name, extras.front());
+    } else {
+      const std::string typed = option->substr(0, option->find('='));
+      fmt::print(stderr,
+                 "{}: there is no option \"{}\".{} Options: {}.\n",
+                 name,
+                 typed,
+                 suggestion(typed, option_names(*command)),
+                 joined(option_names(*command)));
     }
   } else {
     fmt::print(stderr, "{}: {}. `{} --help` shows the use.\n", name, error.what(), name);

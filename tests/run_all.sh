@@ -12,7 +12,7 @@ jobs=$(getconf _NPROCESSORS_ONLN 2>/dev/null || echo 2)
 
 . "$source_dir/.ci/packages.sh"
 need_packages g++ cmake ninja-build pkg-config catch2 nlohmann-json3-dev libeigen3-dev \
-  libpagmo-dev libcli11-dev libfmt-dev libvalijson-dev librsvg2-bin
+  libpagmo-dev libbenchmark-dev libcli11-dev libfmt-dev libvalijson-dev librsvg2-bin
 
 cmake -S "$source_dir" -B "$build_dir" -G Ninja -DCMAKE_BUILD_TYPE=Release \
   -DBISMAR_DEVELOPER_MODE=ON -DBISMAR_BUILD_BENCHMARKS=ON

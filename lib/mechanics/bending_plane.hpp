@@ -3,6 +3,7 @@
 
 #include "mechanics/polynomial.hpp"
 
+#include <bismar/export.hpp>
 #include <bismar/mechanics/member.hpp>
 
 #include <span>
@@ -28,10 +29,10 @@ struct PlaneSegment {
 
 /// `stations`: sorted, from 0 to L, without repeats, every station of `loads` among them.
 /// Values that are zero but for rounding are exactly zero at the ends of the segments.
-[[nodiscard]] std::vector<PlaneSegment> bending_plane(std::span<const Load> loads,
-                                                      Along along,
-                                                      Support support,
-                                                      std::span<const double> stations);
+[[nodiscard]] BISMAR_API std::vector<PlaneSegment> bending_plane(std::span<const Load> loads,
+                                                                 Along along,
+                                                                 Support support,
+                                                                 std::span<const double> stations);
 
 /// Largest |E I w| of the plane [N m^3].
 [[nodiscard]] double largest_deflection(std::span<const PlaneSegment> plane);

@@ -1,6 +1,8 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
+#include <bismar/export.hpp>
+
 #include <array>
 #include <cstddef>
 #include <vector>
@@ -8,7 +10,7 @@
 namespace bismar::mechanics {
 
 /// A polynomial of degree at most 5 in a local coordinate: coefficients from the constant upwards.
-struct Polynomial {
+struct BISMAR_API Polynomial {
   static constexpr std::size_t terms = 6;
   std::array<double, terms> c{};
 
@@ -21,6 +23,6 @@ struct Polynomial {
 /// The points of the open interval (0, length) at which `p` changes its sign, in order. Between two
 /// neighbouring stationary points p is monotone, so that bisection finds each to rounding. Points
 /// at which p touches zero without a change of sign are not returned.
-[[nodiscard]] std::vector<double> sign_changes(const Polynomial& p, double length);
+[[nodiscard]] BISMAR_API std::vector<double> sign_changes(const Polynomial& p, double length);
 
 }  // namespace bismar::mechanics

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
+#include <bismar/export.hpp>
 #include <bismar/mechanics/load_effects.hpp>
 #include <bismar/mechanics/section.hpp>
 
@@ -20,8 +21,8 @@ struct StationStresses {
   double shear_z = 0.0;    ///< |V_z| / A_v,z
   double torsion = 0.0;    ///< |T| / W_t
 };
-[[nodiscard]] StationStresses station_stresses(const SectionProperties& section,
-                                               const InternalForces& forces);
+[[nodiscard]] BISMAR_API StationStresses station_stresses(const SectionProperties& section,
+                                                          const InternalForces& forces);
 
 /// One point of the section: what acts there together.
 struct StressPoint {
@@ -47,10 +48,10 @@ using StressPoints = std::array<StressPoint, 5>;
 /// and largest at an end. In the wall of a round tube the shear stress is v c with c^2 + s^2 = 1;
 /// the bound is then a parabola in c whose crest, where it lies inside, adds `extra` at the extreme
 /// fibre.
-[[nodiscard]] StressPoints stress_points(const SectionProperties& section,
-                                         const StationStresses& stresses);
+[[nodiscard]] BISMAR_API StressPoints stress_points(const SectionProperties& section,
+                                                    const StationStresses& stresses);
 
 /// Square of the von Mises stress that bounds the point's part of the section [Pa^2].
-[[nodiscard]] double equivalent_squared(const StressPoint& point);
+[[nodiscard]] BISMAR_API double equivalent_squared(const StressPoint& point);
 
 }  // namespace bismar::mechanics

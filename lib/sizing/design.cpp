@@ -107,6 +107,9 @@ void add_buyable(const SizingProblem& problem, std::size_t group, Design& design
   std::vector<double> objectives(2);
   std::vector<double> utilisations(problem.constraints(group));
   problem.evaluate_plain(group, size, objectives, utilisations);
+  if (!std::isfinite(objectives[0]) || !std::isfinite(objectives[1])) {
+    return;  // thicker than the material is made
+  }
   design.buyable_size = size;
   design.buyable_mass = objectives[0];
   design.buyable_cost = objectives[1];

@@ -5,6 +5,7 @@
 #include "sizing/candidate_cost.hpp"
 #include "sizing/strength.hpp"
 
+#include <bismar/export.hpp>
 #include <bismar/solver/box_problem.hpp>
 
 #include <map>
@@ -29,7 +30,7 @@ struct StepState {
 /// One condition of a candidate that its utilisation must not exceed 1.
 struct Constraint {
   enum class Kind : std::uint8_t {
-    property,         ///< A limit on a property of the material.
+    property,  ///< A limit on a property of the material.
     corrosion,
     temperature,
     thickness_limit,  ///< No strength is tabulated for so thick a piece.
@@ -53,14 +54,14 @@ struct Constraint {
 
 /// A stretch of sizes over which everything but the size stays: strength step, blank, corner rule.
 struct Piece {
-  double lower = 0.0;  ///< Exclusive but for the first piece.
-  double upper = 0.0;  ///< Inclusive.
-  const StepState* step = nullptr;    ///< Null: thicker than the table's last limit.
-  const Blank* blank = nullptr;       ///< Machined parts.
-  const StockItem* item = nullptr;    ///< Stock.
-  SectionProperties section;          ///< At `size`; other sizes of the piece are scaled from it.
+  double lower = 0.0;               ///< Exclusive but for the first piece.
+  double upper = 0.0;               ///< Inclusive.
+  const StepState* step = nullptr;  ///< Null: thicker than the table's last limit.
+  const Blank* blank = nullptr;     ///< Machined parts.
+  const StockItem* item = nullptr;  ///< Stock.
+  SectionProperties section;        ///< At `size`; other sizes of the piece are scaled from it.
   double size = 0.0;
-  std::vector<bool> applies;          ///< Per constraint: can this load case cause it here?
+  std::vector<bool> applies;  ///< Per constraint: can this load case cause it here?
 };
 
 /// A candidate made ready for solving.
@@ -71,35 +72,45 @@ struct CompiledCandidate {
   std::vector<Constraint> constraints;
   std::vector<Blank> blanks;
   std::optional<CandidateCost> cost;
-  std::vector<Property> undecided;    ///< Needed and missing; the candidate is not solved then.
-  std::string undecided_limit;        ///< A property limit whose property has no value.
+  std::vector<Property> undecided;  ///< Needed and missing; the candidate is not solved then.
+  std::string undecided_limit;      ///< A property limit whose property has no value.
 };
 
-/// A part's sizing as the solver sees it. One group a candidate; the variable is the height of the section
-/// [m], or the index of the item for stock. Objectives: mass [kg], unit cost.
+/// A part's sizing as the solver sees it. One group a candidate; the variable is the height of the
+/// section [m], or the index of the item for stock. Objectives: mass [kg], unit cost.
 ///
-/// Why the trends hold, on each piece: dimensions are multiples of the height, so every stress is a load over
-/// a power of it and falls; mass, surface, bought mass and process time rise; ratios of walls stay.
-class SizingProblem : public BoxProblem {
+/// Why the trends hold, on each piece: dimensions are multiples of the height, so every stress is a
+/// load over a power of it and falls; mass, surface, bought mass and process time rise; ratios of
+/// walls stay.
+class BISMAR_API SizingProblem : public BoxProblem {
  public:
   SizingProblem(const Part& part, const Catalogue& catalogue, const Settings& settings);
 
   /// Adds a candidate; the returned reference holds until the next call.
   const CompiledCandidate& add(const Candidate& candidate);
-  [[nodiscard]] const CompiledCandidate& compiled(std::size_t group) const { return *groups_[group]; }
+  [[nodiscard]] const CompiledCandidate& compiled(std::size_t group) const {
+    return *groups_[group];
+  }
 
   [[nodiscard]] std::size_t groups() const override { return groups_.size(); }
   [[nodiscard]] std::size_t objectives() const override { return 2; }
   [[nodiscard]] std::span<const Variable> variables(std::size_t group) const override;
   [[nodiscard]] std::size_t constraints(std::size_t group) const override;
-  [[nodiscard]] Trend objective_trend(std::size_t group, std::size_t i, std::size_t v) const override;
-  [[nodiscard]] Trend utilisation_trend(std::size_t group, std::size_t i,
+  [[nodiscard]] Trend objective_trend(std::size_t group,
+                                      std::size_t i,
+                                      std::size_t v) const override;
+  [[nodiscard]] Trend utilisation_trend(std::size_t group,
+                                        std::size_t i,
                                         std::size_t v) const override;
-  void evaluate(std::size_t group, std::span<const double> x, std::span<double> objectives,
+  void evaluate(std::size_t group,
+                std::span<const double> x,
+                std::span<double> objectives,
                 std::span<double> utilisations) const override;
 
   /// The plain path: section from its own formulas at this size, not scaled from the piece.
-  void evaluate_plain(std::size_t group, double x, std::span<double> objectives,
+  void evaluate_plain(std::size_t group,
+                      double x,
+                      std::span<double> objectives,
                       std::span<double> utilisations) const;
 
   /// What a design shows beyond objectives and utilisations.
@@ -127,15 +138,21 @@ class SizingProblem : public BoxProblem {
   /// States of a material at each of its thickness steps, made once.
   const std::vector<StepState>& states(std::size_t material);
   [[nodiscard]] StepState make_state(std::size_t material, std::size_t row) const;
-  void fill_from_class(std::size_t material, std::size_t load_case, ResolvedMaterial& resolved) const;
+  void fill_from_class(std::size_t material,
+                       std::size_t load_case,
+                       ResolvedMaterial& resolved) const;
   [[nodiscard]] const Piece& piece_at(const CompiledCandidate& group, double x) const;
-  [[nodiscard]] std::optional<Purchase> purchase(const CompiledCandidate& group, const Piece& piece,
+  [[nodiscard]] std::optional<Purchase> purchase(const CompiledCandidate& group,
+                                                 const Piece& piece,
                                                  const SectionProperties& section,
                                                  double net_mass) const;
-  void evaluate_section(const CompiledCandidate& group, const Piece& piece,
-                        const SectionProperties& section, std::span<double> objectives,
+  void evaluate_section(const CompiledCandidate& group,
+                        const Piece& piece,
+                        const SectionProperties& section,
+                        std::span<double> objectives,
                         std::span<double> utilisations) const;
-  [[nodiscard]] double material_utilisation(const CompiledCandidate& group, const Constraint& constraint,
+  [[nodiscard]] double material_utilisation(const CompiledCandidate& group,
+                                            const Constraint& constraint,
                                             const StepState& step) const;
 
   const Part& part_;

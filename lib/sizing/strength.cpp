@@ -150,7 +150,7 @@ class Resolver {
   }
 
   void typical() {
-    if (info_.basis != Basis::minimum) {
+    if (reader_.catalogue().materials.basis(row_) != Basis::minimum) {
       multiply_strengths(1.0 / typical_divisor);
       out_.notes.emplace_back("typical strength, divided by 1.25");
     }

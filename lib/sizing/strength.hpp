@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
+#include <bismar/export.hpp>
 #include <bismar/mechanics/limit_state.hpp>
 #include <bismar/sizing/part.hpp>
 
@@ -31,7 +32,8 @@ class PropertyReader {
 
   [[nodiscard]] RangeEnd end(Property property) const;
   [[nodiscard]] std::optional<double> value(Property property, std::size_t row) const;
-  /// What stands in for a missing value under Missing::class_median; nothing under the other policies.
+  /// What stands in for a missing value under Missing::class_median; nothing under the other
+  /// policies.
   [[nodiscard]] std::optional<double> class_median(Property property,
                                                    const std::string& material_class) const;
   [[nodiscard]] const Catalogue& catalogue() const { return catalogue_; }
@@ -46,9 +48,10 @@ class PropertyReader {
 /// A material as the limit states see it, in one load case.
 struct ResolvedMaterial {
   MemberMaterial member;
-  std::set<Property> missing;       ///< Needed by the strength rules and not there.
-  std::vector<std::string> notes;   ///< What was done to its values.
-  double depth_reference = 0.0;     ///< LVL: bending strength falls above this depth [m]; 0 = no size effect.
+  std::set<Property> missing;      ///< Needed by the strength rules and not there.
+  std::vector<std::string> notes;  ///< What was done to its values.
+  double depth_reference =
+      0.0;  ///< LVL: bending strength falls above this depth [m]; 0 = no size effect.
   double depth_exponent = 0.0;
 };
 
@@ -56,10 +59,12 @@ struct ResolvedMaterial {
 /// - ductile (a yield value, elongation at least 5 %, wrought metal 2 %): von Mises against yield;
 /// - anisotropic rows: direct and shear stress apart;
 /// - otherwise brittle: largest principal stress.
-/// Typical strengths are divided by 1.25 and marked. Graded timber: k_mod / gamma_M of its row. Lasting
-/// loads: creep and long-term factors of the row, otherwise undecided beyond an hour.
-[[nodiscard]] ResolvedMaterial resolve(const PropertyReader& reader, std::size_t material,
-                                       std::size_t row, const LoadCase& load_case,
-                                       ServiceClass service_class);
+/// Typical strengths are divided by 1.25 and marked. Graded timber: k_mod / gamma_M of its row.
+/// Lasting loads: creep and long-term factors of the row, otherwise undecided beyond an hour.
+[[nodiscard]] BISMAR_API ResolvedMaterial resolve(const PropertyReader& reader,
+                                                  std::size_t material,
+                                                  std::size_t row,
+                                                  const LoadCase& load_case,
+                                                  ServiceClass service_class);
 
 }  // namespace bismar

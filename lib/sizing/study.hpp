@@ -3,6 +3,7 @@
 
 #include "sizing/problem.hpp"
 
+#include <bismar/export.hpp>
 #include <bismar/sizing/existence.hpp>
 #include <bismar/sizing/front.hpp>
 
@@ -22,11 +23,11 @@ struct Outcome {
     double cost = 0.0;
   };
   Candidate candidate;
-  std::size_t group = 0;      ///< In the problem.
+  std::size_t group = 0;  ///< In the problem.
   Kind kind = Kind::infeasible;
-  std::string reason;         ///< Missing properties, or the limit that excludes it.
+  std::string reason;              ///< Missing properties, or the limit that excludes it.
   double least_utilisation = 0.0;  ///< Infeasible: the least value the excluding limit can have.
-  std::vector<Point> points;  ///< Feasible: its non-dominated points.
+  std::vector<Point> points;       ///< Feasible: its non-dominated points.
 };
 
 /// Every candidate of a part, solved.
@@ -49,22 +50,29 @@ struct CandidateNames {
   std::string finish;
   friend auto operator<=>(const CandidateNames&, const CandidateNames&) = default;
 };
-[[nodiscard]] CandidateNames names(const Candidate& candidate, const Part& part,
+[[nodiscard]] CandidateNames names(const Candidate& candidate,
+                                   const Part& part,
                                    const Catalogue& catalogue);
 
-/// Indices of the part's stock lists and finishes in the catalogue ("all" expanded; "none" is Candidate::none).
+/// Indices of the part's stock lists and finishes in the catalogue ("all" expanded; "none" is
+/// Candidate::none).
 [[nodiscard]] std::vector<std::uint32_t> stock_lists(const Part& part, const Catalogue& catalogue);
-[[nodiscard]] std::vector<std::uint32_t> finish_choices(const Part& part, const Catalogue& catalogue);
-[[nodiscard]] std::vector<std::uint32_t> route_choices(const Part& part, const Catalogue& catalogue);
+[[nodiscard]] std::vector<std::uint32_t> finish_choices(const Part& part,
+                                                        const Catalogue& catalogue);
+[[nodiscard]] std::vector<std::uint32_t> route_choices(const Part& part,
+                                                       const Catalogue& catalogue);
 
 /// Solves the candidates of one material, or of all (`material` == Candidate::none).
 /// The part, catalogue and settings must outlive the result.
-[[nodiscard]] Solved solve_candidates(const Part& part, const Catalogue& catalogue,
-                                      const Settings& settings, const RunOptions& run = {},
-                                      std::uint32_t material = Candidate::none);
+[[nodiscard]] BISMAR_API Solved solve_candidates(const Part& part,
+                                                 const Catalogue& catalogue,
+                                                 const Settings& settings,
+                                                 const RunOptions& run = {},
+                                                 std::uint32_t material = Candidate::none);
 
 /// Solves one group and brings each point to the feasible side of the plain path.
-[[nodiscard]] Outcome solve_group(const SizingProblem& problem, std::size_t group,
+[[nodiscard]] Outcome solve_group(const SizingProblem& problem,
+                                  std::size_t group,
                                   std::size_t& evaluations);
 
 /// The design at a size, on the plain path.

@@ -135,7 +135,7 @@ TEST_CASE("a part that the catalogue check refuses is named by its place in the 
   std::string text = quick_job;
   const std::string from = R"("round": { "diameter": "8 mm..60 mm" })";
   text.replace(text.find(from), from.size(), R"("round": { "diameter": "8 mm..60 mm",
-    "sizes": { "step": "100 mm" } })");
+    "sizes": { "step": "1e-6 mm" } })");
   folder.write("job.json", text);
   const Ran ran = run({"check", "job.json"}, folder.path());
   CHECK(ran.code == 2);

@@ -151,7 +151,7 @@ TEST_CASE("on random catalogues and parts the search comes to the exact front an
       continue;
     }
     ++compared;
-    compare(part, catalogue, {.population = 100, .generations = 300, .trace_every = 0});
+    compare(part, catalogue, {.population = 100, .generations = 200, .trace_every = 0});
   }
   CHECK(compared >= 3);
 }

@@ -27,7 +27,7 @@ Part forged() {
 }  // namespace
 
 TEST_CASE("why tells of a material on the front: its stretch, its limits, its cost and its sources") {
-  const auto answer = why("steel-b", forged(), test::small_catalogue());
+  const auto answer = why("alu-a", forged(), test::small_catalogue());
   CHECK(answer.standing == Answer::Standing::front);
   REQUIRE(answer.design.has_value());
   CHECK(says(answer, "EUR/kg"));

@@ -60,6 +60,7 @@ void compile_one(benchmark::State& state) {
     return;
   }
   std::optional<SizingProblem> problem;
+  std::vector<double> ends;
   std::size_t pieces = 0;
   for (auto _ : state) {
     // A problem grows with every candidate, so that it is made anew now and then.
@@ -74,6 +75,10 @@ void compile_one(benchmark::State& state) {
   }
   state.counters["n"] = static_cast<double>(one.solved.problem->constraints(one.outcome->group));
   state.counters["size"] = static_cast<double>(pieces);
+  for (const auto& piece : problem->compiled(0).pieces) {
+    ends.push_back(piece.upper);
+  }
+  state.counters["checksum"] = checksum(ends);
 }
 
 void evaluate_one(benchmark::State& state) {

@@ -86,8 +86,7 @@ std::vector<std::size_t> checked_groups(const BoxProblem& problem,
     faults.add(Code::empty, "groups", "The problem has no group: there is nothing to search.");
   }
   std::set<std::size_t> seen;
-  for (std::size_t i = 0; i < groups.size(); ++i) {
-    const auto group = groups[i];
+  for (const auto group : groups) {
     if (group >= problem.groups()) {
       faults.add(Code::out_of_range,
                  "groups",

@@ -210,7 +210,7 @@ double hypervolume_of(const std::vector<std::vector<double>>& points,
       inside.push_back(point);
     }
   }
-  return inside.empty() ? 0.0 : pagmo::hypervolume(std::move(inside), true).compute(reference);
+  return inside.empty() ? 0.0 : pagmo::hypervolume(inside, true).compute(reference);
 }
 
 class Search {
@@ -237,7 +237,8 @@ class Search {
     } catch (const std::bad_alloc&) {
       throw;
     } catch (const std::exception& error) {
-      if (evaluator_.failure() || dynamic_cast<const Error*>(&error) != nullptr || in_callback_) {
+      // The problem's and the callback's own exceptions are the host's.
+      if (evaluator_.failure() || in_callback_) {
         throw;
       }
       throw InternalError(std::string("evolve: the algorithm was refused: ") + error.what());

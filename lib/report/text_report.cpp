@@ -392,6 +392,29 @@ std::string ruler_text(const Result& result,
   return out + "\n" + paragraph(caution(), options.width);
 }
 
+namespace {
+
+/// A heading and its items; an item that begins with two spaces is a step of the one before.
+std::string listed(std::string_view heading, const std::vector<std::string>& items,
+                   const TextOptions& options) {
+  if (items.empty()) {
+    return {};
+  }
+  std::string out = "\n" + report::emphasised(std::string(heading), options.colour) + "\n";
+  for (const std::string& item : items) {
+    if (!item.starts_with("  ")) {
+      out += paragraph("- " + item, options.width, 2);
+      continue;
+    }
+    for (const std::string& line : report::wrap(item, options.width > 4 ? options.width - 4 : 1)) {
+      out += "    " + line + "\n";
+    }
+  }
+  return out;
+}
+
+}  // namespace
+
 std::string why_text(const Answer& answer, std::string_view currency, const TextOptions& options) {
   std::string out;
   for (const std::string& line : report::wrap(answer.headline, options.width)) {
@@ -407,7 +430,12 @@ std::string why_text(const Answer& answer, std::string_view currency, const Text
                      options.width,
                      2);
     out += "\n" + report::utilisation_table(d, options);
+    out += listed("How they come about", answer.checks, options);
     out += "\n" + report::cost_table(d, currency, options);
+    if (!d.cost_breakdown.blank.empty()) {
+      out += paragraph("Bought as " + d.cost_breakdown.blank + ".", options.width);
+    }
+    out += listed("Numbers it rests on", answer.sources, options);
     if (!d.notes.empty()) {
       out += "\n" + report::emphasised("Marks", options.colour) + "\n";
       for (const std::string& note : d.notes) out += paragraph("- " + note, options.width, 2);

@@ -53,7 +53,10 @@ void add_utilisations(const SizingProblem& problem, const CompiledCandidate& com
   for (std::size_t i = 0; i < values.size(); ++i) {
     const auto& constraint = compiled.constraints[i];
     const bool state = constraint.kind == Constraint::Kind::limit_state;
-    if (state && !piece.applies[i]) {
+    // Met by every design that exists at all: nothing to tell.
+    const bool trivial = constraint.kind == Constraint::Kind::thickness_limit ||
+                         constraint.kind == Constraint::Kind::blank;
+    if (trivial || (state && !piece.applies[i])) {
       continue;
     }
     Utilisation u;

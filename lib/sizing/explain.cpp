@@ -7,6 +7,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <filesystem>
 #include <set>
 
 namespace bismar {
@@ -126,7 +127,7 @@ std::vector<std::string> provenance_lines(const SizingProblem& problem, std::siz
     }
     const auto from = problem.catalogue().materials.provenance(property, step.row);
     std::string line = std::string(info(property).name) + " " + range_text(*range, info(property), problem.catalogue().currency) +
-                       ": " + from.table;
+                       ": " + std::filesystem::path(from.table).filename().string();
     if (from.row > 0) {
       line += " line " + std::to_string(from.row);
     }
@@ -165,27 +166,6 @@ std::vector<std::string> limit_lines(const SizingProblem& problem, std::size_t g
       out.push_back("  Source: " + std::string(constraint.state->source()));
     }
   }
-  for (const auto& u : design.utilisations) {
-    const bool other = limit_state(u.limit) == nullptr;
-    if (other && u.value > 0.0) {
-      out.push_back(u.limit + ": " + plain(u.value, 3) + " of what is allowed");
-    }
-  }
-  return out;
-}
-
-std::vector<std::string> cost_lines(const Design& design, const std::string& currency) {
-  std::vector<std::string> out;
-  for (const auto& line : design.cost_breakdown.lines) {
-    out.push_back(money_text(line.amount, currency) + "  " + line.item + ": " + line.how);
-  }
-  out.push_back(money_text(design.cost_breakdown.total, currency) + "  in all; " +
-                money_text(design.cost_breakdown.low, currency) + " .. " +
-                money_text(design.cost_breakdown.high, currency) +
-                " over the ranges of price, tooling and rates");
-  if (!design.cost_breakdown.blank.empty()) {
-    out.push_back("bought as " + design.cost_breakdown.blank);
-  }
   return out;
 }
 
@@ -214,7 +194,7 @@ std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome&
       }
       // The table's own value, so that the advice can be looked up in a table.
       if (const auto value = problem.reader().value(property, piece.step->row)) {
-        out.push_back("  It would come in with a " + std::string(info(property).name) +
+        out.push_back("It would come in with a " + std::string(info(property).name) +
                       " of at least about " +
                       value_text(*value * *factor, info(property), currency) + " instead of " +
                       value_text(*value, info(property), currency) + ".");

@@ -12,12 +12,9 @@ namespace bismar {
 [[nodiscard]] std::vector<std::string> provenance_lines(const SizingProblem& problem,
                                                         std::size_t group, const Design& design);
 
-/// Every limit state at the design, one line each, the governing one with its steps.
+/// Every limit state at the design, one line each, the governing one with its steps, indented by two spaces.
 [[nodiscard]] std::vector<std::string> limit_lines(const SizingProblem& problem, std::size_t group,
                                                    const Design& design);
-
-/// The unit cost line by line, with its band.
-[[nodiscard]] std::vector<std::string> cost_lines(const Design& design, const std::string& currency);
 
 /// Why a candidate is infeasible, and what would let it in.
 [[nodiscard]] std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome& outcome);

@@ -149,6 +149,9 @@ class PartCheck {
             (shape.height_max - shape.height_min) / sizes.step > 1e5) {
           fault(Code::out_of_range, where + "/step", plain(sizes.step), "a coarser step",
                 "The step makes more than 100,000 sizes; take a coarser one or a smaller range.");
+        } else if (sizes.step > 0.0 && std::floor(shape.height_max / sizes.step) * sizes.step <
+                                           shape.height_min) {
+          no_size(where);
         }
         return;
       case Sizes::Kind::series:

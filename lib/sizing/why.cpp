@@ -66,7 +66,9 @@ const Design* beaten_by(const Result& result, double mass, double cost) {
 }
 
 std::string what(const Design& design) {
-  return design.material_name + ", " + design.shape + " " + design.size_text + ", " + design.route +
+  const std::string section =
+      design.stock_item.empty() ? design.shape + " " + design.size_text : design.size_text;
+  return design.material_name + ", " + section + ", " + design.route +
          (design.treatment.empty() ? "" : " and " + design.treatment) +
          (design.finish == "none" ? "" : ", " + design.finish);
 }
@@ -101,12 +103,6 @@ class Asked {
 
  private:
   void say(std::string line) { answer_.lines.push_back(std::move(line)); }
-  void say_all(const std::vector<std::string>& lines, const std::string& indent) {
-    for (const auto& line : lines) {
-      say(indent + line);
-    }
-  }
-
   /// The design that is shown: on the front, else near it, else the one least beaten.
   void feasible() {
     const auto& id = catalogue_.materials.info(material_).id;
@@ -192,15 +188,8 @@ class Asked {
     const auto found = std::find_if(
         solved_.outcomes.begin(), solved_.outcomes.end(),
         [&](const Outcome& outcome) { return outcome.candidate == design.candidate; });
-    say("Limits, as shares of what is allowed:");
-    say_all(limit_lines(*solved_.problem, found->group, design), "  ");
-    say("Unit cost:");
-    say_all(cost_lines(design, result_.currency), "  ");
-    say("Numbers it rests on:");
-    say_all(provenance_lines(*solved_.problem, found->group, design), "  ");
-    for (const auto& note : design.notes) {
-      say("Note: " + note + ".");
-    }
+    answer_.checks = limit_lines(*solved_.problem, found->group, design);
+    answer_.sources = provenance_lines(*solved_.problem, found->group, design);
   }
 
   void infeasible() {
@@ -216,7 +205,9 @@ class Asked {
     });
     answer_.headline = "Infeasible: " + all.front()->reason + ".";
     for (std::size_t i = 0; i < all.size() && i < shown_candidates; ++i) {
-      say_all(infeasible_lines(*solved_.problem, *all[i]), "");
+      for (auto& line : infeasible_lines(*solved_.problem, *all[i])) {
+        say(std::move(line));
+      }
     }
     if (all.size() > shown_candidates) {
       say("... and " + std::to_string(all.size() - shown_candidates) +

@@ -139,5 +139,5 @@ TEST_CASE("a part that the catalogue check refuses is named by its place in the 
   folder.write("job.json", text);
   const Ran ran = run({"check", "job.json"}, folder.path());
   CHECK(ran.code == 2);
-  CHECK_THAT(ran.err, Contains("job.json:8:21 /parts/0/member/shapes/0"));
+  CHECK_THAT(ran.err, Contains("job.json:8:20 /parts/0/member/shapes/0/sizes/step: The step"));
 }

@@ -43,8 +43,8 @@ struct Job {
   Settings settings;
   std::vector<Part> parts;  ///< At least one; names differ.
   std::optional<ExchangeRange> exchange;
-  std::string text;                 ///< The job without comments, keys in their order, on one line.
-  std::string folder;               ///< The folder that table paths are relative to.
+  std::string text;    ///< The job without comments, keys in their order, on one line.
+  std::string folder;  ///< The folder that table paths are relative to.
   std::map<std::string, std::string> places;  ///< JSON pointer -> "file:line:column".
 };
 

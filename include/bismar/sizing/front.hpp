@@ -51,8 +51,14 @@ struct Answer {
   enum class Standing : std::uint8_t { front, near, dominated, infeasible, undecided, cannot_exist };
   Standing standing = Standing::cannot_exist;
   std::string headline;            ///< One sentence.
-  std::vector<std::string> lines;  ///< Details: alpha stretches, dominated by what, limits, properties.
+  /// What follows from it: stretches of alpha, by what it is beaten, what would let it in, broken rules.
+  std::vector<std::string> lines;
   std::optional<Design> design;    ///< The material's best design, where it has one.
+  /// How each limit state of that design comes about, a line each; the steps of the governing one follow
+  /// its line, indented by two spaces.
+  std::vector<std::string> checks;
+  /// The numbers that the design rests on, each with its table, line, source, basis and evidence.
+  std::vector<std::string> sources;
 };
 /// @throws bismar::Error (unknown_name) with the nearest id.
 [[nodiscard]] BISMAR_API Answer why(const std::string& material, const Part& part,

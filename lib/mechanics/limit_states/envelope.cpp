@@ -16,6 +16,7 @@ class Envelope final : public LimitState {
   std::string_view id() const override { return "envelope"; }
   std::string_view source() const override { return "limits of the job"; }
   double default_factor(const MemberMaterial&) const override { return 1.0; }
+  bool reads_loads() const override { return false; }
   bool applies(const LoadEffects&,
                const MemberLimits& limits,
                const MemberMaterial&,

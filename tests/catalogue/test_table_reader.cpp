@@ -108,7 +108,7 @@ TEST_CASE("a lone max column, and a pair beside the whole, are faults of the hea
         Texts{"t.csv:1:2: \"a min\" stands beside \"a\": keep the one column or the pair."});
 }
 
-TEST_CASE("semicolon and decimal comma by option; lists then stand between bars") {
+TEST_CASE("semicolon and decimal comma by option, where lists stand between bars") {
   FaultList faults;
   TableFormat format;
   format.delimiter = ';';

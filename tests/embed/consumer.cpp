@@ -1,20 +1,18 @@
 // SPDX-License-Identifier: MIT
-// The program of a consumer: the same source is built through find_package, as a subproject and
-// through pkg-config. It prints the version of the library and the answer to a typo.
-#include <bismar/error.hpp>
-#include <bismar/version.hpp>
+#include <bismar/bismar.hpp>
 
 #include <iostream>
-#include <string_view>
-#include <vector>
 
 int main() {
-  const std::vector<std::string_view> words{"deflection", "yield"};
-  try {
-    throw bismar::Error({.code = bismar::Code::unknown_name,
-                         .where = "/limits",
-                         .message = "Unknown limit." + bismar::did_you_mean("deflexion", words)});
-  } catch (const bismar::Error& error) {
-    std::cout << "bismar " << bismar::version() << " says " << error.what() << '\n';
+  const auto catalogue = bismar::starter_catalogue();  // materials, stock, routes, finishes
+  bismar::Part lever{.name = "crank lever 300", .quantity = 10000};
+  lever.body = {.length = 0.300,  // [m]
+                .shapes = {bismar::ellipse({.height_to_width = 1.25})},
+                .load_cases = {bismar::cantilever({bismar::force(655.0, 0.300)})}};  // [N], service
+  lever.limits = {.deflection = 12e-3, .mass = 0.5, .cost = 6.0, .routes = {"hot-forging"}};
+  const auto result = bismar::front(lever, catalogue);
+  for (const auto& stretch : bismar::exchange_ruler(result, lever, catalogue).stretches) {
+    std::cout << "from " << bismar::format_significant(stretch.from) << " EUR/kg: "
+              << result.designs[stretch.design].material_name << '\n';
   }
 }

@@ -91,56 +91,54 @@ std::optional<Purchase> buy_length(double area, double density, double length,
   return best;
 }
 
-std::vector<Blank> blanks(const SectionProperties& unit, double length, double height_max,
-                          const MaterialInfo& material, const Route& route,
-                          const Catalogue& catalogue, const Settings& settings) {
-  const double allowance = settings.machining_allowance;
-  std::vector<Blank> bars;
-  std::vector<Blank> plates;
-  bool listed = false;
+std::vector<UsableItem> blank_stock(const MaterialInfo& material, const Route& route,
+                                    const Catalogue& catalogue, const Settings& settings) {
+  std::vector<UsableItem> out;
   for (const auto& list : catalogue.stock) {
     if (!list.sheet && !is_solid(list.family)) {
       continue;
     }
     for (const auto& item : list.items) {
-      if (!usable(item, material, route, settings)) {
-        continue;
-      }
-      listed = true;
-      Blank blank;
-      blank.item = &item;
-      blank.plate = list.sheet;
-      if (list.sheet) {
-        const double smaller = std::min(unit.height, unit.width);
-        blank.largest_size = (item.thickness - allowance) / smaller;
-        blank.ruling_dimension = item.thickness;
-        blank.area = item.thickness;  // per metre of width: the order of plates is that of thickness
-      } else {
-        blank.largest_size = largest_size_in(item, unit, list.family, allowance);
-        blank.ruling_dimension = item.section.ruling_dimension;
-        blank.area = item.section.area;
-      }
-      const bool long_enough =
-          item.lengths.empty() ||
-          std::any_of(item.lengths.begin(), item.lengths.end(), [&](double bar) { return bar >= length; });
-      if (blank.largest_size > 0.0 && long_enough) {
-        (list.sheet ? plates : bars).push_back(blank);
+      if (usable(item, material, route, settings)) {
+        out.push_back({&item, &list});
       }
     }
   }
-  if (!bars.empty()) {
-    return lightest(std::move(bars));
+  return out;
+}
+
+std::vector<Blank> blanks(const SectionProperties& unit, double length, double height_max,
+                          std::span<const UsableItem> stock, const Settings& settings) {
+  if (stock.empty()) {
+    // No list of the catalogue holds the material: a rectangular or round blank cut to measure.
+    Blank blank;
+    blank.largest_size = height_max;
+    return {blank};
   }
-  if (!plates.empty()) {
-    return lightest(std::move(plates));
+  const double allowance = settings.machining_allowance;
+  std::vector<Blank> bars;
+  std::vector<Blank> plates;
+  for (const auto& [item, list] : stock) {
+    Blank blank;
+    blank.item = item;
+    blank.plate = list->sheet;
+    if (list->sheet) {
+      const double smaller = std::min(unit.height, unit.width);
+      blank.largest_size = (item->thickness - allowance) / smaller;
+      blank.ruling_dimension = item->thickness;
+      blank.area = item->thickness;  // per metre of width: the order of plates is that of thickness
+    } else {
+      blank.largest_size = largest_size_in(*item, unit, list->family, allowance);
+      blank.ruling_dimension = item->section.ruling_dimension;
+      blank.area = item->section.area;
+    }
+    const bool long_enough =
+        item->lengths.empty() || *std::max_element(item->lengths.begin(), item->lengths.end()) >= length;
+    if (blank.largest_size > 0.0 && long_enough) {
+      (list->sheet ? plates : bars).push_back(blank);
+    }
   }
-  if (listed) {
-    return {};
-  }
-  // No list of the catalogue holds the material: a rectangular or round blank cut to measure.
-  Blank blank;
-  blank.largest_size = height_max;
-  return {blank};
+  return lightest(bars.empty() ? std::move(plates) : std::move(bars));
 }
 
 std::optional<Purchase> buy(const Blank& blank, const SectionProperties& section, double density,

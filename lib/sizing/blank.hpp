@@ -32,12 +32,23 @@ struct Blank {
   bool plate = false;               ///< Cut from plate: the width bought follows the part.
 };
 
+/// A stock item that a material and a route can share, with its list.
+struct UsableItem {
+  const StockItem* item = nullptr;
+  const StockList* list = nullptr;
+};
+
+/// Solid bars and plates of this material in a form that the route takes; the same for every shape, so
+/// they are looked up once for a material and route.
+[[nodiscard]] std::vector<UsableItem> blank_stock(const MaterialInfo& material, const Route& route,
+                                                  const Catalogue& catalogue,
+                                                  const Settings& settings);
+
 /// Blanks for a machined part of these proportions (`unit`: its section at height 1 m) and length, by rising
 /// largest size, each the lightest that holds every size up to it. Bars first; plate where the material has no
 /// bar that is long enough.
 [[nodiscard]] std::vector<Blank> blanks(const SectionProperties& unit, double length, double height_max,
-                                        const MaterialInfo& material, const Route& route,
-                                        const Catalogue& catalogue, const Settings& settings);
+                                        std::span<const UsableItem> stock, const Settings& settings);
 
 /// What the part buys of this blank.
 [[nodiscard]] std::optional<Purchase> buy(const Blank& blank, const SectionProperties& section,

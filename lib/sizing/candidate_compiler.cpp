@@ -138,8 +138,10 @@ void CandidateCompiler::shape_pieces() {
   };
   if (machined) {
     // The strength of a machined part was set in its blank, so its steps are those of the blanks.
-    out_->blanks = blanks(unit, problem_.part().body.length, upper, material_, route_,
-                          problem_.catalogue(), problem_.settings());
+    out_->blanks =
+        blanks(unit, problem_.part().body.length, upper,
+               problem_.blank_stock_of(out_->candidate.material, out_->candidate.route),
+               problem_.settings());
     for (const auto& blank : out_->blanks) {
       add_end(blank.largest_size);
     }

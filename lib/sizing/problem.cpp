@@ -77,6 +77,16 @@ const std::vector<StepState>& SizingProblem::states(std::size_t material) {
   return entry->second;
 }
 
+const std::vector<UsableItem>& SizingProblem::blank_stock_of(std::uint32_t material,
+                                                             std::uint32_t route) {
+  const auto [entry, added] = blank_stock_.try_emplace({material, route});
+  if (added) {
+    entry->second = blank_stock(catalogue_.materials.info(material), catalogue_.routes[route],
+                                catalogue_, settings_);
+  }
+  return entry->second;
+}
+
 StepState SizingProblem::make_state(std::size_t material, std::size_t row) const {
   const auto& material_class = catalogue_.materials.info(material).material_class;
   StepState state;

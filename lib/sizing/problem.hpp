@@ -13,6 +13,7 @@
 #include <optional>
 #include <span>
 #include <string>
+#include <utility>
 #include <vector>
 
 namespace bismar {
@@ -137,6 +138,8 @@ class BISMAR_API SizingProblem : public BoxProblem {
 
   /// States of a material at each of its thickness steps, made once.
   const std::vector<StepState>& states(std::size_t material);
+  /// What a material and route can be machined from, looked up once.
+  const std::vector<UsableItem>& blank_stock_of(std::uint32_t material, std::uint32_t route);
   [[nodiscard]] StepState make_state(std::size_t material, std::size_t row) const;
   void fill_from_class(std::size_t material,
                        std::size_t load_case,
@@ -162,6 +165,7 @@ class BISMAR_API SizingProblem : public BoxProblem {
   MemberLimits member_limits_;
   std::vector<LoadEffects> effects_;
   std::map<std::size_t, std::vector<StepState>> states_;
+  std::map<std::pair<std::uint32_t, std::uint32_t>, std::vector<UsableItem>> blank_stock_;
   std::vector<std::unique_ptr<CompiledCandidate>> groups_;
 };
 

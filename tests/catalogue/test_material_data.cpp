@@ -178,7 +178,7 @@ TEST_CASE("texts, lists, marks and limits of the starter table are all there") {
   }
   CHECK(filled["standard"] == 476);
   CHECK(filled["thickness limit [mm]"] == 497);
-  CHECK(filled["thickness above [mm]"] == 2);
+  CHECK(filled["thickness above [mm]"] == 1);
   CHECK(filled["seen columns"] == 250);
   CHECK(filled["endurance limit basis"] == 487);
   CHECK(filled["shear strength basis"] == 114);
@@ -219,7 +219,7 @@ TEST_CASE("texts, lists, marks and limits of the starter table are all there") {
   CHECK(uses == std::map<StructuralUse, int>{{StructuralUse::yes, 511},
                                              {StructuralUse::on_request, 28},
                                              {StructuralUse::no, 10}});
-  CHECK(words == 3803);
+  CHECK(words == 3804);  // with the form that C45 got, see data/SOURCES.md
   CHECK(minimum == 396);
 }
 
@@ -416,7 +416,7 @@ TEST_CASE("the yield strength of steels does not rise with thickness") {
       ++compared;
     }
   }
-  CHECK(compared == 44);
+  CHECK(compared == 45);
 }
 
 TEST_CASE("rows of one product with other processes stay materials of their own") {

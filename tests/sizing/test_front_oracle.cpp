@@ -1,11 +1,12 @@
 // SPDX-License-Identifier: MIT
 // Brute force beside the front: every candidate of every combination, every size of a list or a dense grid.
 #include "sizing/small_catalogue.hpp"
-#include "sizing/study.hpp"
 #include "support/catch.hpp"
 
 #include <bismar/error.hpp>
+#include <bismar/sizing/existence.hpp>
 
+#include <algorithm>
 #include <cmath>
 #include <set>
 
@@ -152,36 +153,4 @@ TEST_CASE("on free sizes no point of a dense grid escapes the front") {
     }
   }
   CHECK(covered > 1000);
-}
-
-TEST_CASE("a size is the least: a billionth smaller fails a limit") {
-  std::mt19937 random(13);
-  std::size_t checked = 0;
-  const Settings settings;
-  for (int round = 0; round < 30; ++round) {
-    const auto catalogue = test::random_catalogue(random, 6);
-    const auto part = test::random_part(random);
-    const auto solved = solve_candidates(part, catalogue, settings);
-    std::vector<double> objectives(2);
-    for (const auto& outcome : solved.outcomes) {
-      const auto& compiled = solved.problem->compiled(outcome.group);
-      if (compiled.variable.kind != Variable::Kind::continuous || outcome.points.empty()) {
-        continue;
-      }
-      REQUIRE(outcome.points.size() == 1);
-      const double x = outcome.points[0].size;
-      std::vector<double> u(solved.problem->constraints(outcome.group));
-      solved.problem->evaluate_plain(outcome.group, x, objectives, u);
-      const auto worst = std::max_element(u.begin(), u.end());
-      INFO(compiled.constraints[static_cast<std::size_t>(worst - u.begin())].label << " at " << x);
-      CHECK(*worst <= 1.0);
-      const double smaller = x * (1.0 - 1e-9);
-      if (smaller > compiled.variable.lower) {
-        solved.problem->evaluate_plain(outcome.group, smaller, objectives, u);
-        CHECK(*std::max_element(u.begin(), u.end()) > 1.0);
-        ++checked;
-      }
-    }
-  }
-  CHECK(checked > 200);
 }

@@ -92,7 +92,10 @@ int run(const Options& options) {
   }
   if (result.front_count == 0) {
     fmt::print(stderr, "{}: no design holds all limits.\n", result.part);
-    deliver(options.output, front_text(result, nullptr, text_options(!options.output.empty())));
+    deliver(options.output,
+            options.format == "csv"
+                ? ruler_csv(result, ExchangeRuler{})
+                : front_text(result, nullptr, text_options(!options.output.empty())));
     return nothing_feasible;
   }
   ExchangeRuler ruler =

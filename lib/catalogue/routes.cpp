@@ -48,6 +48,22 @@ std::optional<Enum> enum_of(const std::array<std::string_view, count>& words,
   return static_cast<Enum>(found - words.begin());
 }
 
+bool is_letter_or_digit(char c) {
+  return (c >= 'a' && c <= 'z') || (c >= 'A' && c <= 'Z') || (c >= '0' && c <= '9');
+}
+
+/// Whether the text stands in the condition at the start of a word: "T6" in "T6, bar" and "T651",
+/// not in "QT650".
+bool starts_a_word(std::string_view condition, std::string_view text) {
+  for (std::size_t at = condition.find(text); at != std::string_view::npos;
+       at = condition.find(text, at + 1)) {
+    if (at == 0 || !is_letter_or_digit(condition[at - 1])) {
+      return true;
+    }
+  }
+  return false;
+}
+
 class RouteReader {
  public:
   RouteReader(TableReader& table, const TableFormat& format)
@@ -240,21 +256,46 @@ class RouteReader {
     const Range wall = required_range_in(table_, row, wall_, not_negative);
     route.section_min = wall.low;
     route.section_max = wall.high;
-    route.min_wall_by_class = number_pairs(table_, row, wall_by_class_, format_.decimal);
-    for (const auto& entry : route.min_wall_by_class) {
+    route.min_wall_by_class = wall_by_class(row, least_wall_by_class_, route);
+    route.max_wall_by_class = wall_by_class(row, largest_wall_by_class_, route);
+    check_walls(row, route);
+    route.economic_batch = range_in(table_, row, batch_, not_negative).value_or(Range{});
+    route.tolerance = range_in(table_, row, tolerance_, not_negative).value_or(Range{});
+    route.roughness = range_in(table_, row, roughness_, not_negative);
+  }
+
+  std::map<std::string, double, std::less<>> wall_by_class(std::size_t row,
+                                                           const catalogue::NumberColumn& column,
+                                                           const Route& route) {
+    auto walls = catalogue::number_pairs(table_, row, column, format_.decimal);
+    for (const auto& entry : walls) {
       if (std::find(route.classes.begin(), route.classes.end(), entry.first) !=
           route.classes.end()) {
         continue;
       }
       table_.add_fault(row,
-                       wall_by_class_.index().value(),
+                       column.index().value(),
                        Code::conflict,
                        "the route does not serve " + quoted(entry.first) +
                            ": add it to the material classes, or take it out here.");
     }
-    route.economic_batch = range_in(table_, row, batch_, not_negative).value_or(Range{});
-    route.tolerance = range_in(table_, row, tolerance_, not_negative).value_or(Range{});
-    route.roughness = range_in(table_, row, roughness_, not_negative);
+    return walls;
+  }
+
+  /// A class whose largest wall is below its least one would silently lose the route.
+  void check_walls(std::size_t row, const Route& route) {
+    for (const auto& [material_class, largest] : route.max_wall_by_class) {
+      const auto own = route.min_wall_by_class.find(material_class);
+      const double least = own == route.min_wall_by_class.end() ? route.section_min : own->second;
+      if (largest >= least) {
+        continue;
+      }
+      table_.add_fault(row,
+                       largest_wall_by_class_.index().value(),
+                       Code::conflict,
+                       "the largest wall of " + quoted(material_class) +
+                           " is below its least wall: correct one of the two.");
+    }
   }
 
   void check_order(const std::vector<Route>& routes) {
@@ -323,7 +364,8 @@ class RouteReader {
   catalogue::NumberColumn least_order_ = number("least order", Kind::mass);
   catalogue::NumberColumn mass_ = number("mass", Kind::mass, needed);
   catalogue::NumberColumn wall_ = number("wall", Kind::length, needed);
-  catalogue::NumberColumn wall_by_class_ = number("least wall by class", Kind::length);
+  catalogue::NumberColumn least_wall_by_class_ = number("least wall by class", Kind::length);
+  catalogue::NumberColumn largest_wall_by_class_ = number("largest wall by class", Kind::length);
   catalogue::NumberColumn tolerance_ = number("tolerance", Kind::length);
   catalogue::NumberColumn roughness_ = number("roughness Ra", Kind::length);
   catalogue::NumberColumn batch_ = number("economic batch", Kind::count);
@@ -346,7 +388,7 @@ bool restores(const Route& route, std::string_view material_class, std::string_v
     return false;
   }
   return std::any_of(route.restores.begin(), route.restores.end(), [&](const std::string& word) {
-    return condition.find(word) != std::string_view::npos;
+    return starts_a_word(condition, word);
   });
 }
 

@@ -278,8 +278,8 @@ class ResultReader {
       stretch.penalty_from = number(item, "penalty_from");
       stretch.penalty_to = number_if(item, "penalty_to");
       if (const JsonValue* band = item.find("from_band");
-          band != nullptr && band->items.size() == 2) {
-        stretch.from_band = Range{band->items[0].number, band->items[1].number};
+          band != nullptr) {
+        stretch.from_band = BreakpointBand{number(*band, "low"), number_if(*band, "high")};
       }
       for (const JsonValue& second : list(item, "runners_up")) {
         NamedStretch::RunnerUp runner;

@@ -147,7 +147,10 @@ Json ruler_json(const ExchangeRuler& ruler, const Naming& naming) {
     json["penalty_from"] = number(stretch.penalty_from);
     add_if(json, "penalty_to", stretch.penalty_to);
     if (stretch.from_band.has_value()) {
-      json["from_band"] = {number(stretch.from_band->low), number(stretch.from_band->high)};
+      json["from_band"] = {{"low", number(stretch.from_band->low)}};
+      if (stretch.from_band->high.has_value()) {
+        json["from_band"]["high"] = number(*stretch.from_band->high);
+      }
     }
     json["runners_up"] = Json::array();
     for (const NamedStretch::RunnerUp& second : stretch.runners_up) {

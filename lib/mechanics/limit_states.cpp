@@ -37,13 +37,14 @@ std::string_view name(Symbol symbol) {
 }
 
 std::span<const LimitState* const> limit_states() {
-  static const std::array<const LimitState*, 10> list = {
+  static const std::array<const LimitState*, 11> list = {
       &mechanics::yield_limit_state(),
       &mechanics::brittle_fracture_limit_state(),
       &mechanics::direct_and_shear_limit_state(),
       &mechanics::deflection_limit_state(),
       &mechanics::twist_limit_state(),
       &mechanics::flexural_buckling_limit_state(),
+      &mechanics::compression_bending_limit_state(),
       &mechanics::wall_slenderness_limit_state(),
       &mechanics::slenderness_limit_state(),
       &mechanics::envelope_limit_state(),

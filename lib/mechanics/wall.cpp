@@ -34,4 +34,29 @@ double class_3_limit(PlateElement::Kind kind, double epsilon) {
   throw InternalError("plate element without a wall limit");
 }
 
+double aluminium_wall_epsilon(double strength) {
+  FaultList faults;
+  mechanics::require_positive(faults, "strength", strength);
+  faults.throw_if_any();
+  return std::sqrt(250e6 / strength);
+}
+
+double aluminium_class_3_limit(PlateElement::Kind kind, double epsilon, bool class_a) {
+  FaultList faults;
+  mechanics::require_positive(faults, "epsilon", epsilon);
+  faults.throw_if_any();
+  const double internal = (class_a ? 22.0 : 18.0) * epsilon;
+  switch (kind) {
+    case PlateElement::Kind::internal_compression:
+      return internal;
+    case PlateElement::Kind::internal_bending:
+      return internal / 0.40;
+    case PlateElement::Kind::outstand:
+      return (class_a ? 6.0 : 5.0) * epsilon;
+    case PlateElement::Kind::round:
+      return internal / 3.0 * (internal / 3.0);
+  }
+  throw InternalError("plate element without a wall limit");
+}
+
 }  // namespace bismar

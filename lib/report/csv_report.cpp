@@ -156,7 +156,7 @@ std::string ruler_csv(const Result& result, const ExchangeRuler& ruler, const Cs
         report::exact(stretch.from),
         optional_number(stretch.to),
         stretch.from_band ? report::exact(stretch.from_band->low) : "",
-        stretch.from_band ? report::exact(stretch.from_band->high) : "",
+        stretch.from_band && stretch.from_band->high ? report::exact(*stretch.from_band->high) : "",
         stretch.choice,
         stretch.design < result.designs.size() ? result.designs[stretch.design].id : "",
         report::exact(stretch.mass),

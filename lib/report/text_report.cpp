@@ -342,7 +342,8 @@ std::string front_text(const Result& result,
     out += report::emphasised(line, options.colour) + "\n";
   }
   if (!result.exact) {
-    out += paragraph("Heuristic answer: found by search, without a proof that nothing is better.",
+    out += paragraph("Not exact: " + (result.notes.empty() ? std::string("see the notes.")
+                                                           : std::string("see the notes below.")),
                      options.width);
   }
   out += paragraph(funnel_line(result.funnel), options.width, 2);
@@ -361,6 +362,10 @@ std::string front_text(const Result& result,
     out += paragraph(near_line(result, shown, options), options.width);
     const std::string factors = factors_line(result);
     if (!factors.empty()) out += paragraph(factors, options.width, 2);
+    // Said every time: a limit that nobody checked looks like one that is met.
+    out += paragraph("Not checked by this version: self-weight, lateral-torsional and torsional buckling, "
+                     "fatigue, fracture, vibration, joints, and whatever the job does not name.",
+                     options.width, 2);
   }
   if (ruler != nullptr && !ruler->stretches.empty() && result.front_count > 0) {
     out += heading("Exchange ruler: least cost + alpha x mass, alpha = worth of a saved kilogram");

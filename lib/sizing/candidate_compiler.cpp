@@ -68,6 +68,16 @@ SectionProperties section_of(const Shape& shape, const Route& route, double heig
   throw InternalError("section_of: a shape without one free size passed the checks");
 }
 
+namespace {
+
+/// The section at height 1 m with sharp corners: its ratios, whatever corners the real wall allows.
+SectionProperties proportions(const Shape& shape) {
+  Route any;
+  return section_of(shape, any, 1.0);
+}
+
+}  // namespace
+
 CandidateCompiler::CandidateCompiler(SizingProblem& problem, const Candidate& candidate)
     : problem_(problem),
       out_(std::make_unique<CompiledCandidate>()),
@@ -99,6 +109,24 @@ const StepState* CandidateCompiler::state_at(double thickness) const {
   return nullptr;
 }
 
+double CandidateCompiler::strength_thickness(const SectionProperties& section) const {
+  // EN 10083 and its kin give the steps of hardened bar by diameter; other solids count by their equivalent
+  // diameter 4 A / U, which for a wide flat is twice its thickness (EN 10083-2, "d <= 16 or t <= 8"; from
+  // memory). Walls, plates and rows that are only sold as plate count by thickness.
+  const bool solid = section.inner_perimeter == 0.0 && section.plates.empty();
+  if (solid && is_hardened_bar_grade(material_)) {
+    return 4.0 * section.area / section.perimeter;
+  }
+  return section.ruling_dimension;
+}
+
+double CandidateCompiler::blank_thickness(const Blank& blank) const {
+  if (blank.plate) {
+    return is_hardened_bar_grade(material_) ? 2.0 * blank.item->thickness : blank.item->thickness;
+  }
+  return strength_thickness(blank.item->section);
+}
+
 void CandidateCompiler::stock_pieces() {
   const auto& list = problem_.catalogue().stock[out_->candidate.stock];
   out_->variable.kind = Variable::Kind::ordered_set;
@@ -113,7 +141,7 @@ void CandidateCompiler::stock_pieces() {
     piece.lower = piece.upper = piece.size = static_cast<double>(i);
     piece.item = &item;
     piece.section = item.section;
-    piece.step = state_at(item.section.ruling_dimension);
+    piece.step = state_at(strength_thickness(item.section));
     out_->variable.values.push_back(piece.size);
     out_->pieces.push_back(std::move(piece));
   }
@@ -127,7 +155,8 @@ void CandidateCompiler::shape_pieces() {
   const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
   const double lower = shape.height_min;
   const double upper = shape.height_max;
-  const auto unit = section_of(shape, route_, 1.0);
+  const auto unit = proportions(shape);
+  const double thickness_per_height = strength_thickness(unit);
   const bool machined = machines_blank(route_);
 
   std::vector<double> ends;
@@ -150,8 +179,8 @@ void CandidateCompiler::shape_pieces() {
       !machined || (out_->blanks.size() == 1 && out_->blanks[0].item == nullptr);
   if (own_thickness) {
     for (const auto& step : problem_.catalogue().materials.steps(out_->candidate.material)) {
-      add_end(step.above / unit.ruling_dimension);
-      add_end(step.up_to / unit.ruling_dimension);
+      add_end(step.above / thickness_per_height);
+      add_end(step.up_to / thickness_per_height);
     }
   }
   if (shape.family == SectionFamily::rectangular_tube) {
@@ -169,8 +198,18 @@ void CandidateCompiler::shape_pieces() {
     piece.lower = from;
     piece.upper = to;
     piece.size = to;
-    piece.section = section_of(shape, route_, to);
-    double thickness = piece.section.ruling_dimension;
+    try {
+      piece.section = section_of(shape, route_, to);
+    } catch (const Error&) {
+      // The corner radii that the standard gives this wall leave no flat side: all sizes of the piece have
+      // the same ratios, so none of them exists.
+      piece.impossible = true;
+      out_->pieces.push_back(std::move(piece));
+      from = to;
+      continue;
+    }
+    // A point inside decides, so that rounding at the end of a step does not.
+    double thickness = 0.5 * (from + to) * thickness_per_height;
     if (machined) {
       // The smallest blank that holds the upper end of the piece; a rounding of the division above
       // must not push the end itself out of it.
@@ -180,12 +219,8 @@ void CandidateCompiler::shape_pieces() {
           });
       piece.blank = fits == out_->blanks.end() ? nullptr : &*fits;
       if (piece.blank != nullptr && piece.blank->item != nullptr) {
-        thickness = piece.blank->ruling_dimension;
+        thickness = blank_thickness(*piece.blank);
       }
-    }
-    if (own_thickness) {
-      // A point inside decides, so that rounding at the end of a step does not.
-      thickness = 0.5 * (from + to) * unit.ruling_dimension;
     }
     piece.step = state_at(thickness);
     out_->pieces.push_back(std::move(piece));
@@ -196,8 +231,10 @@ void CandidateCompiler::shape_pieces() {
 
 std::vector<double> CandidateCompiler::sheet_sizes() const {
   const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
-  // The smaller dimension of the section is the thickness of the sheet.
-  const double height_per_thickness = std::max(shape.height_to_width.value_or(1.0), 1.0);
+  // The wall of a rolled tube, or the smaller dimension of a flat part, is the thickness of the sheet.
+  const double height_per_thickness = shape.wall_to_height
+                                          ? 1.0 / *shape.wall_to_height
+                                          : std::max(shape.height_to_width.value_or(1.0), 1.0);
   std::vector<double> out;
   for (const auto& list : problem_.catalogue().stock) {
     if (!list.sheet) {
@@ -241,11 +278,11 @@ void CandidateCompiler::set_sizes() {
   variable.lower = shape.height_min;
   variable.upper = shape.height_max;
   const bool wanted = shape.sizes.kind != Sizes::Kind::continuous;
-  if (!wanted && !cuts_sheet(route_)) {
+  if (!wanted && !takes_sheet_thickness(route_)) {
     return;
   }
   auto values = wanted ? wanted_sizes(variable.lower, variable.upper) : sheet_sizes();
-  if (wanted && cuts_sheet(route_)) {
+  if (wanted && takes_sheet_thickness(route_)) {
     const auto bought = sheet_sizes();
     std::erase_if(values, [&](double value) {
       return std::none_of(bought.begin(), bought.end(), [&](double other) {
@@ -256,6 +293,14 @@ void CandidateCompiler::set_sizes() {
   std::erase_if(values, [&](double value) {
     return value < variable.lower * (1.0 - 1e-12) || value > variable.upper * (1.0 + 1e-12);
   });
+  // A size that is the end of a piece but for rounding is that end: 40 mm plate is in the step up to 40 mm.
+  for (double& value : values) {
+    for (const Piece& piece : out_->pieces) {
+      if (std::abs(value - piece.upper) <= 1e-12 * piece.upper) {
+        value = piece.upper;
+      }
+    }
+  }
   variable.kind = Variable::Kind::ordered_set;
   variable.breakpoints.clear();
   variable.values = std::move(values);
@@ -286,10 +331,17 @@ void CandidateCompiler::collect_constraints() {
     add(Kind::temperature, Trend::constant, "service temperature");
   }
   add(Kind::thickness_limit, Trend::constant, "tabulated thickness");
+  if (std::any_of(out_->pieces.begin(), out_->pieces.end(),
+                  [](const Piece& piece) { return piece.impossible; })) {
+    add(Kind::corners, Trend::constant, "corner radii of the wall");
+  }
   add_limit_states();
   add(Kind::route_wall, Trend::falls, "least section of the route");
   add(Kind::route_section, Trend::rises, "largest section of the route");
-  add(Kind::route_mass_min, Trend::falls, "least mass of the route");
+  // What comes by the metre is cut to length: the machine has no least mass of a part.
+  if (route_.rate_basis != RateBasis::metre) {
+    add(Kind::route_mass_min, Trend::falls, "least mass of the route");
+  }
   add(Kind::route_mass_max, Trend::rises, "largest mass of the route");
   add(Kind::blank, Trend::constant, "blank or stock length");
   if (limits.mass) {
@@ -346,7 +398,33 @@ void CandidateCompiler::add_limit_states() {
   }
 }
 
+std::vector<std::string> CandidateCompiler::open_limits(const StepState& step) const {
+  const auto& limits = problem_.part().limits;
+  std::vector<std::string> out;
+  for (const auto& limit : limits.properties) {
+    if (!limited_value(problem_.catalogue().materials, limit, step.row)) {
+      out.push_back(limit.property);
+    }
+  }
+  if (limits.medium && !material_.corrosion.contains(*limits.medium)) {
+    out.push_back("corrosion in " + *limits.medium);
+  }
+  if (limits.medium && problem_.reader().value(Property::gamma_M, step.row)) {
+    // Timber in or at water is service class 3 of EN 1995-1-1, for which the table has no factors.
+    out.emplace_back("k_mod in service class 3");
+  }
+  if (limits.temperature && !highest_temperature(problem_.reader(), material_, step.row)) {
+    out.emplace_back("maximum loaded temperature");
+  }
+  if (limits.temperature && *limits.temperature > 373.15 && is_metal(material_.material_class) &&
+      !problem_.reader().value(Property::loaded_temperature_max, step.row)) {
+    out.emplace_back("strength above 100 C");
+  }
+  return out;
+}
+
 void CandidateCompiler::find_undecided() {
+  std::set<std::string> open;
   std::set<Property> missing;
   for (auto& piece : out_->pieces) {
     if (piece.step == nullptr) {
@@ -374,12 +452,11 @@ void CandidateCompiler::find_undecided() {
     if (!piece.step->priced) {
       missing.insert(Property::price);
     }
-    for (const auto& limit : problem_.part().limits.properties) {
-      if (!limited_value(problem_.catalogue().materials, limit, piece.step->row)) {
-        out_->undecided_limit = limit.property;
-      }
+    for (auto& text : open_limits(*piece.step)) {
+      open.insert(std::move(text));
     }
   }
+  out_->undecided_limits.assign(open.begin(), open.end());
   out_->undecided.assign(missing.begin(), missing.end());
 }
 

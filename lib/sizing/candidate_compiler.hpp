@@ -28,6 +28,10 @@ class CandidateCompiler {
   [[nodiscard]] std::vector<double> wanted_sizes(double lower, double upper) const;
   [[nodiscard]] std::vector<double> sheet_sizes() const;
   [[nodiscard]] const StepState* state_at(double thickness) const;
+  /// The dimension that the strength steps of the material are read at.
+  [[nodiscard]] double strength_thickness(const SectionProperties& section) const;
+  [[nodiscard]] double blank_thickness(const Blank& blank) const;
+  [[nodiscard]] std::vector<std::string> open_limits(const StepState& step) const;
   void collect_constraints();
   void add_limit_states();
   void find_undecided();

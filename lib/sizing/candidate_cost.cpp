@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/candidate_cost.hpp"
 
+#include "sizing/strength.hpp"
 #include "sizing/words.hpp"
 
 #include <algorithm>
@@ -30,7 +31,7 @@ double CandidateCost::pick(const Range& range, CostEnd end) const {
 
 double CandidateCost::finished_area(const SectionProperties& section) const {
   // A bath reaches the bore of a tube; plating, paint and powder do not.
-  const bool bath = finish_ != nullptr && contains_word(finish_->process_words, "galvanising");
+  const bool bath = finish_ != nullptr && is_bath(*finish_);
   const double perimeter = section.perimeter + (bath ? section.inner_perimeter : 0.0);
   return perimeter * part_.body.length + 2.0 * section.area;
 }

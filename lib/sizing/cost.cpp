@@ -49,13 +49,17 @@ std::optional<double> break_even_quantity(double fixed_a, double unit_a, double 
   const double saved = unit_a - unit_b;
   const double invested = fixed_b - fixed_a;
   // Both must point the same way: dearer to start, cheaper to run.
-  if (saved == 0.0 || invested / saved < 0.0) {
+  if (saved == 0.0 || !(invested / saved >= 0.0)) {
     return std::nullopt;
   }
   return invested / saved;
 }
 
 std::uint64_t pieces_per_bar(double bar, double length, double kerf) {
+  if (!(bar >= 0.0) || !(length > 0.0) || !(kerf >= 0.0) || !std::isfinite(bar + kerf)) {
+    throw Error({Code::out_of_range, "pieces_per_bar", {}, "bar and kerf not negative, length positive",
+                 "A bar and a saw cut cannot be negative, and a piece must have a length."});
+  }
   const double pieces = (bar + kerf) / (length + kerf);
   // A quotient that is a whole number but for rounding counts as that number.
   return static_cast<std::uint64_t>(std::floor(pieces * (1.0 + 1e-12)));

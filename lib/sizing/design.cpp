@@ -49,7 +49,7 @@ std::string unverified(const SizingProblem& problem, const StepState& step,
 
 void add_utilisations(const SizingProblem& problem, const CompiledCandidate& compiled,
                       const Piece& piece, std::span<const double> values, Design& design) {
-  double largest = -1.0;
+  double largest = -3.0;
   for (std::size_t i = 0; i < values.size(); ++i) {
     const auto& constraint = compiled.constraints[i];
     const bool state = constraint.kind == Constraint::Kind::limit_state;
@@ -68,10 +68,12 @@ void add_utilisations(const SizingProblem& problem, const CompiledCandidate& com
         u.load_case = problem.part().body.load_cases[constraint.load_case].name;
       }
     }
-    // A cap tells what the design costs, not what sizes it, unless the cap is what it runs into.
-    const bool cap = constraint.kind == Constraint::Kind::mass_cap ||
-                     constraint.kind == Constraint::Kind::cost_cap;
-    const double rank = cap && u.value < 1.0 - 1e-6 ? -1.0 : u.value;
+    // Caps and envelopes tell where a design must stop, not what sizes it, unless it runs into them; of a
+    // bought section the loads say why it is not smaller.
+    const bool bought = piece.item != nullptr;
+    const bool fixed = !state || !constraint.state->reads_loads();
+    const bool beside = constraint.trend == Trend::rises || (bought && fixed);
+    const double rank = beside && (bought || u.value < 1.0 - 1e-6) ? u.value - 2.0 : u.value;
     if (rank > largest) {
       largest = rank;
       design.governing = design.utilisations.size();
@@ -89,6 +91,22 @@ void add_notes(const SizingProblem& problem, const CompiledCandidate& compiled, 
       }
     }
   }
+  const double begin = std::nextafter(piece.lower, 1.0);
+  if (compiled.variable.kind == Variable::Kind::continuous && design.size <= begin * (1.0 + 1e-9) &&
+      piece.lower > compiled.variable.lower) {
+    design.notes.emplace_back(
+        "sized by the beginning of a thickness step or blank: no smaller size has its strength");
+  }
+  const bool open_or_slender = design.section.family == SectionFamily::i_section ||
+                               design.section.family == SectionFamily::channel ||
+                               design.section.I_y > 4.0 * design.section.I_z;
+  const bool bends = std::any_of(problem.effects().begin(), problem.effects().end(),
+                                 [](const LoadEffects& effects) { return effects.bends; });
+  if (open_or_slender && bends) {
+    design.notes.emplace_back(
+        "NOT CHECKED: lateral-torsional buckling of a slender section bent about its strong axis; hold its "
+        "compression side or check it");
+  }
   if (piece.item != nullptr && piece.item->availability == Availability::unconfirmed) {
     design.notes.emplace_back("size unconfirmed as a stock size");
   }
@@ -100,24 +118,32 @@ void add_notes(const SizingProblem& problem, const CompiledCandidate& compiled, 
   }
 }
 
-/// The next size up that a shop would set, re-checked and re-costed.
+/// The next size up that a shop would set, re-checked and re-costed: the next whole millimetre, or the one
+/// after where that falls back over the end of a step.
 void add_buyable(const SizingProblem& problem, std::size_t group, Design& design) {
-  const double size = std::ceil(design.size / usual_size_step * (1.0 - 1e-12)) * usual_size_step;
   const auto& variable = problem.compiled(group).variable;
-  if (size > variable.upper) {
-    return;
-  }
   std::vector<double> objectives(2);
   std::vector<double> utilisations(problem.constraints(group));
-  problem.evaluate_plain(group, size, objectives, utilisations);
-  if (!std::isfinite(objectives[0]) || !std::isfinite(objectives[1])) {
-    return;  // thicker than the material is made
+  const double first = std::ceil(design.size / usual_size_step * (1.0 - 1e-12));
+  for (double steps = first; steps <= first + 1.0; steps += 1.0) {
+    const double size = steps * usual_size_step;
+    if (size > variable.upper) {
+      return;
+    }
+    problem.evaluate_plain(group, size, objectives, utilisations);
+    // Beyond the last blank or tabulated thickness there is no mass and no cost to tell.
+    if (!std::isfinite(objectives[0]) || !std::isfinite(objectives[1])) {
+      return;
+    }
+    design.buyable_size = size;
+    design.buyable_mass = objectives[0];
+    design.buyable_cost = objectives[1];
+    design.buyable_feasible = std::all_of(utilisations.begin(), utilisations.end(),
+                                          [](double u) { return u <= 1.0; });
+    if (design.buyable_feasible) {
+      return;
+    }
   }
-  design.buyable_size = size;
-  design.buyable_mass = objectives[0];
-  design.buyable_cost = objectives[1];
-  design.buyable_feasible = std::all_of(utilisations.begin(), utilisations.end(),
-                                        [](double u) { return u <= 1.0; });
 }
 
 }  // namespace

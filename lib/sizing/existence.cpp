@@ -16,21 +16,47 @@ bool found_in(std::string_view text, std::string_view word) {
   return text.find(word) != std::string_view::npos;
 }
 
+bool is_extrusion(const Route& route) { return contains_word(route.process_words, "extrusion"); }
+
+bool rolls_tube(const Route& route) { return contains_word(route.leaves, "welded tube"); }
+
+/// A temper whose letter and digits stand as a word of its own, as "T3" in "T3, bar".
+bool has_temper(std::string_view condition, std::string_view prefix) {
+  for (std::size_t at = 0; at + prefix.size() < condition.size() + 1; ++at) {
+    const bool starts = at == 0 || std::isalnum(static_cast<unsigned char>(condition[at - 1])) == 0;
+    const std::size_t next = at + prefix.size();
+    const bool digit = std::isdigit(static_cast<unsigned char>(prefix.back())) != 0 ||
+                       (next < condition.size() &&
+                        std::isdigit(static_cast<unsigned char>(condition[next])) != 0);
+    if (starts && digit && condition.substr(at, prefix.size()) == prefix) {
+      return true;
+    }
+  }
+  return false;
+}
+
 /// "T6", "H14", "H900", "P1070", "TH1050", "R430" as a word of its own: heat-treatment, strain-hardening and
 /// (copper alloys) drawn tempers.
 bool has_temper(std::string_view condition) {
   static constexpr std::array<std::string_view, 5> prefixes = {"TH", "T", "H", "P", "R"};
-  for (std::size_t at = 0; at < condition.size(); ++at) {
-    const bool starts = at == 0 || std::isalnum(static_cast<unsigned char>(condition[at - 1])) == 0;
-    for (const auto prefix : prefixes) {
-      const std::size_t digit = at + prefix.size();
-      if (starts && condition.substr(at, prefix.size()) == prefix && digit < condition.size() &&
-          std::isdigit(static_cast<unsigned char>(condition[digit])) != 0) {
-        return true;
-      }
-    }
-  }
-  return false;
+  return std::any_of(prefixes.begin(), prefixes.end(),
+                     [&](std::string_view prefix) { return has_temper(condition, prefix); });
+}
+
+/// Strength from cold work, which extrusion destroys as forging does; what extrusion keeps is the temper that
+/// is set at the press and by ageing afterwards (T4, T5, T6).
+bool is_cold_worked(std::string_view condition) {
+  static constexpr std::array<std::string_view, 5> tempers = {"T3", "T8", "T9", "H", "R"};
+  static constexpr std::array<std::string_view, 3> words = {"cold drawn", "cold rolled", "cold worked"};
+  return std::any_of(tempers.begin(), tempers.end(),
+                     [&](std::string_view temper) { return has_temper(condition, temper); }) ||
+         std::any_of(words.begin(), words.end(),
+                     [&](std::string_view word) { return found_in(condition, word); });
+}
+
+/// Heat-treated aluminium loses about half of its strength beside a weld.
+bool is_softened_by_welding(const MaterialInfo& material) {
+  return material.material_class == "aluminium" && has_temper(material.condition, "T");
 }
 
 }  // namespace
@@ -57,8 +83,9 @@ bool keeps_stock(const Route& route) { return contains_word(route.leaves, "stock
 
 bool machines_blank(const Route& route) { return contains_word(route.process_words, "machining"); }
 
-bool cuts_sheet(const Route& route) {
-  return contains_word(route.leaves, "flat") && shares_word(route.takes, std::array<std::string, 2>{"sheet", "plate"});
+bool takes_sheet_thickness(const Route& route) {
+  return (contains_word(route.leaves, "flat") || rolls_tube(route)) &&
+         shares_word(route.takes, std::array<std::string, 2>{"sheet", "plate"});
 }
 
 bool forms_hot(const Route& route) {
@@ -164,7 +191,42 @@ std::optional<Exclusion> route_rules(const MaterialInfo& material, const Route& 
                                            "; the material is sold as " + joined(material.forms) +
                                            "."};
   }
+  if (rolls_tube(route) && !contains_word(material.processes, "welding (good)") &&
+      !contains_word(material.processes, "welding (fair)")) {
+    return Exclusion{Rule::process, "A rolled tube is closed by a weld; the material allows " +
+                                        joined(material.processes) + "."};
+  }
+  if ((is_extrusion(route) && is_metal(material.material_class) &&
+       is_cold_worked(material.condition)) ||
+      (rolls_tube(route) && is_softened_by_welding(material))) {
+    return Exclusion{Rule::condition_lost, "The route \"" + route.title +
+                                               "\" does not keep the strength of the condition \"" +
+                                               material.condition + "\"."};
+  }
   return std::nullopt;
+}
+
+std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material, const Route& route,
+                                          SectionFamily family) {
+  // What comes out of a die has the strength that its product form has: a row for tube, bar or profile.
+  const bool drawn = is_extrusion(route) || contains_word(route.process_words, "pultrusion");
+  const bool from_granulate =
+      contains_word(route.takes, "moulding") && contains_word(material.forms, "moulding");
+  if (!drawn || from_granulate) {
+    return std::nullopt;
+  }
+  const bool tube =
+      family == SectionFamily::round_tube || family == SectionFamily::rectangular_tube;
+  const bool listed = tube ? contains_word(material.forms, "tube")
+                           : contains_word(material.forms, "bar") ||
+                                 (contains_word(material.forms, "section") &&
+                                  !found_in(material.condition, "open profile"));
+  if (listed) {
+    return std::nullopt;
+  }
+  return Exclusion{Rule::input_form, std::string("The values of this row hold for ") +
+                                         joined(material.forms, " and ") + ", not for a " +
+                                         (tube ? "tube." : "solid bar.")};
 }
 
 std::optional<Exclusion> shape_rules(const Route& route, SectionFamily family, bool from_stock) {
@@ -234,6 +296,11 @@ std::optional<Exclusion> first_broken_rule(const Candidate& candidate, const Par
                                  : part.body.shapes[candidate.shape].family;
   if (auto broken = shape_rules(route, family, from_stock)) {
     return broken;
+  }
+  if (!from_stock) {
+    if (auto broken = drawn_form_rules(material, route, family)) {
+      return broken;
+    }
   }
   if (from_stock) {
     const auto& items = catalogue.stock[candidate.stock].items;

@@ -47,25 +47,21 @@ std::string range_text(const Range& range, const PropertyInfo& info, const std::
 
 /// Symbols that the failing limit states read and that a larger value of would help.
 std::vector<Symbol> helpful_symbols(const SizingProblem& problem, const CompiledCandidate& compiled,
-                                    const std::string& reason) {
+                                    const Outcome& outcome) {
   std::set<Symbol> out;
-  for (const auto& constraint : compiled.constraints) {
-    if (constraint.kind != Constraint::Kind::limit_state ||
-        reason.find(constraint.label) == std::string::npos) {
+  for (const auto index : outcome.failed) {
+    const auto& constraint = compiled.constraints[index];
+    const auto piece = std::find_if(compiled.pieces.begin(), compiled.pieces.end(),
+                                    [](const Piece& one) { return one.step != nullptr; });
+    if (constraint.kind != Constraint::Kind::limit_state || piece == compiled.pieces.end()) {
       continue;
     }
-    for (const auto& piece : compiled.pieces) {
-      if (piece.step == nullptr) {
-        continue;
+    const auto& member = piece->step->cases[constraint.load_case].member;
+    for (const Symbol symbol :
+         constraint.state->needs(problem.effects()[constraint.load_case], member)) {
+      if (constraint.state->trend_with(symbol) == Trend::falls) {
+        out.insert(symbol);
       }
-      const auto& member = piece.step->cases[constraint.load_case].member;
-      for (const Symbol symbol :
-           constraint.state->needs(problem.effects()[constraint.load_case], member)) {
-        if (constraint.state->trend_with(symbol) == Trend::falls) {
-          out.insert(symbol);
-        }
-      }
-      break;
     }
   }
   return {out.begin(), out.end()};
@@ -76,10 +72,10 @@ std::optional<double> factor_needed(SizingProblem& problem, const Outcome& outco
   const auto material = outcome.candidate.material;
   std::size_t evaluations = 0;
   const auto feasible_at = [&](double factor) {
-    problem.multiply(material, symbol, factor);
+    const auto before = problem.multiply(material, symbol, factor);
     const bool good =
         solve_group(problem, outcome.group, evaluations).kind == Outcome::Kind::feasible;
-    problem.multiply(material, symbol, 1.0 / factor);
+    problem.restore(material, before);
     return good;
   };
   double high = 10.0;
@@ -150,9 +146,9 @@ std::vector<std::string> limit_lines(const SizingProblem& problem, std::size_t g
       continue;
     }
     const auto& resolved = detail.piece->step->cases[constraint.load_case];
-    const CheckInput input{detail.section, resolved.member,
-                           problem.effects()[constraint.load_case], problem.member_limits(),
-                           problem.part().body.length, constraint.factor};
+    const auto member = resolved.at_depth(detail.section.height);
+    const CheckInput input{detail.section, member, problem.effects()[constraint.load_case],
+                           problem.member_limits(), problem.part().body.length, constraint.factor};
     const auto explanation = constraint.state->explain(input);
     out.push_back(explanation.line);
     const bool governs =
@@ -182,7 +178,7 @@ std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome&
   }
   std::vector<std::string> out = {line + "."};
   const auto& currency = problem.catalogue().currency;
-  for (const Symbol symbol : helpful_symbols(problem, compiled, outcome.reason)) {
+  for (const Symbol symbol : helpful_symbols(problem, compiled, outcome)) {
     const auto factor = factor_needed(problem, outcome, symbol);
     if (!factor) {
       continue;

@@ -51,22 +51,17 @@ bool is_near(double mass, double cost, std::span<const Outcome::Point> front, do
   return heavier == front.begin() || !(inflated * std::prev(heavier)->cost < cost);
 }
 
-void check_plain_path(const Design& design, const SizingProblem& problem, std::size_t group,
-                      Result& result) {
+/// Whether the solver's path and the plain path agree on a design, and every utilisation is met.
+bool is_confirmed(const Design& design, const SizingProblem& problem, std::size_t group) {
   std::vector<double> objectives(2);
   std::vector<double> utilisations(problem.constraints(group));
   problem.evaluate(group, std::span(&design.size, 1), objectives, utilisations);
   const auto differs = [](double a, double b) {
-    return std::abs(a - b) > plain_path_tolerance * std::max(std::abs(a), std::abs(b));
+    return !(std::abs(a - b) <= plain_path_tolerance * std::max(std::abs(a), std::abs(b)));
   };
-  bool wrong = differs(objectives[0], design.mass) || differs(objectives[1], design.cost);
-  wrong = wrong || std::any_of(design.utilisations.begin(), design.utilisations.end(),
-                               [](const Utilisation& u) { return !(u.value <= 1.0); });
-  if (wrong) {
-    result.exact = false;
-    result.notes.push_back("INTERNAL FAULT: " + design.id +
-                           " differs from its re-evaluation on the plain path; do not use it and report it.");
-  }
+  return !differs(objectives[0], design.mass) && !differs(objectives[1], design.cost) &&
+         std::all_of(design.utilisations.begin(), design.utilisations.end(),
+                     [](const Utilisation& u) { return u.value <= 1.0; });
 }
 
 class FrontBuilder {
@@ -79,7 +74,10 @@ class FrontBuilder {
     result.part = part_.name;
     result.currency = solved_.problem->catalogue().currency;
     rank();
-    split(result);
+    // A design that its re-evaluation does not confirm is a defect of ours: it is dropped and named, and the
+    // front is made anew without it.
+    while (!split(result)) {
+    }
     fill_funnel(result);
     add_notes(result);
     result.telemetry.evaluations = solved_.evaluations;
@@ -99,7 +97,10 @@ class FrontBuilder {
     std::sort(ranked_.begin(), ranked_.end(), before);
   }
 
-  void split(Result& result) {
+  bool split(Result& result) {
+    result.designs.clear();
+    result.others.clear();
+    stage_.clear();
     std::vector<double> objectives;
     for (const auto& one : ranked_) {
       objectives.insert(objectives.end(), {one.point.mass, one.point.cost});
@@ -111,7 +112,9 @@ class FrontBuilder {
     for (const auto row : front_rows) {
       on_front[row] = true;
       front.push_back(ranked_[row].point);
-      add_design(ranked_[row], result);
+      if (!add_design(row, result)) {
+        return false;
+      }
       stage_[ranked_[row].outcome] = FunnelLine::Stage::front;
     }
     result.front_count = result.designs.size();
@@ -121,19 +124,32 @@ class FrontBuilder {
       }
       const auto& one = ranked_[row];
       if (is_near(one.point.mass, one.point.cost, front, settings_.near)) {
-        add_design(one, result);
+        if (!add_design(row, result)) {
+          return false;
+        }
         stage_.try_emplace(one.outcome, FunnelLine::Stage::near);
       } else {
         result.others.push_back({solved_.outcomes[one.outcome].candidate, one.point.size,
                                  one.point.mass, one.point.cost});
       }
     }
+    return true;
   }
 
-  void add_design(const Ranked& one, Result& result) {
+  bool add_design(std::size_t row, Result& result) {
+    const auto& one = ranked_[row];
     const auto group = solved_.outcomes[one.outcome].group;
-    result.designs.push_back(make_design(*solved_.problem, group, one.point.size));
-    check_plain_path(result.designs.back(), *solved_.problem, group, result);
+    auto design = make_design(*solved_.problem, group, one.point.size);
+    if (!is_confirmed(design, *solved_.problem, group)) {
+      result.exact = false;
+      result.notes.push_back("INTERNAL FAULT: " + design.id +
+                             " differs from its re-evaluation on the plain path and was left out; please "
+                             "report it.");
+      ranked_.erase(ranked_.begin() + static_cast<std::ptrdiff_t>(row));
+      return false;
+    }
+    result.designs.push_back(std::move(design));
+    return true;
   }
 
   void fill_funnel(Result& result) {
@@ -190,6 +206,14 @@ class FrontBuilder {
           "Columns by Euler's load alone: no imperfection and no yielding are in it. It is an upper bound on "
           "the resistance, not a check by itself.");
     }
+    for (const auto& load_case : part_.body.load_cases) {
+      for (const auto& [limit, factor] : load_case.factors) {
+        if (factor < 1.0) {
+          result.notes.push_back("Load case \"" + load_case.name + "\": the factor " + plain(factor) +
+                                 " on " + limit + " is below 1, so designs fail before the load is reached.");
+        }
+      }
+    }
     if (solved_.stopped) {
       result.exact = false;
       result.notes.emplace_back(
@@ -217,6 +241,35 @@ std::string group_label(const Solved& solved, const Outcome& outcome, const Cand
     case GroupBy::route: return labels.route;
   }
   throw InternalError("fronts: unknown grouping");
+}
+
+/// Indices inside the catalogue and part, and among what the part asks for.
+void check_candidate(const Candidate& candidate, const Part& part, const Catalogue& catalogue) {
+  FaultList faults;
+  const auto check = [&](bool good, const char* field, const char* allowed) {
+    if (!good) {
+      faults.add({Code::out_of_range, std::string("candidate.") + field, {}, allowed,
+                  std::string("The candidate's ") + field + " must be " + allowed + "."});
+    }
+  };
+  const auto among = [](const std::vector<std::uint32_t>& choices, std::uint32_t index) {
+    return std::find(choices.begin(), choices.end(), index) != choices.end();
+  };
+  const bool from_shape = candidate.shape != Candidate::none;
+  const bool from_stock = candidate.stock != Candidate::none;
+  check(candidate.material < catalogue.materials.size(), "material", "a material of the catalogue");
+  check(among(route_choices(part, catalogue), candidate.route), "route", "a route that the part admits");
+  check(from_shape != from_stock, "shape", "set where stock is not, and the other way round");
+  check(!from_shape || candidate.shape < part.body.shapes.size(), "shape", "a shape of the part");
+  check(!from_stock || among(stock_lists(part, catalogue), candidate.stock), "stock",
+        "a stock list that the part admits");
+  check(candidate.treatment == Candidate::none ||
+            (candidate.treatment < catalogue.routes.size() &&
+             catalogue.routes[candidate.treatment].kind == RouteKind::treatment),
+        "treatment", "a treatment of the catalogue, or none");
+  check(among(finish_choices(part, catalogue), candidate.finish), "finish",
+        "a finish that the part tries");
+  faults.throw_if_any();
 }
 
 /// The functions that the guard protects are compiled apart from it (see FloatingPointGuard).
@@ -277,6 +330,7 @@ Design evaluate(const Part& part, const Catalogue& catalogue, const Candidate& c
                 double size, const Settings& settings) {
   const FloatingPointGuard guard;
   validate(part, catalogue, settings);
+  check_candidate(candidate, part, catalogue);
   if (const auto broken = first_broken_rule(candidate, part, catalogue)) {
     throw Error({Code::conflict, std::string(name(broken->rule)), {}, {}, broken->text});
   }
@@ -288,10 +342,9 @@ Design evaluate(const Part& part, const Catalogue& catalogue, const Candidate& c
                 "The material has no value for " + std::string(info(property).name) +
                     ", which this part needs."});
   }
-  if (!compiled.undecided_limit.empty()) {
-    faults.add({Code::missing, compiled.undecided_limit, {}, {},
-                "The material has no value for " + compiled.undecided_limit +
-                    ", on which the part has a limit."});
+  for (const auto& limit : compiled.undecided_limits) {
+    faults.add({Code::missing, limit, {}, {},
+                "The material has no value for " + limit + ", on which the part has a limit."});
   }
   faults.throw_if_any();
   const auto& variable = compiled.variable;

@@ -29,6 +29,14 @@ MemberLimits limits_of_member(const Limits& limits) {
   return out;
 }
 
+double by_class(const std::map<std::string, double, std::less<>>& values,
+                const MaterialInfo& material, double otherwise) {
+  const auto own = values.find(material.material_class);
+  return own != values.end() ? own->second : otherwise;
+}
+
+bool is_hollow(const SectionProperties& section) { return section.inner_perimeter > 0.0; }
+
 /// A yes-or-no condition as a utilisation.
 double pass(bool good) { return good ? 0.0 : infinity; }
 
@@ -92,9 +100,7 @@ StepState SizingProblem::make_state(std::size_t material, std::size_t row) const
   StepState state;
   state.row = row;
   for (std::size_t c = 0; c < effects_.size(); ++c) {
-    state.cases.push_back(
-        resolve(reader_, material, row, part_.body.load_cases[c], part_.service_class));
-    fill_from_class(material, c, state.cases.back());
+    state.cases.push_back(resolve_case(material, row, c));
   }
   state.density = state.cases.front().member.rho.value_or(0.0);
   if (const auto price = catalogue_.materials.value(Property::price, row)) {
@@ -110,41 +116,53 @@ StepState SizingProblem::make_state(std::size_t material, std::size_t row) const
   return state;
 }
 
-void SizingProblem::fill_from_class(std::size_t material, std::size_t load_case,
-                                    ResolvedMaterial& resolved) const {
+ResolvedMaterial SizingProblem::resolve_case(std::size_t material, std::size_t row,
+                                             std::size_t load_case) const {
+  const auto& loads = part_.body.load_cases[load_case];
+  std::set<Symbol> filled;
+  auto resolved = resolve(reader_, material, row, loads, part_.service_class);
   if (settings_.missing != Missing::class_median) {
-    return;
+    return resolved;
   }
   // Whatever a limit state of this load case may read; the section is not known yet, so a tube stands for
-  // all: it has walls.
+  // all: it has walls. A filled yield strength may change the rule, and so what is read: look again.
   const auto any_section = bismar::round_tube(0.1, 0.01, Forming::unknown);
-  std::set<Symbol> wanted = {Symbol::rho};
-  for (const LimitState* state : limit_states()) {
-    if (state->applies(effects_[load_case], member_limits_, resolved.member, any_section)) {
-      const auto needs = state->needs(effects_[load_case], resolved.member);
-      wanted.insert(needs.begin(), needs.end());
-    }
-  }
-  for (const Symbol symbol : wanted) {
-    auto& value = value_of(resolved.member, symbol);
-    if (!value) {
-      value = reader_.class_median(property_of(symbol),
-                                   catalogue_.materials.info(material).material_class);
-      if (value) {
-        resolved.notes.push_back(class_median_note(property_of(symbol)));
+  for (int pass_number = 0; pass_number < 3; ++pass_number) {
+    std::set<Symbol> wanted = {Symbol::rho};
+    for (const LimitState* state : limit_states()) {
+      if (state->applies(effects_[load_case], member_limits_, resolved.member, any_section)) {
+        const auto needs = state->needs(effects_[load_case], resolved.member);
+        wanted.insert(needs.begin(), needs.end());
       }
     }
+    std::erase_if(wanted, [&](Symbol symbol) { return value_of(resolved.member, symbol).has_value(); });
+    if (wanted.empty()) {
+      break;
+    }
+    filled.merge(wanted);
+    resolved = resolve(reader_, material, row, loads, part_.service_class, filled);
   }
+  return resolved;
 }
 
-void SizingProblem::multiply(std::size_t material, Symbol symbol, double factor) {
+std::vector<StepState> SizingProblem::multiply(std::size_t material, Symbol symbol, double factor) {
+  auto before = states_[material];
   for (auto& state : states_[material]) {
     for (auto& resolved : state.cases) {
       if (auto& value = value_of(resolved.member, symbol)) {
         *value *= factor;
       }
+      if (symbol == Symbol::E && resolved.member.E_axial) {
+        *resolved.member.E_axial *= factor;
+      }
     }
   }
+  return before;
+}
+
+void SizingProblem::restore(std::size_t material, const std::vector<StepState>& states) {
+  // Element by element: pieces point at the states.
+  std::copy(states.begin(), states.end(), states_[material].begin());
 }
 
 const Piece& SizingProblem::piece_at(const CompiledCandidate& group, double x) const {
@@ -171,31 +189,30 @@ std::optional<Purchase> SizingProblem::purchase(const CompiledCandidate& group, 
 }
 
 double SizingProblem::material_utilisation(const CompiledCandidate& group,
-                                           const Constraint& constraint,
-                                           const StepState& step) const {
+                                           const Constraint& constraint, const StepState& step,
+                                           const SectionProperties& section) const {
   const auto& info = catalogue_.materials.info(group.candidate.material);
   const Finish* finish = group.candidate.finish == Candidate::none
                              ? nullptr
                              : &catalogue_.finishes[group.candidate.finish];
   if (constraint.kind == Constraint::Kind::corrosion) {
     const auto& medium = *part_.limits.medium;
-    // The finish decides where it states a rating; otherwise the grade's own stands.
+    const bool grade_holds = info.corrosion.at(medium) >= part_.limits.corrosion_at_least;
+    // The finish decides where it states a rating; otherwise the grade's own stands. The bore of a tube is only
+    // finished by a bath: elsewhere the grade has to hold out by itself.
     if (finish != nullptr) {
       if (const auto after = finish->corrosion_after.find(medium);
           after != finish->corrosion_after.end()) {
-        return pass(after->second >= part_.limits.corrosion_at_least);
+        const bool finish_holds = after->second >= part_.limits.corrosion_at_least;
+        return pass(finish_holds && (grade_holds || !is_hollow(section) || is_bath(*finish)));
       }
     }
-    const auto own = info.corrosion.find(medium);
-    return pass(own != info.corrosion.end() && own->second >= part_.limits.corrosion_at_least);
+    return pass(grade_holds);
   }
   if (constraint.kind == Constraint::Kind::temperature) {
     const double service = *part_.limits.temperature;
     const auto lowest = reader_.value(Property::service_temperature_min, step.row);
-    auto highest = reader_.value(Property::loaded_temperature_max, step.row);
-    if (!highest) {
-      highest = reader_.value(Property::service_temperature_max, step.row);
-    }
+    const auto highest = highest_temperature(reader_, info, step.row);
     const bool finish_stands = finish == nullptr || !finish->service_temperature_max ||
                                service <= *finish->service_temperature_max;
     return pass((!lowest || service >= *lowest) && (!highest || service <= *highest) &&
@@ -239,56 +256,60 @@ void SizingProblem::evaluate_section(const CompiledCandidate& group, const Piece
   objectives[1] = cost;
 
   const Route& route = catalogue_.routes[group.candidate.route];
+  const auto& material = catalogue_.materials.info(group.candidate.material);
   for (std::size_t i = 0; i < group.constraints.size(); ++i) {
     const auto& constraint = group.constraints[i];
     double u = 0.0;
-    switch (constraint.kind) {
-      case Constraint::Kind::thickness_limit: u = pass(piece.step != nullptr); break;
-      case Constraint::Kind::blank: u = pass(piece.step == nullptr || bought.has_value()); break;
-      case Constraint::Kind::property:
-      case Constraint::Kind::corrosion:
-      case Constraint::Kind::temperature:
-        u = piece.step == nullptr ? 0.0 : material_utilisation(group, constraint, *piece.step);
-        break;
-      case Constraint::Kind::limit_state:
-        if (piece.step != nullptr && piece.applies[i]) {
-          const auto& resolved = piece.step->cases[constraint.load_case];
-          const CheckInput input{section, resolved.member, effects_[constraint.load_case],
-                                 member_limits_, length, constraint.factor};
-          if (resolved.depth_reference > 0.0 && section.height > resolved.depth_reference &&
-              resolved.member.flexural) {
-            MemberMaterial weaker = resolved.member;
-            *weaker.flexural *=
-                std::pow(resolved.depth_reference / section.height, resolved.depth_exponent);
-            u = constraint.state->utilisation({section, weaker, effects_[constraint.load_case],
-                                               member_limits_, length, constraint.factor});
-          } else {
-            u = constraint.state->utilisation(input);
-          }
-        }
-        break;
-      case Constraint::Kind::route_wall: {
-        const auto& material = catalogue_.materials.info(group.candidate.material);
-        const auto own = route.min_wall_by_class.find(material.material_class);
-        const double least = own != route.min_wall_by_class.end() ? own->second : route.section_min;
-        u = least / section.wall;
-        break;
+    if (constraint.kind == Constraint::Kind::thickness_limit) {
+      u = pass(piece.step != nullptr || piece.impossible);
+    } else if (constraint.kind == Constraint::Kind::corners) {
+      u = pass(!piece.impossible);
+    } else if (piece.step != nullptr) {
+      switch (constraint.kind) {
+        case Constraint::Kind::thickness_limit:
+        case Constraint::Kind::corners: break;
+        case Constraint::Kind::blank: u = pass(bought.has_value()); break;
+        case Constraint::Kind::property:
+        case Constraint::Kind::corrosion:
+        case Constraint::Kind::temperature:
+          u = material_utilisation(group, constraint, *piece.step, section);
+          break;
+        case Constraint::Kind::limit_state:
+          u = piece.applies[i] ? limit_utilisation(constraint, *piece.step, section) : 0.0;
+          break;
+        case Constraint::Kind::route_wall:
+          u = by_class(route.min_wall_by_class, material, route.section_min) / section.wall;
+          break;
+        case Constraint::Kind::route_section:
+          u = section.wall / by_class(route.max_wall_by_class, material, route.section_max);
+          break;
+        case Constraint::Kind::route_mass_min: u = route.mass_min / net_mass; break;
+        case Constraint::Kind::route_mass_max: u = net_mass / route.mass_max; break;
+        case Constraint::Kind::mass_cap: u = mass / *part_.limits.mass; break;
+        case Constraint::Kind::cost_cap: u = cost / *part_.limits.cost; break;
       }
-      case Constraint::Kind::route_section: u = section.wall / route.section_max; break;
-      case Constraint::Kind::route_mass_min: u = route.mass_min / net_mass; break;
-      case Constraint::Kind::route_mass_max: u = net_mass / route.mass_max; break;
-      case Constraint::Kind::mass_cap: u = mass / *part_.limits.mass; break;
-      case Constraint::Kind::cost_cap: u = cost / *part_.limits.cost; break;
     }
     utilisations[i] = u;
   }
+}
+
+double SizingProblem::limit_utilisation(const Constraint& constraint, const StepState& step,
+                                        const SectionProperties& section) const {
+  const auto& resolved = step.cases[constraint.load_case];
+  const auto check = [&](const MemberMaterial& material) {
+    return constraint.state->utilisation({section, material, effects_[constraint.load_case],
+                                          member_limits_, part_.body.length, constraint.factor});
+  };
+  // Only LVL changes with its depth; the copy is not worth making for the others.
+  return resolved.depth_reference > 0.0 ? check(resolved.at_depth(section.height))
+                                        : check(resolved.member);
 }
 
 void SizingProblem::evaluate(std::size_t group, std::span<const double> x,
                              std::span<double> objectives, std::span<double> utilisations) const {
   const auto& compiled = *groups_[group];
   const Piece& piece = piece_at(compiled, x[0]);
-  if (piece.item != nullptr || x[0] == piece.size) {
+  if (piece.item != nullptr || piece.impossible || x[0] == piece.size) {
     evaluate_section(compiled, piece, piece.section, objectives, utilisations);
   } else {
     evaluate_section(compiled, piece, scaled(piece.section, x[0] / piece.size), objectives,
@@ -306,7 +327,7 @@ SizingProblem::Detail SizingProblem::detail(std::size_t group, double x) const {
   const auto& compiled = *groups_[group];
   Detail out;
   out.piece = &piece_at(compiled, x);
-  out.section = out.piece->item != nullptr
+  out.section = out.piece->item != nullptr || out.piece->impossible
                     ? out.piece->section
                     : section_of(part_.body.shapes[compiled.candidate.shape],
                                  catalogue_.routes[compiled.candidate.route], x);

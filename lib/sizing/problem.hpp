@@ -35,6 +35,7 @@ struct Constraint {
     corrosion,
     temperature,
     thickness_limit,  ///< No strength is tabulated for so thick a piece.
+    corners,          ///< The corner radii of the standard do not fit the wall.
     blank,            ///< No bar or stock length is large enough.
     limit_state,
     route_wall,
@@ -60,7 +61,8 @@ struct Piece {
   const StepState* step = nullptr;  ///< Null: thicker than the table's last limit.
   const Blank* blank = nullptr;     ///< Machined parts.
   const StockItem* item = nullptr;  ///< Stock.
-  SectionProperties section;        ///< At `size`; other sizes of the piece are scaled from it.
+  bool impossible = false;  ///< There is no such section: its corners leave no wall.
+  SectionProperties section;  ///< At `size`; other sizes of the piece are scaled from it.
   double size = 0.0;
   std::vector<bool> applies;  ///< Per constraint: can this load case cause it here?
 };
@@ -74,7 +76,7 @@ struct CompiledCandidate {
   std::vector<Blank> blanks;
   std::optional<CandidateCost> cost;
   std::vector<Property> undecided;  ///< Needed and missing; the candidate is not solved then.
-  std::string undecided_limit;      ///< A property limit whose property has no value.
+  std::vector<std::string> undecided_limits;  ///< Limits of the job that a missing value leaves open.
 };
 
 /// A part's sizing as the solver sees it. One group a candidate; the variable is the height of the
@@ -87,7 +89,7 @@ class BISMAR_API SizingProblem : public BoxProblem {
  public:
   SizingProblem(const Part& part, const Catalogue& catalogue, const Settings& settings);
 
-  /// Adds a candidate; the returned reference holds until the next call.
+  /// Adds a candidate as the last group; the returned reference holds as long as the problem.
   const CompiledCandidate& add(const Candidate& candidate);
   [[nodiscard]] const CompiledCandidate& compiled(std::size_t group) const {
     return *groups_[group];
@@ -124,7 +126,9 @@ class BISMAR_API SizingProblem : public BoxProblem {
   [[nodiscard]] Detail detail(std::size_t group, double x) const;
 
   /// Multiplies a value of a material in every state, to ask what a better one would change.
-  void multiply(std::size_t material, Symbol symbol, double factor);
+  /// @return the states as they were, for restore().
+  std::vector<StepState> multiply(std::size_t material, Symbol symbol, double factor);
+  void restore(std::size_t material, const std::vector<StepState>& states);
 
   [[nodiscard]] const Part& part() const { return part_; }
   [[nodiscard]] const Catalogue& catalogue() const { return catalogue_; }
@@ -141,9 +145,9 @@ class BISMAR_API SizingProblem : public BoxProblem {
   /// What a material and route can be machined from, looked up once.
   const std::vector<UsableItem>& blank_stock_of(std::uint32_t material, std::uint32_t route);
   [[nodiscard]] StepState make_state(std::size_t material, std::size_t row) const;
-  void fill_from_class(std::size_t material,
-                       std::size_t load_case,
-                       ResolvedMaterial& resolved) const;
+  [[nodiscard]] ResolvedMaterial resolve_case(std::size_t material,
+                                              std::size_t row,
+                                              std::size_t load_case) const;
   [[nodiscard]] const Piece& piece_at(const CompiledCandidate& group, double x) const;
   [[nodiscard]] std::optional<Purchase> purchase(const CompiledCandidate& group,
                                                  const Piece& piece,
@@ -156,7 +160,11 @@ class BISMAR_API SizingProblem : public BoxProblem {
                         std::span<double> utilisations) const;
   [[nodiscard]] double material_utilisation(const CompiledCandidate& group,
                                             const Constraint& constraint,
-                                            const StepState& step) const;
+                                            const StepState& step,
+                                            const SectionProperties& section) const;
+  [[nodiscard]] double limit_utilisation(const Constraint& constraint,
+                                         const StepState& step,
+                                         const SectionProperties& section) const;
 
   const Part& part_;
   const Catalogue& catalogue_;

@@ -1,12 +1,14 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/study.hpp"
 
+#include <bismar/error.hpp>
 #include <bismar/exchange/ruler.hpp>
 #include <bismar/numeric/floating_point_guard.hpp>
 #include <bismar/sizing/front.hpp>
 
 #include <algorithm>
 #include <array>
+#include <cmath>
 #include <limits>
 #include <map>
 
@@ -27,9 +29,12 @@ std::string label_of(const Row& row, const Result& result, std::size_t index, co
   const auto labels = names(row.candidate, part, catalogue);
   switch (per) {
     case Per::design:
-      return index < result.designs.size() ? result.designs[index].id
-                                           : labels.material + "/" + labels.shape + "/" +
-                                                 labels.route + "/" + labels.finish;
+      // Designs that were not kept have no id; candidate and row tell them apart.
+      return index < result.designs.size()
+                 ? result.designs[index].id
+                 : labels.material + "/" + labels.shape + "/" + labels.route +
+                       (labels.treatment.empty() ? "" : "+" + labels.treatment) + "/" +
+                       labels.finish + " #" + std::to_string(index);
     case Per::material: return labels.material;
     case Per::shape: return labels.shape;
     case Per::route: return labels.route;
@@ -50,11 +55,12 @@ class Band {
 
   /// Breakpoint between the design that holds below and the one that holds above, over all ends of their
   /// price and density ranges; those of one material move together.
-  Range breakpoint(const Row& below, const Row& above) {
+  BreakpointBand breakpoint(const Row& below, const Row& above) {
     const auto low = corners(below);
     const auto high = corners(above);
     const bool same = below.candidate.material == above.candidate.material;
-    Range band{std::numeric_limits<double>::infinity(), 0.0};
+    double least = std::numeric_limits<double>::infinity();
+    double most = 0.0;
     for (std::size_t i = 0; i < low.size(); ++i) {
       for (std::size_t j = 0; j < high.size(); ++j) {
         if (same && i != j) {
@@ -65,17 +71,21 @@ class Band {
         // No mass saved at these ends: no worth of a kilogram makes the upper one the choice.
         const double alpha = saved <= 0.0 ? std::numeric_limits<double>::infinity()
                                           : std::max(0.0, paid / saved);
-        band.low = std::min(band.low, alpha);
-        band.high = std::max(band.high, alpha);
+        least = std::min(least, alpha);
+        most = std::max(most, alpha);
       }
     }
-    return band;
+    return {least, std::isfinite(most) ? std::optional(most) : std::nullopt};
   }
 
  private:
   std::array<Corner, 4> corners(const Row& row) {
     const auto& compiled = problem_.add(row.candidate);
     const auto detail = problem_.detail(problem_.groups() - 1, row.size);
+    if (detail.piece->step == nullptr || !detail.purchase) {
+      throw Error({Code::conflict, "result", {}, "a result of this part, catalogue and settings",
+                   "The result does not fit the part, catalogue and settings that it is read with."});
+    }
     const auto& step = *detail.piece->step;
     const auto density =
         problem_.catalogue().materials.value(Property::density, step.row).value_or(

@@ -1,6 +1,8 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/strength.hpp"
 
+#include "sizing/words.hpp"
+
 #include <bismar/error.hpp>
 
 #include <algorithm>
@@ -23,7 +25,9 @@ bool has(std::string_view text, std::string_view word) {
 
 /// Heat-treated tempers that EN 1999-1-1 puts into buckling class A: T6 and T7 with their variants
 /// (from memory of its table 3.2; every other temper counts as class B, which is on the safe side).
-bool is_class_a(std::string_view condition) { return has(condition, "T6") || has(condition, "T7"); }
+bool is_class_a(std::string_view condition) {
+  return starts_word(condition, "T6") || starts_word(condition, "T7");
+}
 
 /// Linear in the logarithm of time from 1 at an hour to the given factors.
 double at_time(double seconds, std::optional<double> at_1000h, double at_10y) {
@@ -51,12 +55,13 @@ Property k_mod(double seconds) {
 class Resolver {
  public:
   Resolver(const PropertyReader& reader, std::size_t material, std::size_t row,
-           const LoadCase& load_case, ServiceClass service_class)
+           const LoadCase& load_case, ServiceClass service_class, const std::set<Symbol>& filled)
       : reader_(reader),
         info_(reader.catalogue().materials.info(material)),
         row_(row),
         load_case_(load_case),
-        service_class_(service_class) {}
+        service_class_(service_class),
+        filled_(filled) {}
 
   ResolvedMaterial run() {
     read_values();
@@ -117,6 +122,11 @@ class Resolver {
     m.flexural = read(Property::flexural_strength);
     m.shear = read(Property::shear_strength);
     m.ceramic = info_.material_class == "ceramic" || info_.material_class == "glass";
+    for (const Symbol symbol : filled_) {
+      if (auto& value = value_of(m, symbol); !value) {
+        value = need(property_of(symbol));
+      }
+    }
   }
 
   void choose_rule() {
@@ -227,6 +237,7 @@ class Resolver {
   std::size_t row_;
   const LoadCase& load_case_;
   ServiceClass service_class_;
+  const std::set<Symbol>& filled_;
   ResolvedMaterial out_;
 };
 
@@ -236,6 +247,14 @@ bool is_metal(std::string_view material_class) {
   static constexpr std::array<std::string_view, 5> others = {"polymer", "composite", "wood",
                                                              "ceramic", "glass"};
   return std::find(others.begin(), others.end(), material_class) == others.end();
+}
+
+bool is_bath(const Finish& finish) { return contains_word(finish.process_words, "galvanising"); }
+
+bool is_hardened_bar_grade(const MaterialInfo& material) {
+  return contains_word(material.forms, "bar") &&
+         (has(material.condition, "quenched") || has(material.condition, "hardened") ||
+          has(material.condition, "tempered"));
 }
 
 bool is_cast(const MaterialInfo& material) {
@@ -255,6 +274,21 @@ Property property_of(Symbol symbol) {
     case Symbol::shear: return Property::shear_strength;
   }
   throw InternalError("property_of: unknown symbol");
+}
+
+std::optional<double> highest_temperature(const PropertyReader& reader,
+                                          const MaterialInfo& material, std::size_t row) {
+  if (const auto loaded = reader.value(Property::loaded_temperature_max, row)) {
+    return loaded;
+  }
+  if (!is_metal(material.material_class)) {
+    return std::nullopt;  // the service maximum of a polymer is an ageing limit
+  }
+  // Room-temperature strength of metals: full up to 100 C in EN 1993-1-2, table 3.1, and EN 1999-1-2 (from
+  // memory); above, the strength at temperature would be needed.
+  constexpr double room_strength_up_to = 373.15;
+  const auto service = reader.value(Property::service_temperature_max, row);
+  return service ? std::min(*service, room_strength_up_to) : room_strength_up_to;
 }
 
 const std::optional<double>& value_of(const MemberMaterial& material, Symbol symbol) {
@@ -316,8 +350,17 @@ std::optional<double> PropertyReader::class_median(Property property,
 }
 
 ResolvedMaterial resolve(const PropertyReader& reader, std::size_t material, std::size_t row,
-                         const LoadCase& load_case, ServiceClass service_class) {
-  return Resolver(reader, material, row, load_case, service_class).run();
+                         const LoadCase& load_case, ServiceClass service_class,
+                         const std::set<Symbol>& filled) {
+  return Resolver(reader, material, row, load_case, service_class, filled).run();
+}
+
+MemberMaterial ResolvedMaterial::at_depth(double depth) const {
+  MemberMaterial out = member;
+  if (depth_reference > 0.0 && depth > depth_reference && out.flexural) {
+    *out.flexural *= std::pow(depth_reference / depth, depth_exponent);
+  }
+  return out;
 }
 
 }  // namespace bismar

@@ -16,6 +16,10 @@ namespace bismar {
 
 [[nodiscard]] bool is_metal(std::string_view material_class);
 [[nodiscard]] bool is_cast(const MaterialInfo& material);
+/// Whether a finish is a bath that reaches the bore of a tube.
+[[nodiscard]] bool is_bath(const Finish& finish);
+/// Whether its strength comes from hardening and tempering, in a grade sold as bar.
+[[nodiscard]] bool is_hardened_bar_grade(const MaterialInfo& material);
 /// The mark of a value that was filled in: every use is flagged.
 [[nodiscard]] std::string class_median_note(Property property);
 /// The table property behind a symbol that a limit state reads.
@@ -45,6 +49,12 @@ class PropertyReader {
   mutable std::map<std::pair<std::string, Property>, std::optional<double>> medians_;
 };
 
+/// Highest temperature [K] at which the tabulated strength may be used: the loaded maximum of the row; for a metal
+/// without one 100 C, or its service maximum where that is lower. Nothing: not known.
+[[nodiscard]] std::optional<double> highest_temperature(const PropertyReader& reader,
+                                                        const MaterialInfo& material,
+                                                        std::size_t row);
+
 /// A material as the limit states see it, in one load case.
 struct ResolvedMaterial {
   MemberMaterial member;
@@ -53,6 +63,9 @@ struct ResolvedMaterial {
   double depth_reference =
       0.0;  ///< LVL: bending strength falls above this depth [m]; 0 = no size effect.
   double depth_exponent = 0.0;
+
+  /// The member at a depth: LVL weakened above its reference depth.
+  [[nodiscard]] MemberMaterial at_depth(double depth) const;
 };
 
 /// Which strength counts, by rule:
@@ -61,10 +74,13 @@ struct ResolvedMaterial {
 /// - otherwise brittle: largest principal stress.
 /// Typical strengths are divided by 1.25 and marked. Graded timber: k_mod / gamma_M of its row.
 /// Lasting loads: creep and long-term factors of the row, otherwise undecided beyond an hour.
+/// @param filled  Symbols whose gaps the class median fills (under Missing::class_median), before any factor
+///   is applied, so that a filled value is treated as the row's own would be.
 [[nodiscard]] BISMAR_API ResolvedMaterial resolve(const PropertyReader& reader,
                                                   std::size_t material,
                                                   std::size_t row,
                                                   const LoadCase& load_case,
-                                                  ServiceClass service_class);
+                                                  ServiceClass service_class,
+                                                  const std::set<Symbol>& filled = {});
 
 }  // namespace bismar

@@ -21,22 +21,21 @@ std::string missing_text(const CompiledCandidate& compiled) {
   for (const Property property : compiled.undecided) {
     out += (out.empty() ? "" : ", ") + std::string(info(property).name);
   }
-  if (!compiled.undecided_limit.empty()) {
-    out += (out.empty() ? "" : ", ") + compiled.undecided_limit;
+  for (const auto& limit : compiled.undecided_limits) {
+    out += (out.empty() ? "" : ", ") + limit;
   }
   return out;
 }
 
-std::string infeasible_reason(const CompiledCandidate& compiled, const GroupSolution& solution) {
+/// The constraints that exclude a candidate: one that fails everywhere, or two that clash.
+std::vector<std::size_t> failed_constraints(const GroupSolution& solution) {
   if (solution.excluded_by != SIZE_MAX) {
-    return compiled.constraints[solution.excluded_by].label;
+    return {solution.excluded_by};
   }
-  if (solution.clash_falling != SIZE_MAX) {
-    const auto& first = compiled.constraints[solution.clash_falling].label;
-    const auto& second = compiled.constraints[solution.clash_rising].label;
-    return first == second ? first : first + " against " + second;
+  if (solution.clash_falling == solution.clash_rising) {
+    return {solution.clash_falling};
   }
-  return "no size in the range asked for";
+  return {solution.clash_falling, solution.clash_rising};
 }
 
 /// Calls back at most about twenty times a second.
@@ -118,6 +117,8 @@ class Enumeration {
       candidate.stock = from_stock ? lists_[s - part_.body.shapes.size()] : Candidate::none;
       if (!can_leave_[r][s]) {
         solved_.cannot_exist[Rule::output_form] += each;
+      } else if (!from_stock && drawn_form_rules(info, route, part_.body.shapes[s].family)) {
+        solved_.cannot_exist[Rule::input_form] += each;
       } else if (from_stock && !has_stock(info, route, candidate.stock)) {
         solved_.cannot_exist[Rule::stock_family] += each;
       } else {
@@ -223,7 +224,7 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
   Outcome out;
   out.candidate = compiled.candidate;
   out.group = group;
-  if (!compiled.undecided.empty() || !compiled.undecided_limit.empty()) {
+  if (!compiled.undecided.empty() || !compiled.undecided_limits.empty()) {
     out.kind = problem.settings().missing == Missing::exclude ? Outcome::Kind::excluded
                                                              : Outcome::Kind::undecided;
     out.reason = missing_text(compiled);
@@ -240,7 +241,10 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
     throw InternalError("sizing: a candidate with one size is not solvable exactly");
   }
   if (solution.points.empty()) {
-    out.reason = infeasible_reason(compiled, solution);
+    out.failed = failed_constraints(solution);
+    for (const auto constraint : out.failed) {
+      out.reason += (out.reason.empty() ? "" : " against ") + compiled.constraints[constraint].label;
+    }
     out.least_utilisation = solution.least_utilisation;
     return out;
   }
@@ -258,9 +262,13 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
       }
       x *= 1.0 + step;
     }
-    out.points.push_back({x, objectives[0], objectives[1]});
+    if (*std::max_element(utilisations.begin(), utilisations.end()) <= 1.0) {
+      out.points.push_back({x, objectives[0], objectives[1]});
+    } else {
+      out.reason = "INTERNAL: the plain path does not confirm it";
+    }
   }
-  out.kind = Outcome::Kind::feasible;
+  out.kind = out.points.empty() ? Outcome::Kind::infeasible : Outcome::Kind::feasible;
   return out;
 }
 
@@ -279,7 +287,13 @@ Solved solve_candidates(const Part& part, const Catalogue& catalogue, const Sett
       break;
     }
     enumeration.material(m, [&](const Candidate& candidate) {
-      solved.problem->add(candidate);
+      const auto& compiled = solved.problem->add(candidate);
+      const bool bought_thickness = candidate.shape != Candidate::none &&
+                                    takes_sheet_thickness(catalogue.routes[candidate.route]);
+      if (bought_thickness && compiled.variable.values.empty()) {
+        ++solved.cannot_exist[Rule::stock_thickness];
+        return;
+      }
       solved.outcomes.push_back(
           solve_group(*solved.problem, solved.problem->groups() - 1, solved.evaluations));
     });

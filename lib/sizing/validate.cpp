@@ -69,6 +69,18 @@ class PartCheck {
     }
   }
 
+  /// A word twice would give the same design twice.
+  void no_repeats(const std::vector<std::string>& words, const std::string& where,
+                  const std::string& what) {
+    std::set<std::string> seen;
+    for (std::size_t i = 0; i < words.size(); ++i) {
+      if (!seen.insert(words[i]).second) {
+        fault(Code::duplicate, where + "/" + std::to_string(i), words[i], "each once",
+              "The " + what + " \"" + words[i] + "\" stands twice; leave one of them out.");
+      }
+    }
+  }
+
   void numbers() {
     positive(part_.body.length, "/member/length", "length");
     if (!(part_.quantity >= 1.0) || !std::isfinite(part_.quantity)) {
@@ -88,7 +100,14 @@ class PartCheck {
             "The member has neither a shape nor a stock list to try. Name at least one, or \"stock\": \"all\".");
     }
     for (std::size_t i = 0; i < part_.body.shapes.size(); ++i) {
-      shape(part_.body.shapes[i], "/member/shapes/" + std::to_string(i));
+      const std::string where = "/member/shapes/" + std::to_string(i);
+      shape(part_.body.shapes[i], where);
+      for (std::size_t j = 0; j < i; ++j) {
+        if (part_.body.shapes[j] == part_.body.shapes[i]) {
+          fault(Code::duplicate, where, std::string(name(part_.body.shapes[i].family)), "each once",
+                "This shape stands twice with the same ratios and sizes; leave one of them out.");
+        }
+      }
     }
   }
 
@@ -195,6 +214,7 @@ class PartCheck {
       }
     }
     known_words(part_.body.stock, lists, "/member/stock", "stock list of sections");
+    no_repeats(part_.body.stock, "/member/stock", "stock list");
   }
 
   void load_cases() {
@@ -224,6 +244,11 @@ class PartCheck {
       if (!(one.duration >= 0.0) || !std::isfinite(one.duration)) {
         fault(Code::out_of_range, where + "/duration", plain(one.duration), "zero or more",
               "The duration of a load cannot be negative.");
+      }
+      if (one.loads.empty() && one.direct && (part_.limits.deflection || part_.limits.twist)) {
+        fault(Code::conflict, where + "/direct", "", "loads at their stations",
+              "The limits on deflection and twist need to know where the loads act; the load case \"" + one.name +
+                  "\" gives internal forces only. Give loads with stations, or leave those limits out.");
       }
       if (std::isfinite(part_.body.length) && part_.body.length > 0.0) {
         try {
@@ -321,6 +346,8 @@ class PartCheck {
     known_words(limits.forms, forms, "/limits/forms", "form");
     known_words(limits.processes, processes, "/limits/processes", "process");
     known_words(part_.finishes, finishes, "/finishes", "finish");
+    no_repeats(part_.finishes, "/finishes", "finish");
+    no_repeats(limits.routes, "/limits/routes", "route");
     if (part_.finishes.empty()) {
       fault(Code::empty, "/finishes", "", "at least \"none\"",
             "The list of finishes is empty; write \"none\" for no finish.");

@@ -24,7 +24,8 @@ class OneVariable {
         variable_(problem.variables(group)[0]),
         objectives_(problem.objectives()),
         utilisations_(problem.constraints(group)),
-        least_(utilisations_.size(), infinity) {
+        least_(utilisations_.size(), infinity),
+        closest_x_(variable_.upper) {
     for (std::size_t i = 0; i < utilisations_.size(); ++i) {
       falls_.push_back(problem.utilisation_trend(group, i, 0) == Trend::falls);
     }
@@ -76,17 +77,35 @@ class OneVariable {
     }
   }
 
-  /// Objectives rise over the whole range, so the first feasible point met from below is the only
-  /// non-dominated one. On a piece the falling utilisations bound the size from below and the rising
-  /// ones from above: the least size that the falling ones allow is feasible, or nothing in the piece is.
+  /// On a piece objectives rise, so its least feasible size is its only non-dominated point: the falling
+  /// utilisations bound the size from below and the rising ones from above, and the least size that the
+  /// falling ones allow is feasible, or nothing in the piece is. Between pieces anything may jump, so each is solved.
   void run_pieces() {
     double from = variable_.lower;
-    for (std::size_t p = 0; p <= variable_.breakpoints.size() && solution_.points.empty(); ++p) {
+    for (std::size_t p = 0; p <= variable_.breakpoints.size(); ++p) {
       const double to =
           p < variable_.breakpoints.size() ? variable_.breakpoints[p] : variable_.upper;
-      solve_piece(from, to);
+      if (!cannot_improve(from)) {
+        solve_piece(from, to);
+      }
       from = std::nextafter(to, infinity);
     }
+  }
+
+  /// Whether a point found before is no worse in every objective than the whole piece that begins here.
+  bool cannot_improve(double from) {
+    if (solution_.points.empty()) {
+      return false;
+    }
+    evaluate(from);
+    return std::any_of(solution_.points.begin(), solution_.points.end(), [&](const Point& point) {
+      for (std::size_t i = 0; i < objectives_.size(); ++i) {
+        if (point.objectives[i] > objectives_[i]) {
+          return false;
+        }
+      }
+      return true;
+    });
   }
 
   void solve_piece(double from, double to) {
@@ -184,7 +203,7 @@ class OneVariable {
   std::vector<double> least_;
   std::vector<bool> falls_;
   double closest_ = infinity;
-  double closest_x_ = 0.0;
+  double closest_x_;
 };
 
 bool solvable(const BoxProblem& problem, std::size_t group) {

@@ -228,6 +228,41 @@ TEST_CASE("a stock family never takes a foreign material") {
   }
 }
 
+TEST_CASE("whatever metal is sold as bar, tube or section can be sawn to length") {
+  // Common practice, no source; hard grades are sawn before they are hardened.
+  const Route& sawing = *starter().find_route("bar-sawing");
+  std::set<std::string> classes;
+  int materials = 0;
+  for_every_material([&](const MaterialInfo& m) {
+    const bool sold_long = has(m.forms, "bar") || has(m.forms, "tube") || has(m.forms, "section");
+    const bool metal = m.material_class != "polymer" && m.material_class != "composite" &&
+                       m.material_class != "wood" && m.material_class != "ceramic";
+    if (!sold_long || !metal) return;
+    INFO(m.id);
+    ++materials;
+    classes.insert(m.material_class);
+    CHECK(has(m.processes, "sawing"));
+    CHECK(has(sawing.classes, m.material_class));
+  });
+  CHECK(materials > 150);
+  CHECK(classes == std::set<std::string>{"aluminium",
+                                         "copper alloy",
+                                         "magnesium",
+                                         "nickel alloy",
+                                         "stainless steel",
+                                         "steel",
+                                         "titanium"});
+  // Every class of the bar lists has the route by which a bar becomes a part.
+  for (const char* id : {"round-bar", "square-bar", "flat-bar"}) {
+    for (const StockItem& item : starter().find_stock(id)->items) {
+      for (const std::string& material_class : item.classes) {
+        INFO(item.id << ": " << material_class);
+        CHECK(has(sawing.classes, material_class));
+      }
+    }
+  }
+}
+
 TEST_CASE("every starter size is made of at least one material, and every word is known") {
   for (const StockList& list : starter().stock) {
     for (const StockItem& item : list.items) {

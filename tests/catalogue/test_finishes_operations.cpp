@@ -74,6 +74,9 @@ TEST_CASE("the starter finishes are whole and in SI units") {
   CHECK_FALSE(get(finishes, "wood-impregnation").added_mass.has_value());
   CHECK(get(finishes, "passivation").corrosion_after.at("sea water") == Rating::fair);
   CHECK(get(finishes, "paint-polymer").corrosion_after.empty());
+  // A single layer without zinc or primer under it: common practice, no source.
+  CHECK(get(finishes, "powder-coat").corrosion_after.at("fresh water") == Rating::fair);
+  CHECK(get(finishes, "powder-coat").corrosion_after.at("sea water") == Rating::fair);
 }
 
 TEST_CASE("the layer of a galvanised part weighs what its thickness says") {

@@ -122,6 +122,24 @@ TEST_CASE(
   CHECK(std::isinf(secant_stress(column)));
 }
 
+TEST_CASE("Aluminium walls have their own class 3 limits") {
+  // EN 1999-1-1:2007 Table 6.2, unwelded: internal 22 and 18 epsilon, outstand 6 and 5; 6.1.4.3:
+  // beta 0.40 b/t for a web in bending, 3 sqrt(D/t) for a tube. 22 seen in a worked example, the
+  // rest from memory.
+  using Kind = PlateElement::Kind;
+  CHECK(aluminium_wall_epsilon(250e6) == 1.0);
+  CHECK(aluminium_wall_epsilon(200e6) == Approx(1.118).epsilon(1e-4));
+  const double epsilon = 1.2;
+  for (const bool class_a : {true, false}) {
+    const double internal = class_a ? 22.0 : 18.0;
+    const auto limit = [&](Kind kind) { return aluminium_class_3_limit(kind, epsilon, class_a); };
+    CHECK(limit(Kind::internal_compression) == Approx(internal * epsilon));
+    CHECK(0.40 * limit(Kind::internal_bending) == Approx(internal * epsilon));
+    CHECK(3.0 * std::sqrt(limit(Kind::round)) == Approx(internal * epsilon));
+    CHECK(limit(Kind::outstand) == Approx((class_a ? 6.0 : 5.0) * epsilon));
+  }
+}
+
 TEST_CASE("Column and wall functions name a wrong argument") {
   CHECK_THROWS_AS(euler_critical_load(0.0, 1.0, 1.0), Error);
   CHECK_THROWS_AS(relative_slenderness(1.0, -1.0, 1.0), Error);
@@ -131,6 +149,8 @@ TEST_CASE("Column and wall functions name a wrong argument") {
   CHECK_THROWS_AS(aisc_critical_stress(1.0, std::nan(""), 1.0), Error);
   CHECK_THROWS_AS(wall_epsilon(0.0, 1.0), Error);
   CHECK_THROWS_AS(class_3_limit(PlateElement::Kind::round, 0.0), Error);
+  CHECK_THROWS_AS(aluminium_wall_epsilon(-1.0), Error);
+  CHECK_THROWS_AS(aluminium_class_3_limit(PlateElement::Kind::round, std::nan(""), true), Error);
   try {
     (void)secant_stress({});
   } catch (const Error& error) {

@@ -55,9 +55,9 @@ struct Route {
   std::vector<std::string> leaves;
   std::string follows;  ///< Route that must come before, or empty.
   /// Conditions whose strength this step sets anew, so that hot shaping before it loses nothing: a
-  /// word holds for every condition that contains it ("T6" for "T6, bar" and "T651"); see
-  /// `restores`. Treatments have them, and the primary routes that quench or cool in control by
-  /// themselves.
+  /// word holds for every condition that contains it at the start of a word ("T6" for "T6, bar" and
+  /// "T651", not for "QT650"); see `restores`. Treatments have them, and the primary routes that
+  /// quench or cool in control by themselves.
   std::vector<std::string> restores;
   Range tooling_cost;  ///< [currency] per tool set, at the reference mass.
   Range rate;          ///< [1/s] parts, [m/s] or [kg/s] by basis, at that mass.
@@ -79,6 +79,7 @@ struct Route {
   double section_min = 0.0;         ///< Least wall or thickness [m].
   double section_max = 0.0;         ///< Largest [m].
   std::map<std::string, double, std::less<>> min_wall_by_class;  ///< [m], overrides section_min.
+  std::map<std::string, double, std::less<>> max_wall_by_class;  ///< [m], overrides section_max.
   Range economic_batch;            ///< Advice: cost counts it already.
   Range tolerance;                 ///< On a dimension [m].
   std::optional<Range> roughness;  ///< Ra [m].
@@ -89,7 +90,9 @@ struct Route {
   std::size_t line = 0;
 };
 
-/// Whether this step sets anew the strength of a material of this class in this condition.
+/// Whether this step sets anew the strength of a material of this class in this condition: the
+/// route serves the class, and one of its words stands in the condition, letter by letter, behind
+/// no letter or digit (ASCII).
 [[nodiscard]] BISMAR_API bool restores(const Route& route,
                                        std::string_view material_class,
                                        std::string_view condition);
@@ -146,8 +149,9 @@ struct Operation {
 
 /// Reads primary routes, treatments and joining processes.
 /// @throws bismar::Error  also: missing: no rate in the column of its basis; conflict: rates of two
-///   bases, labour and other overhead that do not add up to the overhead (0.5 %), a route that
-///   follows itself; unknown_name: `follows` names no route of the table.
+///   bases, labour and other overhead that do not add up to the overhead (0.5 %), a wall of a class
+///   that the route does not serve, a largest wall below the least, a route that follows itself;
+///   unknown_name: `follows` names no route of the table.
 [[nodiscard]] BISMAR_API std::vector<Route> read_routes(const std::string& path,
                                                         const TableFormat& format = {});
 

@@ -45,7 +45,9 @@ struct ResourceCost {
 [[nodiscard]] BISMAR_API std::optional<double> break_even_quantity(double fixed_a, double unit_a,
                                                                    double fixed_b, double unit_b);
 
-/// Parts of `length` out of one bar with a saw cut of `kerf` between them: floor((B + k) / (l + k)).
+/// Parts of `length` out of one bar with a saw cut of `kerf` between them: floor((B + k) / (l + k)), where a quotient
+/// within 1e-12 of a whole number counts as that number.
+/// @throws bismar::Error  out_of_range: a negative or infinite bar or kerf, a length that is not positive.
 [[nodiscard]] BISMAR_API std::uint64_t pieces_per_bar(double bar, double length, double kerf);
 
 /// Which end of every range a cost is reckoned at.

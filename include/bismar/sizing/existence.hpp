@@ -39,8 +39,9 @@ struct Exclusion {
 /// Whether the route ends with a stock section unchanged (sawing), and so never makes a free size.
 [[nodiscard]] BISMAR_API bool keeps_stock(const Route& route);
 
-/// Whether the route ends with a flat part cut from sheet, plate or board: its thickness is a bought one.
-[[nodiscard]] BISMAR_API bool cuts_sheet(const Route& route);
+/// Whether the wall of what the route leaves is that of a bought sheet, plate or board: flat parts cut from it,
+/// tubes rolled from it.
+[[nodiscard]] BISMAR_API bool takes_sheet_thickness(const Route& route);
 
 /// Whether the route removes material from a blank (machining): its strength was set in the blank.
 [[nodiscard]] BISMAR_API bool machines_blank(const Route& route);
@@ -70,6 +71,10 @@ struct Exclusion {
                                                              const Route& route);
 [[nodiscard]] BISMAR_API std::optional<Exclusion> shape_rules(const Route& route,
                                                              SectionFamily family, bool from_stock);
+/// Extruded and pultruded shapes need a row for that product form: tube, bar or section.
+[[nodiscard]] BISMAR_API std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material,
+                                                                  const Route& route,
+                                                                  SectionFamily family);
 [[nodiscard]] BISMAR_API std::optional<Exclusion> finish_rules(const MaterialInfo& material,
                                                               const Finish& finish);
 /// Treatments (indices into `catalogue.routes`) that the candidate needs: {none} when it needs none, empty when

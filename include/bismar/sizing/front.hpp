@@ -27,7 +27,7 @@ struct RunOptions {
 /// flush-to-zero or rounding mode of the caller.
 ///
 /// @throws bismar::Error  every fault of the part (see validate()).
-/// @throws bismar::InternalError  when a reported design differs from its re-evaluation by more than 1e-12.
+/// A design whose re-evaluation on the plain path differs by more than 1e-12 is left out and named in the notes.
 [[nodiscard]] BISMAR_API Result front(const Part& part, const Catalogue& catalogue,
                                       const Settings& settings = {}, const RunOptions& run = {});
 
@@ -41,6 +41,9 @@ struct GroupedFront {
                                                           GroupBy group_by, const Settings& settings = {});
 
 /// The exchange ruler of a result: which choice has the least Z = cost + alpha mass for which alpha.
+///
+/// @param part, catalogue, settings  Those that the result was made with: its designs are looked up in them.
+/// @throws bismar::Error  conflict: they do not fit the result.
 [[nodiscard]] BISMAR_API ExchangeRuler exchange_ruler(const Result& result, const Part& part,
                                                       const Catalogue& catalogue,
                                                       Per per = Per::material,
@@ -66,7 +69,8 @@ struct Answer {
 
 /// Re-evaluates one candidate at one size on the plain scalar path.
 /// @param size height [m], or the index of the item for stock.
-/// @throws bismar::Error  when the candidate cannot exist or a property it needs is missing.
+/// @throws bismar::Error  when the part does not admit the candidate, it cannot exist, a property it needs is
+///   missing, or the size is not one of those that the part asks for.
 [[nodiscard]] BISMAR_API Design evaluate(const Part& part, const Catalogue& catalogue,
                                          const Candidate& candidate, double size,
                                          const Settings& settings = {});

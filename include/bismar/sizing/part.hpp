@@ -22,6 +22,7 @@ struct Sizes {
   std::string series = {};          ///< "R10", "R20", ...: preferred numbers in millimetres.
   std::vector<double> values = {};  ///< [m]
 
+  friend bool operator==(const Sizes&, const Sizes&) = default;
   [[nodiscard]] static Sizes any() { return {}; }
   [[nodiscard]] static Sizes multiples_of(double step) { return {Kind::step, step, {}, {}}; }
   [[nodiscard]] static Sizes preferred(std::string series) {
@@ -41,6 +42,7 @@ struct Shape {
   double height_min = 4e-3;               ///< [m]
   double height_max = 0.5;                ///< [m]
   Sizes sizes = {};
+  friend bool operator==(const Shape&, const Shape&) = default;
 };
 
 /// Options of the short forms below.

@@ -125,6 +125,12 @@ struct Result {
 /// The level at which a choice counts as one.
 enum class Per : std::uint8_t { design, material, shape, route };
 
+/// Where a breakpoint may lie over the price and density ranges of its two neighbours.
+struct BreakpointBand {
+  double low = 0.0;            ///< [currency/kg]
+  std::optional<double> high;  ///< [currency/kg]; absent: at some ends no worth of a kilogram changes the choice.
+};
+
 /// A stretch of the exchange constant with its choice.
 struct NamedStretch {
   double from = 0.0;           ///< [currency/kg], inclusive.
@@ -147,7 +153,7 @@ struct NamedStretch {
   };
   std::vector<RunnerUp> runners_up;
   /// Band of the lower breakpoint over the price and density ranges of the two neighbours [currency/kg].
-  std::optional<Range> from_band;
+  std::optional<BreakpointBand> from_band;
 };
 
 struct UnsupportedDesign {

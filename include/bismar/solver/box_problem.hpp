@@ -60,7 +60,7 @@ class BISMAR_API BoxProblem {
   [[nodiscard]] virtual std::span<const Variable> variables(std::size_t group) const = 0;
   /// Number of utilisations of a group.
   [[nodiscard]] virtual std::size_t constraints(std::size_t group) const = 0;
-  /// Trend of objective `i` in variable `v` over its whole range, jumps at breakpoints included.
+  /// Trend of objective `i` in variable `v`, on each piece between breakpoints.
   [[nodiscard]] virtual Trend objective_trend(std::size_t group, std::size_t i,
                                               std::size_t v) const = 0;
   /// Trend of utilisation `i` in variable `v`, on each piece between breakpoints.

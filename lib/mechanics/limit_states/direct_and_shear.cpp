@@ -28,13 +28,6 @@ bool is_sheared(const LoadEffects& effects) {
          });
 }
 
-/// Bending strength; a table without one: the lower of tensile and compressive.
-double bending_strength(const MemberMaterial& material) {
-  return material.flexural ? *material.flexural
-                           : std::min(needed(material.tensile, Symbol::tensile),
-                                      needed(material.compressive, Symbol::compressive));
-}
-
 double direct_ratio(const StationStresses& s, const MemberMaterial& material) {
   double ratio = 0.0;
   if (s.axial > 0.0) {

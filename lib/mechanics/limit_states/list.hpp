@@ -13,6 +13,7 @@ const LimitState& direct_and_shear_limit_state();
 const LimitState& deflection_limit_state();
 const LimitState& twist_limit_state();
 const LimitState& flexural_buckling_limit_state();
+const LimitState& compression_bending_limit_state();
 const LimitState& wall_slenderness_limit_state();
 const LimitState& slenderness_limit_state();
 const LimitState& envelope_limit_state();

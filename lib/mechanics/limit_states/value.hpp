@@ -4,6 +4,7 @@
 #include <bismar/error.hpp>
 #include <bismar/mechanics/limit_state.hpp>
 
+#include <algorithm>
 #include <optional>
 #include <string>
 
@@ -16,6 +17,14 @@ inline double needed(const std::optional<double>& value, Symbol symbol) {
     throw InternalError("a limit state was evaluated without " + std::string(name(symbol)));
   }
   return *value;
+}
+
+/// Bending strength of a material that is not held against yield [Pa]; a table without one: the
+/// lower of tensile and compressive.
+inline double bending_strength(const MemberMaterial& material) {
+  return material.flexural ? *material.flexural
+                           : std::min(needed(material.tensile, Symbol::tensile),
+                                      needed(material.compressive, Symbol::compressive));
 }
 
 }  // namespace bismar::mechanics

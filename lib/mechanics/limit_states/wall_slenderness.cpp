@@ -99,6 +99,22 @@ Basis basis(const CheckInput& input) {
   return result;
 }
 
+bool is_aluminium(ColumnLaw law) {
+  return law == ColumnLaw::aluminium_class_a || law == ColumnLaw::aluminium_class_b;
+}
+
+double material_epsilon(const MemberMaterial& material, double stress) {
+  return is_aluminium(material.column_law) ? aluminium_wall_epsilon(stress)
+                                           : wall_epsilon(stress, needed(material.E, Symbol::E));
+}
+
+double limit_of(PlateElement::Kind kind, const MemberMaterial& material, double epsilon) {
+  return is_aluminium(material.column_law)
+             ? aluminium_class_3_limit(
+                   kind, epsilon, material.column_law == ColumnLaw::aluminium_class_a)
+             : class_3_limit(kind, epsilon);
+}
+
 struct Worst {
   PlateElement plate;
   PlateElement::Kind kind = PlateElement::Kind::round;
@@ -107,13 +123,13 @@ struct Worst {
 };
 
 Worst worst_wall(const CheckInput& input, double stress) {
-  const double epsilon = wall_epsilon(stress, needed(input.material.E, Symbol::E));
+  const double epsilon = material_epsilon(input.material, stress);
   const Bending bends = bending(input.effects);
   Worst worst;
   worst.ratio = -1.0;
   for (const PlateElement& plate : input.section.plates) {
     const PlateElement::Kind kind = acting_kind(plate, input, bends);
-    const double limit = class_3_limit(kind, epsilon);
+    const double limit = limit_of(kind, input.material, epsilon);
     if (plate.ratio / limit > worst.ratio) {
       worst = {.plate = plate, .kind = kind, .limit = limit, .ratio = plate.ratio / limit};
     }
@@ -140,7 +156,8 @@ class WallSlenderness final : public LimitState {
   std::string_view id() const override { return "wall slenderness"; }
   std::string_view source() const override {
     return "class 3 limits of EN 1993-1-1:2005 Table 5.2; on acting stress 5.5.2(9), only where no "
-           "member buckling is verified, 5.5.2(10)";
+           "member buckling is verified, 5.5.2(10); aluminium EN 1999-1-1:2007 Table 6.2 (from "
+           "memory), on acting stress likewise";
   }
   /// On the acting stress, as for stability; the plain limit has no factor.
   double default_factor(const MemberMaterial&) const override { return 1.5; }
@@ -154,6 +171,9 @@ class WallSlenderness final : public LimitState {
                             const MemberMaterial& material) const override {
     if (!is_compressed(effects)) {
       return {};
+    }
+    if (is_aluminium(material.column_law)) {
+      return {strength_symbol(material)};
     }
     return {Symbol::E, strength_symbol(material)};
   }
@@ -191,7 +211,7 @@ Explanation WallSlenderness::explain(const CheckInput& input) const {
   }
   const Worst worst = worst_wall(input, on.stress);
   const double u = utilisation(input);
-  const double epsilon = wall_epsilon(on.stress, *input.material.E);
+  const double epsilon = material_epsilon(input.material, on.stress);
   text.line = "Wall slenderness: " + std::string(name(worst.kind)) + " = " +
               number(worst.plate.ratio) + " against a class 3 limit of " + number(worst.limit) +
               (on.plain ? " at the material's strength" : " on the acting stress") +
@@ -203,8 +223,14 @@ Explanation WallSlenderness::explain(const CheckInput& input) const {
                : "No axial compression: the limit is taken at the factored acting compression, " +
                      number(input.factor) + " x " + megapascals(on.acting) + " = " +
                      megapascals(on.stress) + ".");
-  text.steps.push_back("epsilon = root of (235 MPa / " + megapascals(on.stress) + " x " +
-                       gigapascals(*input.material.E) + " / 210 GPa) = " + number(epsilon) + ".");
+  text.steps.push_back(
+      is_aluminium(input.material.column_law)
+          ? "Aluminium class " +
+                std::string(input.material.column_law == ColumnLaw::aluminium_class_a ? "A" : "B") +
+                ": epsilon = root of (250 MPa / " + megapascals(on.stress) +
+                ") = " + number(epsilon) + "."
+          : "epsilon = root of (235 MPa / " + megapascals(on.stress) + " x " +
+                gigapascals(*input.material.E) + " / 210 GPa) = " + number(epsilon) + ".");
   text.steps.push_back("u = " + number(worst.plate.ratio) + " / " + number(worst.limit) + " = " +
                        number(u) + ".");
   return text;

@@ -198,16 +198,15 @@ double SizingProblem::material_utilisation(const CompiledCandidate& group,
   if (constraint.kind == Constraint::Kind::corrosion) {
     const auto& medium = *part_.limits.medium;
     const bool grade_holds = info.corrosion.at(medium) >= part_.limits.corrosion_at_least;
-    // The finish decides where it states a rating; otherwise the grade's own stands. The bore of a tube is only
-    // finished by a bath: elsewhere the grade has to hold out by itself.
-    if (finish != nullptr) {
-      if (const auto after = finish->corrosion_after.find(medium);
-          after != finish->corrosion_after.end()) {
-        const bool finish_holds = after->second >= part_.limits.corrosion_at_least;
-        return pass(finish_holds && (grade_holds || !is_hollow(section) || is_bath(*finish)));
-      }
+    if (grade_holds || finish == nullptr) {
+      return pass(grade_holds);
     }
-    return pass(grade_holds);
+    // A finish helps where it states a rating; under it the grade holds out as well as it does by itself. The
+    // bore of a tube is only finished by a bath.
+    const auto after = finish->corrosion_after.find(medium);
+    return pass(after != finish->corrosion_after.end() &&
+                after->second >= part_.limits.corrosion_at_least &&
+                (!is_hollow(section) || is_bath(*finish)));
   }
   if (constraint.kind == Constraint::Kind::temperature) {
     const double service = *part_.limits.temperature;

@@ -254,7 +254,7 @@ TEST_CASE("a missing corrosion rating is undecided, and timber in water too") {
   CHECK(wet.funnel.count(FunnelLine::Stage::undecided) > 0);
 }
 
-TEST_CASE("paint outside does not protect the bore of a tube; a zinc bath does") {
+TEST_CASE("paint outside does not protect the bore of a tube, a zinc bath does") {
   Part part = starter_lever();
   part.body.shapes.clear();
   part.body.stock = {"chs", "round-bar"};

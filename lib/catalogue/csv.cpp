@@ -384,7 +384,7 @@ std::string read_table_file(const std::string& path) {
     Fault fault;
     fault.code = Code::table_unreadable;
     fault.where = path;
-    fault.message = "the table cannot be read: " + reason + ".";
+    fault.message = "the file cannot be read: " + reason + ".";
     return Error(std::move(fault));
   };
   std::error_code status_error;

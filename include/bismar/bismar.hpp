@@ -1,7 +1,7 @@
 // SPDX-License-Identifier: MIT
-/// Everything of bismar::core, lowest floor first. Jobs in JSON (bismar/job/...), the evolutionary engine
-/// (bismar/evolve/...) and the Eigen bridge (bismar/eigen/...) are libraries of their own and are
-/// included by name.
+/// Everything of bismar::core, lowest floor first. Jobs in JSON (bismar/job/...), the evolutionary
+/// engine (bismar/evolve/...) and the Eigen bridge (bismar/eigen/...) are libraries of their own
+/// and are included by name.
 #pragma once
 
 #include <bismar/error.hpp>

@@ -18,15 +18,15 @@ namespace bismar {
 /// that a stored code keeps its meaning; which code an input gives is documented and tested.
 enum class Code : std::int32_t {
   // 1..: arguments
-  invalid_argument = 1,   ///< A value that the function cannot accept.
-  not_finite = 2,         ///< NaN or infinity where a finite number is needed.
-  out_of_range = 3,       ///< A finite number outside its documented range.
-  missing = 4,            ///< Something required is absent.
-  conflict = 5,           ///< Two statements that cannot both hold.
-  duplicate = 6,          ///< The same name or id twice.
-  unknown_name = 7,       ///< A word that is in none of the allowed lists.
-  empty = 8,              ///< A list or table with nothing in it.
-  unsupported = 9,        ///< Understood, but this version cannot do it.
+  invalid_argument = 1,  ///< A value that the function cannot accept.
+  not_finite = 2,        ///< NaN or infinity where a finite number is needed.
+  out_of_range = 3,      ///< A finite number outside its documented range.
+  missing = 4,           ///< Something required is absent.
+  conflict = 5,          ///< Two statements that cannot both hold.
+  duplicate = 6,         ///< The same name or id twice.
+  unknown_name = 7,      ///< A word that is in none of the allowed lists.
+  empty = 8,             ///< A list or table with nothing in it.
+  unsupported = 9,       ///< Understood, but this version cannot do it.
   // 50..: text with units
   unit_missing = 50,      ///< A bare number where a unit is needed.
   unit_unknown = 51,      ///< No such unit.
@@ -39,9 +39,9 @@ enum class Code : std::int32_t {
   column_missing = 102,    ///< A required column is absent.
   cell_invalid = 103,      ///< A cell that its column cannot accept.
   // 200..: jobs
-  json_malformed = 200,     ///< Not JSON.
-  unknown_key = 201,        ///< A key that the format does not have.
-  wrong_type = 202,         ///< A JSON value of another kind.
+  json_malformed = 200,       ///< Not JSON.
+  unknown_key = 201,          ///< A key that the format does not have.
+  wrong_type = 202,           ///< A JSON value of another kind.
   version_unsupported = 203,  ///< A format version that this library cannot read.
   // 900..: ours
   internal = 900,  ///< A defect of this library.
@@ -50,7 +50,8 @@ enum class Code : std::int32_t {
 /// One fault of an input: where it is, what was found, what is allowed, and the sentence to show.
 struct Fault {
   Code code = Code::invalid_argument;
-  std::string where;    ///< A field, a JSON pointer, or file:row:column; empty when there is no place.
+  std::string
+      where;  ///< A field, a JSON pointer, or file:row:column; empty when there is no place.
   std::string found;    ///< What stood there, as the user wrote it.
   std::string allowed;  ///< What may stand there.
   std::string message;  ///< One sentence that names the fault and its remedy.
@@ -114,6 +115,6 @@ class BISMAR_API FaultList {
 
 /// " Did you mean "x"?" for the nearest word, or an empty text.
 [[nodiscard]] BISMAR_API std::string did_you_mean(std::string_view typed,
-                                                 std::span<const std::string_view> words);
+                                                  std::span<const std::string_view> words);
 
 }  // namespace bismar

@@ -277,8 +277,7 @@ class ResultReader {
       stretch.cost = number(item, "cost");
       stretch.penalty_from = number(item, "penalty_from");
       stretch.penalty_to = number_if(item, "penalty_to");
-      if (const JsonValue* band = item.find("from_band");
-          band != nullptr) {
+      if (const JsonValue* band = item.find("from_band"); band != nullptr) {
         stretch.from_band = BreakpointBand{number(*band, "low"), number_if(*band, "high")};
       }
       for (const JsonValue& second : list(item, "runners_up")) {

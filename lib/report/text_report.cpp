@@ -363,9 +363,11 @@ std::string front_text(const Result& result,
     const std::string factors = factors_line(result);
     if (!factors.empty()) out += paragraph(factors, options.width, 2);
     // Said every time: a limit that nobody checked looks like one that is met.
-    out += paragraph("Not checked by this version: self-weight, lateral-torsional and torsional buckling, "
-                     "fatigue, fracture, vibration, joints, and whatever the job does not name.",
-                     options.width, 2);
+    out += paragraph(
+        "Not checked by this version: self-weight, lateral-torsional and torsional buckling, "
+        "fatigue, fracture, vibration, joints, and whatever the job does not name.",
+        options.width,
+        2);
   }
   if (ruler != nullptr && !ruler->stretches.empty() && result.front_count > 0) {
     out += heading("Exchange ruler: least cost + alpha x mass, alpha = worth of a saved kilogram");
@@ -400,7 +402,8 @@ std::string ruler_text(const Result& result,
 namespace {
 
 /// A heading and its items; an item that begins with two spaces is a step of the one before.
-std::string listed(std::string_view heading, const std::vector<std::string>& items,
+std::string listed(std::string_view heading,
+                   const std::vector<std::string>& items,
                    const TextOptions& options) {
   if (items.empty()) {
     return {};

@@ -92,7 +92,8 @@ std::string ruler_table(const Result& result,
     if (stretch.from_band && !stretch.from_band->high) {
       span += "\n(from " + number(stretch.from_band->low) + ")";
     } else if (stretch.from_band && stretch.from_band->low < *stretch.from_band->high) {
-      span += "\n(" + number(stretch.from_band->low) + ".." + number(*stretch.from_band->high) + ")";
+      span +=
+          "\n(" + number(stretch.from_band->low) + ".." + number(*stretch.from_band->high) + ")";
       banded = true;
     }
     std::string choice = choice_name(result, stretch.choice);

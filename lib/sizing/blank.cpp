@@ -13,17 +13,20 @@ namespace bismar {
 
 namespace {
 
-/// Largest height at which the part, allowance included, fits into a bar. All dimensions of the part are
-/// multiples of its height: `unit` is its section at height 1.
-double largest_size_in(const StockItem& item, const SectionProperties& unit, SectionFamily list,
+/// Largest height at which the part, allowance included, fits into a bar. All dimensions of the
+/// part are multiples of its height: `unit` is its section at height 1.
+double largest_size_in(const StockItem& item,
+                       const SectionProperties& unit,
+                       SectionFamily list,
                        double allowance) {
   const double larger = std::max(unit.height, unit.width);
   const double smaller = std::min(unit.height, unit.width);
   const bool round_part =
       unit.family == SectionFamily::solid_round || unit.family == SectionFamily::solid_ellipse;
   if (list == SectionFamily::solid_round) {
-    // A round or elliptical part needs its larger diameter, an angular one its diagonal. The diagonal of
-    // the enlarged rectangle grows faster than linearly by the allowance: solve the quadratic.
+    // A round or elliptical part needs its larger diameter, an angular one its diagonal. The
+    // diagonal of the enlarged rectangle grows faster than linearly by the allowance: solve the
+    // quadratic.
     if (round_part) {
       return (item.section.height - allowance) / larger;
     }
@@ -43,7 +46,9 @@ bool is_solid(SectionFamily family) {
          family == SectionFamily::solid_rectangle;
 }
 
-bool usable(const StockItem& item, const MaterialInfo& material, const Route& route,
+bool usable(const StockItem& item,
+            const MaterialInfo& material,
+            const Route& route,
             const Settings& settings) {
   return made_of(item, material) && shares_word(item.forms, route.takes) &&
          (settings.doubtful_sizes || item.availability != Availability::doubtful);
@@ -59,7 +64,8 @@ std::vector<Blank> lightest(std::vector<Blank> all) {
   });
   std::vector<Blank> kept;
   double least = std::numeric_limits<double>::infinity();
-  // From the roomiest down: a smaller one is worth keeping only if it is lighter than all roomier ones.
+  // From the roomiest down: a smaller one is worth keeping only if it is lighter than all roomier
+  // ones.
   for (const auto& blank : all) {
     if (blank.area < least) {
       least = blank.area;
@@ -72,8 +78,11 @@ std::vector<Blank> lightest(std::vector<Blank> all) {
 
 }  // namespace
 
-std::optional<Purchase> buy_length(double area, double density, double length,
-                                   std::span<const double> stock_lengths, double kerf) {
+std::optional<Purchase> buy_length(double area,
+                                   double density,
+                                   double length,
+                                   std::span<const double> stock_lengths,
+                                   double kerf) {
   if (stock_lengths.empty()) {
     return Purchase{area * density * length, 0.0, 1.0};
   }
@@ -91,8 +100,10 @@ std::optional<Purchase> buy_length(double area, double density, double length,
   return best;
 }
 
-std::vector<UsableItem> blank_stock(const MaterialInfo& material, const Route& route,
-                                    const Catalogue& catalogue, const Settings& settings) {
+std::vector<UsableItem> blank_stock(const MaterialInfo& material,
+                                    const Route& route,
+                                    const Catalogue& catalogue,
+                                    const Settings& settings) {
   std::vector<UsableItem> out;
   for (const auto& list : catalogue.stock) {
     if (!list.sheet && !is_solid(list.family)) {
@@ -107,8 +118,11 @@ std::vector<UsableItem> blank_stock(const MaterialInfo& material, const Route& r
   return out;
 }
 
-std::vector<Blank> blanks(const SectionProperties& unit, double length, double height_max,
-                          std::span<const UsableItem> stock, const Settings& settings) {
+std::vector<Blank> blanks(const SectionProperties& unit,
+                          double length,
+                          double height_max,
+                          std::span<const UsableItem> stock,
+                          const Settings& settings) {
   if (stock.empty()) {
     // No list of the catalogue holds the material: a rectangular or round blank cut to measure.
     Blank blank;
@@ -133,7 +147,8 @@ std::vector<Blank> blanks(const SectionProperties& unit, double length, double h
       blank.area = item->section.area;
     }
     const bool long_enough =
-        item->lengths.empty() || *std::max_element(item->lengths.begin(), item->lengths.end()) >= length;
+        item->lengths.empty() ||
+        *std::max_element(item->lengths.begin(), item->lengths.end()) >= length;
     if (blank.largest_size > 0.0 && long_enough) {
       (list->sheet ? plates : bars).push_back(blank);
     }
@@ -141,8 +156,11 @@ std::vector<Blank> blanks(const SectionProperties& unit, double length, double h
   return lightest(bars.empty() ? std::move(plates) : std::move(bars));
 }
 
-std::optional<Purchase> buy(const Blank& blank, const SectionProperties& section, double density,
-                            double length, const Settings& settings) {
+std::optional<Purchase> buy(const Blank& blank,
+                            const SectionProperties& section,
+                            double density,
+                            double length,
+                            const Settings& settings) {
   const double allowance = settings.machining_allowance;
   if (blank.item == nullptr) {
     const double h = section.height + allowance;
@@ -159,12 +177,14 @@ std::optional<Purchase> buy(const Blank& blank, const SectionProperties& section
   return buy_length(blank.item->section.area, density, length, blank.item->lengths, settings.kerf);
 }
 
-std::string describe_stock(const std::string& designation, const Purchase& purchase, double length) {
+std::string describe_stock(const std::string& designation,
+                           const Purchase& purchase,
+                           double length) {
   if (purchase.bar_length == 0.0) {
     return designation + ", cut to measure";
   }
-  return designation + ", " + plain(purchase.pieces) + " of " + plain(length * 1e3, 6) + " mm from " +
-         plain(purchase.bar_length, 4) + " m";
+  return designation + ", " + plain(purchase.pieces) + " of " + plain(length * 1e3, 6) +
+         " mm from " + plain(purchase.bar_length, 4) + " m";
 }
 
 std::string describe(const Blank& blank, const Purchase& purchase, double length) {

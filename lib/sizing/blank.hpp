@@ -14,22 +14,24 @@ namespace bismar {
 
 /// What is bought to make one part.
 struct Purchase {
-  double mass = 0.0;         ///< Bought per part, offcut and kerf included [kg].
-  double bar_length = 0.0;   ///< Stock length chosen [m]; 0 = to measure.
-  double pieces = 0.0;       ///< Parts out of one bar or plate length.
+  double mass = 0.0;        ///< Bought per part, offcut and kerf included [kg].
+  double bar_length = 0.0;  ///< Stock length chosen [m]; 0 = to measure.
+  double pieces = 0.0;      ///< Parts out of one bar or plate length.
 };
 
-/// The stock length of `item` that wastes least for parts of `length`, or nothing when every one is too short.
-[[nodiscard]] std::optional<Purchase> buy_length(double area, double density, double length,
-                                                 std::span<const double> stock_lengths, double kerf);
+/// The stock length of `item` that wastes least for parts of `length`, or nothing when every one is
+/// too short.
+[[nodiscard]] std::optional<Purchase> buy_length(
+    double area, double density, double length, std::span<const double> stock_lengths, double kerf);
 
 /// A bar or plate that a machined part is cut from.
 struct Blank {
-  const StockItem* item = nullptr;  ///< Null: to measure, no list of the catalogue holds the material.
-  double largest_size = 0.0;        ///< Largest height of the part that still fits [m].
-  double ruling_dimension = 0.0;    ///< Where the strength of the blank is read [m].
-  double area = 0.0;                ///< Cross-section per part [m^2]; for plate see `plate`.
-  bool plate = false;               ///< Cut from plate: the width bought follows the part.
+  const StockItem* item =
+      nullptr;                ///< Null: to measure, no list of the catalogue holds the material.
+  double largest_size = 0.0;  ///< Largest height of the part that still fits [m].
+  double ruling_dimension = 0.0;  ///< Where the strength of the blank is read [m].
+  double area = 0.0;              ///< Cross-section per part [m^2]; for plate see `plate`.
+  bool plate = false;             ///< Cut from plate: the width bought follows the part.
 };
 
 /// A stock item that a material and a route can share, with its list.
@@ -38,25 +40,33 @@ struct UsableItem {
   const StockList* list = nullptr;
 };
 
-/// Solid bars and plates of this material in a form that the route takes; the same for every shape, so
-/// they are looked up once for a material and route.
-[[nodiscard]] std::vector<UsableItem> blank_stock(const MaterialInfo& material, const Route& route,
+/// Solid bars and plates of this material in a form that the route takes; the same for every shape,
+/// so they are looked up once for a material and route.
+[[nodiscard]] std::vector<UsableItem> blank_stock(const MaterialInfo& material,
+                                                  const Route& route,
                                                   const Catalogue& catalogue,
                                                   const Settings& settings);
 
-/// Blanks for a machined part of these proportions (`unit`: its section at height 1 m) and length, by rising
-/// largest size, each the lightest that holds every size up to it. Bars first; plate where the material has no
-/// bar that is long enough.
-[[nodiscard]] std::vector<Blank> blanks(const SectionProperties& unit, double length, double height_max,
-                                        std::span<const UsableItem> stock, const Settings& settings);
+/// Blanks for a machined part of these proportions (`unit`: its section at height 1 m) and length,
+/// by rising largest size, each the lightest that holds every size up to it. Bars first; plate
+/// where the material has no bar that is long enough.
+[[nodiscard]] std::vector<Blank> blanks(const SectionProperties& unit,
+                                        double length,
+                                        double height_max,
+                                        std::span<const UsableItem> stock,
+                                        const Settings& settings);
 
 /// What the part buys of this blank.
-[[nodiscard]] std::optional<Purchase> buy(const Blank& blank, const SectionProperties& section,
-                                          double density, double length, const Settings& settings);
+[[nodiscard]] std::optional<Purchase> buy(const Blank& blank,
+                                          const SectionProperties& section,
+                                          double density,
+                                          double length,
+                                          const Settings& settings);
 
 /// "round bar 45, 19 of 300 mm from 6 m".
 [[nodiscard]] std::string describe(const Blank& blank, const Purchase& purchase, double length);
-[[nodiscard]] std::string describe_stock(const std::string& designation, const Purchase& purchase,
+[[nodiscard]] std::string describe_stock(const std::string& designation,
+                                         const Purchase& purchase,
                                          double length);
 
 }  // namespace bismar

@@ -17,14 +17,16 @@ namespace {
 /// Sorts and makes unique, where values closer than a billionth are one.
 void tidy(std::vector<double>& values) {
   std::sort(values.begin(), values.end());
-  values.erase(std::unique(values.begin(), values.end(),
-                           [](double a, double b) { return b - a <= 1e-9 * b; }),
-               values.end());
+  values.erase(
+      std::unique(
+          values.begin(), values.end(), [](double a, double b) { return b - a <= 1e-9 * b; }),
+      values.end());
 }
 
 }  // namespace
 
-std::optional<Range> limited_value(const MaterialTable& table, const PropertyLimit& limit,
+std::optional<Range> limited_value(const MaterialTable& table,
+                                   const PropertyLimit& limit,
                                    std::size_t row) {
   if (const auto known = property(limit.property)) {
     return table.value(*known, row);
@@ -32,7 +34,9 @@ std::optional<Range> limited_value(const MaterialTable& table, const PropertyLim
   return table.extra(limit.property, row);
 }
 
-double limited_end(const PropertyReader& reader, const PropertyLimit& limit, const Range& range,
+double limited_end(const PropertyReader& reader,
+                   const PropertyLimit& limit,
+                   const Range& range,
                    bool at_least) {
   if (const auto known = property(limit.property)) {
     const auto& ends = reader.settings().range_ends;
@@ -51,19 +55,26 @@ SectionProperties section_of(const Shape& shape, const Route& route, double heig
   const double wall = height * shape.wall_to_height.value_or(0.0);
   const bool rolled = contains_word(route.leaves, "welded tube");
   const bool drawn = contains_word(route.leaves, "tube");
-  const Forming forming =
-      rolled ? Forming::cold_formed : drawn ? Forming::extruded : Forming::unknown;
+  const Forming forming = rolled  ? Forming::cold_formed
+                          : drawn ? Forming::extruded
+                                  : Forming::unknown;
   switch (shape.family) {
-    case SectionFamily::solid_round: return solid_round(height);
-    case SectionFamily::solid_square: return solid_square(height);
-    case SectionFamily::solid_rectangle: return solid_rectangle(height, width);
-    case SectionFamily::solid_ellipse: return solid_ellipse(height, width);
-    case SectionFamily::round_tube: return round_tube(height, wall, forming);
+    case SectionFamily::solid_round:
+      return solid_round(height);
+    case SectionFamily::solid_square:
+      return solid_square(height);
+    case SectionFamily::solid_rectangle:
+      return solid_rectangle(height, width);
+    case SectionFamily::solid_ellipse:
+      return solid_ellipse(height, width);
+    case SectionFamily::round_tube:
+      return round_tube(height, wall, forming);
     case SectionFamily::rectangular_tube:
-      return rectangular_tube(height, width, wall, rolled ? Corners::en_10219 : Corners::sharp,
-                              forming);
+      return rectangular_tube(
+          height, width, wall, rolled ? Corners::en_10219 : Corners::sharp, forming);
     case SectionFamily::i_section:
-    case SectionFamily::channel: break;
+    case SectionFamily::channel:
+      break;
   }
   throw InternalError("section_of: a shape without one free size passed the checks");
 }
@@ -110,9 +121,10 @@ const StepState* CandidateCompiler::state_at(double thickness) const {
 }
 
 double CandidateCompiler::strength_thickness(const SectionProperties& section) const {
-  // EN 10083 and its kin give the steps of hardened bar by diameter; other solids count by their equivalent
-  // diameter 4 A / U, which for a wide flat is twice its thickness (EN 10083-2, "d <= 16 or t <= 8"; from
-  // memory). Walls, plates and rows that are only sold as plate count by thickness.
+  // EN 10083 and its kin give the steps of hardened bar by diameter; other solids count by their
+  // equivalent diameter 4 A / U, which for a wide flat is twice its thickness (EN 10083-2, "d <= 16
+  // or t <= 8"; from memory). Walls, plates and rows that are only sold as plate count by
+  // thickness.
   const bool solid = section.inner_perimeter == 0.0 && section.plates.empty();
   if (solid && is_hardened_bar_grade(material_)) {
     return 4.0 * section.area / section.perimeter;
@@ -132,8 +144,8 @@ void CandidateCompiler::stock_pieces() {
   out_->variable.kind = Variable::Kind::ordered_set;
   for (std::size_t i = 0; i < list.items.size(); ++i) {
     const auto& item = list.items[i];
-    const bool offered = problem_.settings().doubtful_sizes ||
-                         item.availability != Availability::doubtful;
+    const bool offered =
+        problem_.settings().doubtful_sizes || item.availability != Availability::doubtful;
     if (!offered || !made_of(item, material_) || !shares_word(item.forms, route_.takes)) {
       continue;
     }
@@ -167,10 +179,11 @@ void CandidateCompiler::shape_pieces() {
   };
   if (machined) {
     // The strength of a machined part was set in its blank, so its steps are those of the blanks.
-    out_->blanks =
-        blanks(unit, problem_.part().body.length, upper,
-               problem_.blank_stock_of(out_->candidate.material, out_->candidate.route),
-               problem_.settings());
+    out_->blanks = blanks(unit,
+                          problem_.part().body.length,
+                          upper,
+                          problem_.blank_stock_of(out_->candidate.material, out_->candidate.route),
+                          problem_.settings());
     for (const auto& blank : out_->blanks) {
       add_end(blank.largest_size);
     }
@@ -201,8 +214,8 @@ void CandidateCompiler::shape_pieces() {
     try {
       piece.section = section_of(shape, route_, to);
     } catch (const Error&) {
-      // The corner radii that the standard gives this wall leave no flat side: all sizes of the piece have
-      // the same ratios, so none of them exists.
+      // The corner radii that the standard gives this wall leave no flat side: all sizes of the
+      // piece have the same ratios, so none of them exists.
       piece.impossible = true;
       out_->pieces.push_back(std::move(piece));
       from = to;
@@ -231,7 +244,8 @@ void CandidateCompiler::shape_pieces() {
 
 std::vector<double> CandidateCompiler::sheet_sizes() const {
   const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
-  // The wall of a rolled tube, or the smaller dimension of a flat part, is the thickness of the sheet.
+  // The wall of a rolled tube, or the smaller dimension of a flat part, is the thickness of the
+  // sheet.
   const double height_per_thickness = shape.wall_to_height
                                           ? 1.0 / *shape.wall_to_height
                                           : std::max(shape.height_to_width.value_or(1.0), 1.0);
@@ -241,8 +255,8 @@ std::vector<double> CandidateCompiler::sheet_sizes() const {
       continue;
     }
     for (const auto& item : list.items) {
-      const bool offered = problem_.settings().doubtful_sizes ||
-                           item.availability != Availability::doubtful;
+      const bool offered =
+          problem_.settings().doubtful_sizes || item.availability != Availability::doubtful;
       if (offered && made_of(item, material_) && shares_word(item.forms, route_.takes)) {
         out.push_back(item.thickness * height_per_thickness);
       }
@@ -256,7 +270,8 @@ std::vector<double> CandidateCompiler::wanted_sizes(double lower, double upper) 
   const auto& sizes = problem_.part().body.shapes[out_->candidate.shape].sizes;
   std::vector<double> out;
   switch (sizes.kind) {
-    case Sizes::Kind::continuous: break;
+    case Sizes::Kind::continuous:
+      break;
     case Sizes::Kind::step: {
       const double first = std::ceil(lower / sizes.step * (1.0 - 1e-12));
       const double last = std::floor(upper / sizes.step * (1.0 + 1e-12));
@@ -265,8 +280,12 @@ std::vector<double> CandidateCompiler::wanted_sizes(double lower, double upper) 
       }
       break;
     }
-    case Sizes::Kind::series: out = preferred_numbers(sizes.series, lower, upper); break;
-    case Sizes::Kind::list: out = sizes.values; break;
+    case Sizes::Kind::series:
+      out = preferred_numbers(sizes.series, lower, upper);
+      break;
+    case Sizes::Kind::list:
+      out = sizes.values;
+      break;
   }
   tidy(out);
   return out;
@@ -293,7 +312,8 @@ void CandidateCompiler::set_sizes() {
   std::erase_if(values, [&](double value) {
     return value < variable.lower * (1.0 - 1e-12) || value > variable.upper * (1.0 + 1e-12);
   });
-  // A size that is the end of a piece but for rounding is that end: 40 mm plate is in the step up to 40 mm.
+  // A size that is the end of a piece but for rounding is that end: 40 mm plate is in the step up
+  // to 40 mm.
   for (double& value : values) {
     for (const Piece& piece : out_->pieces) {
       if (std::abs(value - piece.upper) <= 1e-12 * piece.upper) {
@@ -331,8 +351,9 @@ void CandidateCompiler::collect_constraints() {
     add(Kind::temperature, Trend::constant, "service temperature");
   }
   add(Kind::thickness_limit, Trend::constant, "tabulated thickness");
-  if (std::any_of(out_->pieces.begin(), out_->pieces.end(),
-                  [](const Piece& piece) { return piece.impossible; })) {
+  if (std::any_of(out_->pieces.begin(), out_->pieces.end(), [](const Piece& piece) {
+        return piece.impossible;
+      })) {
     add(Kind::corners, Trend::constant, "corner radii of the wall");
   }
   add_limit_states();
@@ -364,8 +385,9 @@ void CandidateCompiler::collect_constraints() {
 }
 
 void CandidateCompiler::add_limit_states() {
-  const auto first = std::find_if(out_->pieces.begin(), out_->pieces.end(),
-                                  [](const Piece& piece) { return piece.step != nullptr; });
+  const auto first = std::find_if(out_->pieces.begin(), out_->pieces.end(), [](const Piece& piece) {
+    return piece.step != nullptr;
+  });
   if (first == out_->pieces.end()) {
     return;
   }
@@ -377,9 +399,10 @@ void CandidateCompiler::add_limit_states() {
       }
       const bool anywhere =
           std::any_of(out_->pieces.begin(), out_->pieces.end(), [&](const Piece& piece) {
-            return piece.step != nullptr &&
-                   state->applies(problem_.effects()[c], problem_.member_limits(),
-                                  piece.step->cases[c].member, piece.section);
+            return piece.step != nullptr && state->applies(problem_.effects()[c],
+                                                           problem_.member_limits(),
+                                                           piece.step->cases[c].member,
+                                                           piece.section);
           });
       if (!anywhere) {
         continue;

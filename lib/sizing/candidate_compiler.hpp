@@ -8,12 +8,17 @@
 
 namespace bismar {
 
-/// The value of a limited property in a row, whether of the library's properties or an extra column.
+/// The value of a limited property in a row, whether of the library's properties or an extra
+/// column.
 [[nodiscard]] std::optional<Range> limited_value(const MaterialTable& table,
-                                                 const PropertyLimit& limit, std::size_t row);
-/// The end of its range that counts: the study's own where it names one, otherwise the one on the safe side.
-[[nodiscard]] double limited_end(const PropertyReader& reader, const PropertyLimit& limit,
-                                 const Range& range, bool at_least);
+                                                 const PropertyLimit& limit,
+                                                 std::size_t row);
+/// The end of its range that counts: the study's own where it names one, otherwise the one on the
+/// safe side.
+[[nodiscard]] double limited_end(const PropertyReader& reader,
+                                 const PropertyLimit& limit,
+                                 const Range& range,
+                                 bool at_least);
 
 /// Makes a candidate ready for solving: its variable, the pieces of its sizes, its constraints.
 class CandidateCompiler {

@@ -9,7 +9,9 @@
 
 namespace bismar {
 
-CandidateCost::CandidateCost(const Part& part, const Catalogue& catalogue, const Settings& settings,
+CandidateCost::CandidateCost(const Part& part,
+                             const Catalogue& catalogue,
+                             const Settings& settings,
                              const Candidate& candidate)
     : part_(part),
       catalogue_(catalogue),
@@ -17,14 +19,18 @@ CandidateCost::CandidateCost(const Part& part, const Catalogue& catalogue, const
       route_(catalogue.routes[candidate.route]),
       treatment_(candidate.treatment == Candidate::none ? nullptr
                                                         : &catalogue.routes[candidate.treatment]),
-      finish_(candidate.finish == Candidate::none ? nullptr : &catalogue.finishes[candidate.finish]),
+      finish_(candidate.finish == Candidate::none ? nullptr
+                                                  : &catalogue.finishes[candidate.finish]),
       batch_(part.batch.value_or(part.quantity)) {}
 
 double CandidateCost::pick(const Range& range, CostEnd end) const {
   switch (end) {
-    case CostEnd::cheap: return range.low;
-    case CostEnd::dear: return range.high;
-    case CostEnd::usual: break;
+    case CostEnd::cheap:
+      return range.low;
+    case CostEnd::dear:
+      return range.high;
+    case CostEnd::usual:
+      break;
   }
   return range.at(settings_.route_end);
 }
@@ -68,19 +74,26 @@ double CandidateCost::Terms::total() const {
          std::accumulate(operations.begin(), operations.end(), 0.0) + finish;
 }
 
-CandidateCost::Terms CandidateCost::terms(const MadePart& made, const Range& price,
-                                          double usual_price, CostEnd end) const {
+CandidateCost::Terms CandidateCost::terms(const MadePart& made,
+                                          const Range& price,
+                                          double usual_price,
+                                          CostEnd end) const {
   Terms t;
   t.price = end == CostEnd::cheap ? price.low : end == CostEnd::dear ? price.high : usual_price;
   // A mill or die minimum is bought whole even when the parts need less.
   t.bought = std::max(made.purchase.mass, route_.min_order / part_.quantity);
   t.material = t.bought * t.price;
   t.credit = settings_.scrap_credit * t.price * std::max(0.0, made.purchase.mass - made.net_mass);
-  t.route = process_cost(route_, made.net_mass, part_.body.length, part_.quantity, batch_,
-                         settings_.route_end, end);
+  t.route = process_cost(
+      route_, made.net_mass, part_.body.length, part_.quantity, batch_, settings_.route_end, end);
   if (treatment_ != nullptr) {
-    t.treatment = process_cost(*treatment_, made.net_mass, part_.body.length, part_.quantity,
-                               batch_, settings_.route_end, end);
+    t.treatment = process_cost(*treatment_,
+                               made.net_mass,
+                               part_.body.length,
+                               part_.quantity,
+                               batch_,
+                               settings_.route_end,
+                               end);
     // Scraps of a chain multiply: a part lost in treatment takes with it all that was spent so far.
     const double spent = t.material - t.credit + t.route.total() + t.treatment.total();
     t.rejects = spent * treatment_->scrap / (1.0 - treatment_->scrap);
@@ -92,12 +105,15 @@ CandidateCost::Terms CandidateCost::terms(const MadePart& made, const Range& pri
   return t;
 }
 
-double CandidateCost::total(const MadePart& made, const Range& price, double usual_price,
+double CandidateCost::total(const MadePart& made,
+                            const Range& price,
+                            double usual_price,
                             CostEnd end) const {
   return terms(made, price, usual_price, end).total();
 }
 
-CostBreakdown CandidateCost::breakdown(const MadePart& made, const Range& price,
+CostBreakdown CandidateCost::breakdown(const MadePart& made,
+                                       const Range& price,
                                        double usual_price) const {
   const Terms t = terms(made, price, usual_price, CostEnd::usual);
   const auto& money = catalogue_.currency;
@@ -107,22 +123,27 @@ CostBreakdown CandidateCost::breakdown(const MadePart& made, const Range& price,
       out.lines.push_back({std::move(item), amount, std::move(how)});
     }
   };
-  line("material", t.material,
+  line("material",
+       t.material,
        plain(t.bought, 4) + " kg bought for a part of " + plain(made.net_mass, 4) + " kg, at " +
            plain(t.price, 4) + " " + money + "/kg");
-  line("scrap sold back", -t.credit,
+  line("scrap sold back",
+       -t.credit,
        plain(made.purchase.mass - made.net_mass, 4) + " kg at " +
            plain(settings_.scrap_credit * 100.0, 3) + " % of the price");
-  line("tooling", t.route.tooling,
+  line("tooling",
+       t.route.tooling,
        plain(t.route.tool_sets, 4) + " tool set" + (t.route.tool_sets == 1.0 ? "" : "s") + " at " +
            plain(t.route.tooling_each, 4) + " " + money + " over " + plain(part_.quantity, 8) +
            " parts");
   line("set-up", t.route.set_up, "over a batch of " + plain(batch_, 8));
-  line("machine and labour", t.route.time,
+  line("machine and labour",
+       t.route.time,
        plain(t.route.seconds / 60.0, 3) + " min at " + plain(t.route.rate_of_time * 3600.0, 4) +
            " " + money + "/h");
   if (treatment_ != nullptr) {
-    line("treatment", t.treatment.total(),
+    line("treatment",
+         t.treatment.total(),
          treatment_->title + ", tooling " + plain(t.treatment.tooling, 3) + ", time " +
              plain(t.treatment.time, 3) + ", batch charge " + plain(t.treatment.set_up, 3));
     line("rejects", t.rejects, plain(treatment_->scrap * 100.0, 3) + " % of the treated parts");
@@ -130,11 +151,13 @@ CostBreakdown CandidateCost::breakdown(const MadePart& made, const Range& price,
   for (std::size_t i = 0; i < t.operations.size(); ++i) {
     const auto& use = part_.operations[i];
     const auto& operation = *catalogue_.find_operation(use.operation);
-    line("operation", t.operations[i],
+    line("operation",
+         t.operations[i],
          operation.title + ", " + plain(use.units, 4) + " x " + operation.unit);
   }
   if (finish_ != nullptr) {
-    line("finish", t.finish,
+    line("finish",
+         t.finish,
          finish_->title + ", " + plain(finished_area(made.section) * 1e4, 4) + " cm2");
   }
   out.total = t.total();

@@ -20,13 +20,18 @@ struct MadePart {
 /// Unit cost of one candidate: material, route, treatment, operations, finish.
 class CandidateCost {
  public:
-  CandidateCost(const Part& part, const Catalogue& catalogue, const Settings& settings,
+  CandidateCost(const Part& part,
+                const Catalogue& catalogue,
+                const Settings& settings,
                 const Candidate& candidate);
 
   /// Unit cost [currency]; rises with the section or stays.
-  [[nodiscard]] double total(const MadePart& made, const Range& price, double usual_price,
+  [[nodiscard]] double total(const MadePart& made,
+                             const Range& price,
+                             double usual_price,
                              CostEnd end = CostEnd::usual) const;
-  [[nodiscard]] CostBreakdown breakdown(const MadePart& made, const Range& price,
+  [[nodiscard]] CostBreakdown breakdown(const MadePart& made,
+                                        const Range& price,
                                         double usual_price) const;
   /// Mass of the finish [kg].
   [[nodiscard]] double finish_mass(const SectionProperties& section) const;
@@ -44,7 +49,9 @@ class CandidateCost {
     double finish = 0.0;
     [[nodiscard]] double total() const;
   };
-  [[nodiscard]] Terms terms(const MadePart& made, const Range& price, double usual_price,
+  [[nodiscard]] Terms terms(const MadePart& made,
+                            const Range& price,
+                            double usual_price,
                             CostEnd end) const;
   [[nodiscard]] double pick(const Range& range, CostEnd end) const;
   [[nodiscard]] double operation_cost(const OperationUse& use, CostEnd end) const;

@@ -24,12 +24,16 @@ double ResourceCost::total() const {
   FaultList faults;
   const auto check = [&](bool good, const char* field, const char* allowed) {
     if (!good) {
-      faults.add({Code::out_of_range, field, {}, allowed,
+      faults.add({Code::out_of_range,
+                  field,
+                  {},
+                  allowed,
                   std::string("The ") + field + " must be " + allowed + "."});
     }
   };
   check(std::isfinite(mass) && mass >= 0.0, "mass", "finite and not negative");
-  check(std::isfinite(material_price) && material_price >= 0.0, "material_price",
+  check(std::isfinite(material_price) && material_price >= 0.0,
+        "material_price",
         "finite and not negative");
   check(scrap >= 0.0 && scrap < 1.0, "scrap", "at least 0 and below 1");
   check(std::isfinite(tooling) && tooling >= 0.0, "tooling", "finite and not negative");
@@ -44,7 +48,9 @@ double ResourceCost::total() const {
   return material_term() + tooling_term() + time_term();
 }
 
-std::optional<double> break_even_quantity(double fixed_a, double unit_a, double fixed_b,
+std::optional<double> break_even_quantity(double fixed_a,
+                                          double unit_a,
+                                          double fixed_b,
                                           double unit_b) {
   const double saved = unit_a - unit_b;
   const double invested = fixed_b - fixed_a;
@@ -57,7 +63,10 @@ std::optional<double> break_even_quantity(double fixed_a, double unit_a, double 
 
 std::uint64_t pieces_per_bar(double bar, double length, double kerf) {
   if (!(bar >= 0.0) || !(length > 0.0) || !(kerf >= 0.0) || !std::isfinite(bar + kerf)) {
-    throw Error({Code::out_of_range, "pieces_per_bar", {}, "bar and kerf not negative, length positive",
+    throw Error({Code::out_of_range,
+                 "pieces_per_bar",
+                 {},
+                 "bar and kerf not negative, length positive",
                  "A bar and a saw cut cannot be negative, and a piece must have a length."});
   }
   const double pieces = (bar + kerf) / (length + kerf);
@@ -65,8 +74,13 @@ std::uint64_t pieces_per_bar(double bar, double length, double kerf) {
   return static_cast<std::uint64_t>(std::floor(pieces * (1.0 + 1e-12)));
 }
 
-ProcessCost process_cost(const Route& route, double mass, double length, double quantity,
-                         double batch, RangeEnd range_end, CostEnd end) {
+ProcessCost process_cost(const Route& route,
+                         double mass,
+                         double length,
+                         double quantity,
+                         double batch,
+                         RangeEnd range_end,
+                         CostEnd end) {
   const double sized = route.rate_basis == RateBasis::metre ? mass / length : mass;
   const auto scaled = [&](const Range& range, double exponent, CostEnd cheap_end) {
     if (end != CostEnd::usual) {
@@ -76,8 +90,8 @@ ProcessCost process_cost(const Route& route, double mass, double length, double 
     if (!route.reference_mass || exponent == 0.0) {
       return mean;
     }
-    return std::clamp(mean * std::pow(sized / *route.reference_mass, exponent), range.low,
-                      range.high);
+    return std::clamp(
+        mean * std::pow(sized / *route.reference_mass, exponent), range.low, range.high);
   };
   ProcessCost cost;
   cost.tooling_each = scaled(route.tooling_cost, route.tooling_mass_exponent, CostEnd::cheap);
@@ -85,11 +99,17 @@ ProcessCost process_cost(const Route& route, double mass, double length, double 
   cost.tooling = cost.tooling_each * cost.tool_sets / quantity;
   const double rate = scaled(route.rate, -route.rate_mass_exponent, CostEnd::dear);
   switch (route.rate_basis) {
-    case RateBasis::metre: cost.seconds = length / rate; break;
-    case RateBasis::kilogram: cost.seconds = mass / rate; break;
+    case RateBasis::metre:
+      cost.seconds = length / rate;
+      break;
+    case RateBasis::kilogram:
+      cost.seconds = mass / rate;
+      break;
     case RateBasis::part:
     case RateBasis::spot:
-    case RateBasis::assembly: cost.seconds = 1.0 / rate; break;
+    case RateBasis::assembly:
+      cost.seconds = 1.0 / rate;
+      break;
   }
   cost.rate_of_time = route.overhead;
   if (route.capital > 0.0) {

@@ -18,15 +18,16 @@ constexpr double usual_size_step = 1e-3;  // [m]
 std::string millimetres(double metres) { return plain(metres * 1e3, 5); }
 
 /// Properties that the answer rests on and that no source confirms.
-std::string unverified(const SizingProblem& problem, const StepState& step,
-                       const CompiledCandidate& compiled, const Piece& piece) {
+std::string unverified(const SizingProblem& problem,
+                       const StepState& step,
+                       const CompiledCandidate& compiled,
+                       const Piece& piece) {
   std::vector<Property> used = {Property::density, Property::price};
   for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
     const auto& constraint = compiled.constraints[i];
     if (piece.applies[i]) {
-      for (const Symbol symbol :
-           constraint.state->needs(problem.effects()[constraint.load_case],
-                                   step.cases[constraint.load_case].member)) {
+      for (const Symbol symbol : constraint.state->needs(problem.effects()[constraint.load_case],
+                                                         step.cases[constraint.load_case].member)) {
         used.push_back(property_of(symbol));
       }
     }
@@ -47,8 +48,11 @@ std::string unverified(const SizingProblem& problem, const StepState& step,
   return words.empty() ? std::string() : "unverified: " + joined(words);
 }
 
-void add_utilisations(const SizingProblem& problem, const CompiledCandidate& compiled,
-                      const Piece& piece, std::span<const double> values, Design& design) {
+void add_utilisations(const SizingProblem& problem,
+                      const CompiledCandidate& compiled,
+                      const Piece& piece,
+                      std::span<const double> values,
+                      Design& design) {
   double largest = -3.0;
   for (std::size_t i = 0; i < values.size(); ++i) {
     const auto& constraint = compiled.constraints[i];
@@ -68,8 +72,8 @@ void add_utilisations(const SizingProblem& problem, const CompiledCandidate& com
         u.load_case = problem.part().body.load_cases[constraint.load_case].name;
       }
     }
-    // Caps and envelopes tell where a design must stop, not what sizes it, unless it runs into them; of a
-    // bought section the loads say why it is not smaller.
+    // Caps and envelopes tell where a design must stop, not what sizes it, unless it runs into
+    // them; of a bought section the loads say why it is not smaller.
     const bool bought = piece.item != nullptr;
     const bool fixed = !state || !constraint.state->reads_loads();
     const bool beside = constraint.trend == Trend::rises || (bought && fixed);
@@ -82,7 +86,9 @@ void add_utilisations(const SizingProblem& problem, const CompiledCandidate& com
   }
 }
 
-void add_notes(const SizingProblem& problem, const CompiledCandidate& compiled, const Piece& piece,
+void add_notes(const SizingProblem& problem,
+               const CompiledCandidate& compiled,
+               const Piece& piece,
                Design& design) {
   for (const auto& resolved : piece.step->cases) {
     for (const auto& note : resolved.notes) {
@@ -100,11 +106,13 @@ void add_notes(const SizingProblem& problem, const CompiledCandidate& compiled, 
   const bool open_or_slender = design.section.family == SectionFamily::i_section ||
                                design.section.family == SectionFamily::channel ||
                                design.section.I_y > 4.0 * design.section.I_z;
-  const bool bends = std::any_of(problem.effects().begin(), problem.effects().end(),
+  const bool bends = std::any_of(problem.effects().begin(),
+                                 problem.effects().end(),
                                  [](const LoadEffects& effects) { return effects.bends; });
   if (open_or_slender && bends) {
     design.notes.emplace_back(
-        "NOT CHECKED: lateral-torsional buckling of a slender section bent about its strong axis; hold its "
+        "NOT CHECKED: lateral-torsional buckling of a slender section bent about its strong axis; "
+        "hold its "
         "compression side or check it");
   }
   if (piece.item != nullptr && piece.item->availability == Availability::unconfirmed) {
@@ -118,8 +126,8 @@ void add_notes(const SizingProblem& problem, const CompiledCandidate& compiled, 
   }
 }
 
-/// The next size up that a shop would set, re-checked and re-costed: the next whole millimetre, or the one
-/// after where that falls back over the end of a step.
+/// The next size up that a shop would set, re-checked and re-costed: the next whole millimetre, or
+/// the one after where that falls back over the end of a step.
 void add_buyable(const SizingProblem& problem, std::size_t group, Design& design) {
   const auto& variable = problem.compiled(group).variable;
   std::vector<double> objectives(2);
@@ -138,8 +146,8 @@ void add_buyable(const SizingProblem& problem, std::size_t group, Design& design
     design.buyable_size = size;
     design.buyable_mass = objectives[0];
     design.buyable_cost = objectives[1];
-    design.buyable_feasible = std::all_of(utilisations.begin(), utilisations.end(),
-                                          [](double u) { return u <= 1.0; });
+    design.buyable_feasible =
+        std::all_of(utilisations.begin(), utilisations.end(), [](double u) { return u <= 1.0; });
     if (design.buyable_feasible) {
       return;
     }
@@ -150,14 +158,17 @@ void add_buyable(const SizingProblem& problem, std::size_t group, Design& design
 
 std::string size_text(const SectionProperties& section) {
   switch (section.family) {
-    case SectionFamily::solid_round: return "diameter " + millimetres(section.height) + " mm";
-    case SectionFamily::solid_square: return "side " + millimetres(section.height) + " mm";
+    case SectionFamily::solid_round:
+      return "diameter " + millimetres(section.height) + " mm";
+    case SectionFamily::solid_square:
+      return "side " + millimetres(section.height) + " mm";
     case SectionFamily::round_tube:
       return millimetres(section.height) + " x " + millimetres(section.wall) + " mm";
     case SectionFamily::rectangular_tube:
       return millimetres(section.height) + " x " + millimetres(section.width) + " x " +
              millimetres(section.wall) + " mm";
-    default: return millimetres(section.height) + " x " + millimetres(section.width) + " mm";
+    default:
+      return millimetres(section.height) + " x " + millimetres(section.width) + " mm";
   }
 }
 
@@ -167,7 +178,10 @@ Design make_design(const SizingProblem& problem, std::size_t group, double size)
   const auto detail = problem.detail(group, size);
   const auto& piece = *detail.piece;
   if (piece.step == nullptr || !detail.purchase) {
-    throw Error({Code::out_of_range, "size", plain(size), "a size within the tabulated thickness and stock",
+    throw Error({Code::out_of_range,
+                 "size",
+                 plain(size),
+                 "a size within the tabulated thickness and stock",
                  "No strength is tabulated at this size, or no blank or stock length holds it."});
   }
   std::vector<double> objectives(2);
@@ -179,8 +193,7 @@ Design make_design(const SizingProblem& problem, std::size_t group, double size)
   const auto labels = names(compiled.candidate, problem.part(), catalogue);
   const auto& info = catalogue.materials.info(compiled.candidate.material);
   design.material = info.id;
-  design.material_name =
-      info.condition.empty() ? info.name : info.name + ", " + info.condition;
+  design.material_name = info.condition.empty() ? info.name : info.name + ", " + info.condition;
   design.shape = labels.shape;
   design.route = labels.route;
   design.treatment = labels.treatment;

@@ -25,9 +25,9 @@ bool has_temper(std::string_view condition, std::string_view prefix) {
   for (std::size_t at = 0; at + prefix.size() < condition.size() + 1; ++at) {
     const bool starts = at == 0 || std::isalnum(static_cast<unsigned char>(condition[at - 1])) == 0;
     const std::size_t next = at + prefix.size();
-    const bool digit = std::isdigit(static_cast<unsigned char>(prefix.back())) != 0 ||
-                       (next < condition.size() &&
-                        std::isdigit(static_cast<unsigned char>(condition[next])) != 0);
+    const bool digit =
+        std::isdigit(static_cast<unsigned char>(prefix.back())) != 0 ||
+        (next < condition.size() && std::isdigit(static_cast<unsigned char>(condition[next])) != 0);
     if (starts && digit && condition.substr(at, prefix.size()) == prefix) {
       return true;
     }
@@ -35,23 +35,27 @@ bool has_temper(std::string_view condition, std::string_view prefix) {
   return false;
 }
 
-/// "T6", "H14", "H900", "P1070", "TH1050", "R430" as a word of its own: heat-treatment, strain-hardening and
-/// (copper alloys) drawn tempers.
+/// "T6", "H14", "H900", "P1070", "TH1050", "R430" as a word of its own: heat-treatment,
+/// strain-hardening and (copper alloys) drawn tempers.
 bool has_temper(std::string_view condition) {
   static constexpr std::array<std::string_view, 5> prefixes = {"TH", "T", "H", "P", "R"};
-  return std::any_of(prefixes.begin(), prefixes.end(),
-                     [&](std::string_view prefix) { return has_temper(condition, prefix); });
+  return std::any_of(prefixes.begin(), prefixes.end(), [&](std::string_view prefix) {
+    return has_temper(condition, prefix);
+  });
 }
 
-/// Strength from cold work, which extrusion destroys as forging does; what extrusion keeps is the temper that
-/// is set at the press and by ageing afterwards (T4, T5, T6).
+/// Strength from cold work, which extrusion destroys as forging does; what extrusion keeps is the
+/// temper that is set at the press and by ageing afterwards (T4, T5, T6).
 bool is_cold_worked(std::string_view condition) {
   static constexpr std::array<std::string_view, 5> tempers = {"T3", "T8", "T9", "H", "R"};
-  static constexpr std::array<std::string_view, 3> words = {"cold drawn", "cold rolled", "cold worked"};
-  return std::any_of(tempers.begin(), tempers.end(),
+  static constexpr std::array<std::string_view, 3> words = {
+      "cold drawn", "cold rolled", "cold worked"};
+  return std::any_of(tempers.begin(),
+                     tempers.end(),
                      [&](std::string_view temper) { return has_temper(condition, temper); }) ||
-         std::any_of(words.begin(), words.end(),
-                     [&](std::string_view word) { return found_in(condition, word); });
+         std::any_of(words.begin(), words.end(), [&](std::string_view word) {
+           return found_in(condition, word);
+         });
 }
 
 /// Heat-treated aluminium loses about half of its strength beside a weld.
@@ -63,18 +67,30 @@ bool is_softened_by_welding(const MaterialInfo& material) {
 
 std::string_view name(Rule rule) {
   switch (rule) {
-    case Rule::not_asked_for: return "not asked for";
-    case Rule::structural_use: return "not for structural use";
-    case Rule::material_class: return "route does not serve the class";
-    case Rule::process: return "process not possible";
-    case Rule::output_form: return "route cannot leave the shape";
-    case Rule::input_form: return "not sold in a form the route takes";
-    case Rule::casting_route: return "cast grade, other route";
-    case Rule::condition_lost: return "condition lost";
-    case Rule::treatment: return "treatment does not fit";
-    case Rule::stock_family: return "no such stock";
-    case Rule::stock_thickness: return "no such thickness";
-    case Rule::finish: return "finish does not go on it";
+    case Rule::not_asked_for:
+      return "not asked for";
+    case Rule::structural_use:
+      return "not for structural use";
+    case Rule::material_class:
+      return "route does not serve the class";
+    case Rule::process:
+      return "process not possible";
+    case Rule::output_form:
+      return "route cannot leave the shape";
+    case Rule::input_form:
+      return "not sold in a form the route takes";
+    case Rule::casting_route:
+      return "cast grade, other route";
+    case Rule::condition_lost:
+      return "condition lost";
+    case Rule::treatment:
+      return "treatment does not fit";
+    case Rule::stock_family:
+      return "no such stock";
+    case Rule::stock_thickness:
+      return "no such thickness";
+    case Rule::finish:
+      return "finish does not go on it";
   }
   return "unknown rule";
 }
@@ -89,7 +105,8 @@ bool takes_sheet_thickness(const Route& route) {
 }
 
 bool forms_hot(const Route& route) {
-  return contains_word(route.process_words, "hot forging") || contains_word(route.process_words, "hot forming");
+  return contains_word(route.process_words, "hot forging") ||
+         contains_word(route.process_words, "hot forming");
 }
 
 bool can_leave(const Route& route, SectionFamily family) {
@@ -99,8 +116,10 @@ bool can_leave(const Route& route, SectionFamily family) {
   const auto leaves = [&](std::string_view word) { return contains_word(route.leaves, word); };
   switch (family) {
     case SectionFamily::solid_round:
-    case SectionFamily::solid_ellipse: return leaves("solid");
-    case SectionFamily::solid_square: return leaves("solid") || leaves("rectangle");
+    case SectionFamily::solid_ellipse:
+      return leaves("solid");
+    case SectionFamily::solid_square:
+      return leaves("solid") || leaves("rectangle");
     case SectionFamily::solid_rectangle:
       return leaves("solid") || leaves("rectangle") || leaves("flat");
     case SectionFamily::round_tube:
@@ -110,17 +129,25 @@ bool can_leave(const Route& route, SectionFamily family) {
       return (leaves("tube") && !wound) || leaves("cored tube") || leaves("welded tube");
     }
     case SectionFamily::i_section:
-    case SectionFamily::channel: return false;
+    case SectionFamily::channel:
+      return false;
   }
   return false;
 }
 
 bool strength_is_lost_when_hot(std::string_view condition) {
   // "controlled cooled from hot forming" and "normalised" are reached by the forging itself.
-  static constexpr std::array<std::string_view, 9> words = {
-      "quenched", "hardened",    "tempered",   "aged",           "cold drawn",
-      "cold rolled", "cold worked", "stress relieved", "thermomechanically"};
-  return has_temper(condition) || std::any_of(words.begin(), words.end(), [&](std::string_view word) {
+  static constexpr std::array<std::string_view, 9> words = {"quenched",
+                                                            "hardened",
+                                                            "tempered",
+                                                            "aged",
+                                                            "cold drawn",
+                                                            "cold rolled",
+                                                            "cold worked",
+                                                            "stress relieved",
+                                                            "thermomechanically"};
+  return has_temper(condition) ||
+         std::any_of(words.begin(), words.end(), [&](std::string_view word) {
            return found_in(condition, word);
          });
 }
@@ -131,7 +158,9 @@ bool sets_strength(const Route& step, const MaterialInfo& material) {
 }
 
 std::optional<Exclusion> material_rules(const MaterialInfo& material, const Limits& limits) {
-  const auto exclude = [&](std::string text) { return Exclusion{Rule::not_asked_for, std::move(text)}; };
+  const auto exclude = [&](std::string text) {
+    return Exclusion{Rule::not_asked_for, std::move(text)};
+  };
   if (!limits.classes.empty() && !contains_word(limits.classes, material.material_class)) {
     return exclude("The job asks for " + joined(limits.classes) + "; this is " +
                    material.material_class + ".");
@@ -170,13 +199,14 @@ std::optional<Exclusion> material_rules(const MaterialInfo& material, const Limi
 
 std::optional<Exclusion> route_rules(const MaterialInfo& material, const Route& route) {
   if (!contains_word(route.classes, material.material_class)) {
-    return Exclusion{Rule::material_class, "The route \"" + route.title + "\" serves " +
-                                               joined(route.classes) + ", not " +
-                                               material.material_class + "."};
+    return Exclusion{Rule::material_class,
+                     "The route \"" + route.title + "\" serves " + joined(route.classes) +
+                         ", not " + material.material_class + "."};
   }
   if (!route.process_words.empty() && !shares_word(route.process_words, material.processes)) {
-    return Exclusion{Rule::process, "The route needs " + joined(route.process_words, " or ") +
-                                        "; the material allows " + joined(material.processes) + "."};
+    return Exclusion{Rule::process,
+                     "The route needs " + joined(route.process_words, " or ") +
+                         "; the material allows " + joined(material.processes) + "."};
   }
   if (is_cast(material) && machines_blank(route)) {
     return Exclusion{Rule::casting_route,
@@ -187,28 +217,32 @@ std::optional<Exclusion> route_rules(const MaterialInfo& material, const Route& 
   const bool takes = shares_word(route.takes, material.forms) ||
                      (forms_hot(route) && contains_word(material.forms, "forging"));
   if (!takes) {
-    return Exclusion{Rule::input_form, "The route takes " + joined(route.takes, " or ") +
-                                           "; the material is sold as " + joined(material.forms) +
-                                           "."};
+    return Exclusion{Rule::input_form,
+                     "The route takes " + joined(route.takes, " or ") +
+                         "; the material is sold as " + joined(material.forms) + "."};
   }
   if (rolls_tube(route) && !contains_word(material.processes, "welding (good)") &&
       !contains_word(material.processes, "welding (fair)")) {
-    return Exclusion{Rule::process, "A rolled tube is closed by a weld; the material allows " +
-                                        joined(material.processes) + "."};
+    return Exclusion{Rule::process,
+                     "A rolled tube is closed by a weld; the material allows " +
+                         joined(material.processes) + "."};
   }
   if ((is_extrusion(route) && is_metal(material.material_class) &&
        is_cold_worked(material.condition)) ||
       (rolls_tube(route) && is_softened_by_welding(material))) {
-    return Exclusion{Rule::condition_lost, "The route \"" + route.title +
-                                               "\" does not keep the strength of the condition \"" +
-                                               material.condition + "\"."};
+    return Exclusion{Rule::condition_lost,
+                     "The route \"" + route.title +
+                         "\" does not keep the strength of the condition \"" + material.condition +
+                         "\"."};
   }
   return std::nullopt;
 }
 
-std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material, const Route& route,
+std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material,
+                                          const Route& route,
                                           SectionFamily family) {
-  // What comes out of a die has the strength that its product form has: a row for tube, bar or profile.
+  // What comes out of a die has the strength that its product form has: a row for tube, bar or
+  // profile.
   const bool drawn = is_extrusion(route) || contains_word(route.process_words, "pultrusion");
   const bool from_granulate =
       contains_word(route.takes, "moulding") && contains_word(material.forms, "moulding");
@@ -224,9 +258,10 @@ std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material, const Ro
   if (listed) {
     return std::nullopt;
   }
-  return Exclusion{Rule::input_form, std::string("The values of this row hold for ") +
-                                         joined(material.forms, " and ") + ", not for a " +
-                                         (tube ? "tube." : "solid bar.")};
+  return Exclusion{Rule::input_form,
+                   std::string("The values of this row hold for ") +
+                       joined(material.forms, " and ") + ", not for a " +
+                       (tube ? "tube." : "solid bar.")};
 }
 
 std::optional<Exclusion> shape_rules(const Route& route, SectionFamily family, bool from_stock) {
@@ -236,9 +271,9 @@ std::optional<Exclusion> shape_rules(const Route& route, SectionFamily family, b
                          ", never a bought section unchanged."};
   }
   if (!from_stock && !can_leave(route, family)) {
-    return Exclusion{Rule::output_form, "The route \"" + route.title + "\" leaves " +
-                                            joined(route.leaves) + ", not a free size of " +
-                                            std::string(name(family)) + "."};
+    return Exclusion{Rule::output_form,
+                     "The route \"" + route.title + "\" leaves " + joined(route.leaves) +
+                         ", not a free size of " + std::string(name(family)) + "."};
   }
   return std::nullopt;
 }
@@ -246,16 +281,18 @@ std::optional<Exclusion> shape_rules(const Route& route, SectionFamily family, b
 std::optional<Exclusion> finish_rules(const MaterialInfo& material, const Finish& finish) {
   if (!contains_word(finish.classes, material.material_class) ||
       (!finish.process_words.empty() && !shares_word(finish.process_words, material.processes))) {
-    return Exclusion{Rule::finish, "The finish \"" + finish.title + "\" goes on " +
-                                       joined(finish.classes) + " that allow " +
-                                       joined(finish.process_words, " or ") + "."};
+    return Exclusion{Rule::finish,
+                     "The finish \"" + finish.title + "\" goes on " + joined(finish.classes) +
+                         " that allow " + joined(finish.process_words, " or ") + "."};
   }
   return std::nullopt;
 }
 
-std::vector<std::uint32_t> needed_treatments(const MaterialInfo& material, const Route& route,
+std::vector<std::uint32_t> needed_treatments(const MaterialInfo& material,
+                                             const Route& route,
                                              const Catalogue& catalogue) {
-  // A hot route may make the condition itself: press hardening, controlled cooling from the forging heat.
+  // A hot route may make the condition itself: press hardening, controlled cooling from the forging
+  // heat.
   if (!forms_hot(route) || !strength_is_lost_when_hot(material.condition) ||
       sets_strength(route, material)) {
     return {Candidate::none};
@@ -270,7 +307,8 @@ std::vector<std::uint32_t> needed_treatments(const MaterialInfo& material, const
   return out;
 }
 
-std::optional<Exclusion> first_broken_rule(const Candidate& candidate, const Part& part,
+std::optional<Exclusion> first_broken_rule(const Candidate& candidate,
+                                           const Part& part,
                                            const Catalogue& catalogue) {
   const auto& material = catalogue.materials.info(candidate.material);
   const auto& route = catalogue.routes[candidate.route];
@@ -283,14 +321,16 @@ std::optional<Exclusion> first_broken_rule(const Candidate& candidate, const Par
   }
   const auto needed = needed_treatments(material, route, catalogue);
   if (needed.empty()) {
-    return Exclusion{Rule::condition_lost,
-                     "Its strength comes from the condition \"" + material.condition +
-                         "\", which hot forming destroys, and no treatment of the catalogue sets it anew."};
+    return Exclusion{
+        Rule::condition_lost,
+        "Its strength comes from the condition \"" + material.condition +
+            "\", which hot forming destroys, and no treatment of the catalogue sets it anew."};
   }
   if (std::find(needed.begin(), needed.end(), candidate.treatment) == needed.end()) {
-    return Exclusion{Rule::treatment, candidate.treatment == Candidate::none
-                                          ? "Its condition needs a treatment after hot forming."
-                                          : "The treatment does not set the strength of this condition."};
+    return Exclusion{Rule::treatment,
+                     candidate.treatment == Candidate::none
+                         ? "Its condition needs a treatment after hot forming."
+                         : "The treatment does not set the strength of this condition."};
   }
   const auto family = from_stock ? catalogue.stock[candidate.stock].family
                                  : part.body.shapes[candidate.shape].family;
@@ -308,8 +348,9 @@ std::optional<Exclusion> first_broken_rule(const Candidate& candidate, const Par
       return made_of(item, material) && shares_word(item.forms, route.takes);
     });
     if (!any) {
-      return Exclusion{Rule::stock_family, "No size of \"" + catalogue.stock[candidate.stock].title +
-                                               "\" is made of it."};
+      return Exclusion{
+          Rule::stock_family,
+          "No size of \"" + catalogue.stock[candidate.stock].title + "\" is made of it."};
     }
   }
   if (candidate.finish != Candidate::none) {

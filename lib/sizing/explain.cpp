@@ -16,19 +16,26 @@ namespace {
 
 std::string evidence_text(Evidence evidence) {
   switch (evidence) {
-    case Evidence::from_memory: return "unverified";
-    case Evidence::seen: return "seen in print";
-    case Evidence::estimated: return "estimated";
-    case Evidence::user: return "user's table";
+    case Evidence::from_memory:
+      return "unverified";
+    case Evidence::seen:
+      return "seen in print";
+    case Evidence::estimated:
+      return "estimated";
+    case Evidence::user:
+      return "user's table";
   }
   return {};
 }
 
 std::string basis_text(Basis basis) {
   switch (basis) {
-    case Basis::minimum: return "minimum";
-    case Basis::typical: return "typical";
-    case Basis::indicative: return "indicative";
+    case Basis::minimum:
+      return "minimum";
+    case Basis::typical:
+      return "typical";
+    case Basis::indicative:
+      return "indicative";
   }
   return {};
 }
@@ -46,12 +53,14 @@ std::string range_text(const Range& range, const PropertyInfo& info, const std::
 }
 
 /// Symbols that the failing limit states read and that a larger value of would help.
-std::vector<Symbol> helpful_symbols(const SizingProblem& problem, const CompiledCandidate& compiled,
+std::vector<Symbol> helpful_symbols(const SizingProblem& problem,
+                                    const CompiledCandidate& compiled,
                                     const Outcome& outcome) {
   std::set<Symbol> out;
   for (const auto index : outcome.failed) {
     const auto& constraint = compiled.constraints[index];
-    const auto piece = std::find_if(compiled.pieces.begin(), compiled.pieces.end(),
+    const auto piece = std::find_if(compiled.pieces.begin(),
+                                    compiled.pieces.end(),
                                     [](const Piece& one) { return one.step != nullptr; });
     if (constraint.kind != Constraint::Kind::limit_state || piece == compiled.pieces.end()) {
       continue;
@@ -99,7 +108,8 @@ std::string money_text(double amount, const std::string& currency) {
   return format_significant(amount, 4) + " " + currency;
 }
 
-std::vector<std::string> provenance_lines(const SizingProblem& problem, std::size_t group,
+std::vector<std::string> provenance_lines(const SizingProblem& problem,
+                                          std::size_t group,
                                           const Design& design) {
   const auto& compiled = problem.compiled(group);
   const auto detail = problem.detail(group, design.size);
@@ -108,9 +118,8 @@ std::vector<std::string> provenance_lines(const SizingProblem& problem, std::siz
   for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
     const auto& constraint = compiled.constraints[i];
     if (detail.piece->applies[i]) {
-      for (const Symbol symbol :
-           constraint.state->needs(problem.effects()[constraint.load_case],
-                                   step.cases[constraint.load_case].member)) {
+      for (const Symbol symbol : constraint.state->needs(problem.effects()[constraint.load_case],
+                                                         step.cases[constraint.load_case].member)) {
         used.insert(property_of(symbol));
       }
     }
@@ -122,8 +131,9 @@ std::vector<std::string> provenance_lines(const SizingProblem& problem, std::siz
       continue;
     }
     const auto from = problem.catalogue().materials.provenance(property, step.row);
-    std::string line = std::string(info(property).name) + " " + range_text(*range, info(property), problem.catalogue().currency) +
-                       ": " + std::filesystem::path(from.table).filename().string();
+    std::string line = std::string(info(property).name) + " " +
+                       range_text(*range, info(property), problem.catalogue().currency) + ": " +
+                       std::filesystem::path(from.table).filename().string();
     if (from.row > 0) {
       line += " line " + std::to_string(from.row);
     }
@@ -134,7 +144,8 @@ std::vector<std::string> provenance_lines(const SizingProblem& problem, std::siz
   return out;
 }
 
-std::vector<std::string> limit_lines(const SizingProblem& problem, std::size_t group,
+std::vector<std::string> limit_lines(const SizingProblem& problem,
+                                     std::size_t group,
                                      const Design& design) {
   const auto& compiled = problem.compiled(group);
   const auto detail = problem.detail(group, design.size);
@@ -147,8 +158,12 @@ std::vector<std::string> limit_lines(const SizingProblem& problem, std::size_t g
     }
     const auto& resolved = detail.piece->step->cases[constraint.load_case];
     const auto member = resolved.at_depth(detail.section.height);
-    const CheckInput input{detail.section, member, problem.effects()[constraint.load_case],
-                           problem.member_limits(), problem.part().body.length, constraint.factor};
+    const CheckInput input{detail.section,
+                           member,
+                           problem.effects()[constraint.load_case],
+                           problem.member_limits(),
+                           problem.part().body.length,
+                           constraint.factor};
     const auto explanation = constraint.state->explain(input);
     out.push_back(explanation.line);
     const bool governs =
@@ -173,8 +188,8 @@ std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome&
                     (labels.finish == "none" ? "" : ", " + labels.finish);
   std::string line = how + ": " + outcome.reason;
   if (std::isfinite(outcome.least_utilisation) && outcome.least_utilisation > 1.0) {
-    line += ", at best " + format_significant(outcome.least_utilisation, 3) +
-            " times what is allowed";
+    line +=
+        ", at best " + format_significant(outcome.least_utilisation, 3) + " times what is allowed";
   }
   std::vector<std::string> out = {line + "."};
   const auto& currency = problem.catalogue().currency;

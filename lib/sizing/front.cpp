@@ -41,12 +41,12 @@ std::string item_id(const Solved& solved, const Outcome& outcome, double size) {
   return list.items[static_cast<std::size_t>(size)].id;
 }
 
-/// Whether no front point is better by the margin in both objectives. The front is given by rising mass.
+/// Whether no front point is better by the margin in both objectives. The front is given by rising
+/// mass.
 bool is_near(double mass, double cost, std::span<const Outcome::Point> front, double margin) {
   const double inflated = 1.0 + margin;
-  const auto heavier = std::partition_point(front.begin(), front.end(), [&](const auto& point) {
-    return inflated * point.mass < mass;
-  });
+  const auto heavier = std::partition_point(
+      front.begin(), front.end(), [&](const auto& point) { return inflated * point.mass < mass; });
   // Of the points lighter by the margin the heaviest is the cheapest.
   return heavier == front.begin() || !(inflated * std::prev(heavier)->cost < cost);
 }
@@ -60,7 +60,8 @@ bool is_confirmed(const Design& design, const SizingProblem& problem, std::size_
     return !(std::abs(a - b) <= plain_path_tolerance * std::max(std::abs(a), std::abs(b)));
   };
   return !differs(objectives[0], design.mass) && !differs(objectives[1], design.cost) &&
-         std::all_of(design.utilisations.begin(), design.utilisations.end(),
+         std::all_of(design.utilisations.begin(),
+                     design.utilisations.end(),
                      [](const Utilisation& u) { return u.value <= 1.0; });
 }
 
@@ -74,8 +75,8 @@ class FrontBuilder {
     result.part = part_.name;
     result.currency = solved_.problem->catalogue().currency;
     rank();
-    // A design that its re-evaluation does not confirm is a defect of ours: it is dropped and named, and the
-    // front is made anew without it.
+    // A design that its re-evaluation does not confirm is a defect of ours: it is dropped and
+    // named, and the front is made anew without it.
     while (!split(result)) {
     }
     fill_funnel(result);
@@ -129,8 +130,10 @@ class FrontBuilder {
         }
         stage_.try_emplace(one.outcome, FunnelLine::Stage::near);
       } else {
-        result.others.push_back({solved_.outcomes[one.outcome].candidate, one.point.size,
-                                 one.point.mass, one.point.cost});
+        result.others.push_back({solved_.outcomes[one.outcome].candidate,
+                                 one.point.size,
+                                 one.point.mass,
+                                 one.point.cost});
       }
     }
     return true;
@@ -142,9 +145,10 @@ class FrontBuilder {
     auto design = make_design(*solved_.problem, group, one.point.size);
     if (!is_confirmed(design, *solved_.problem, group)) {
       result.exact = false;
-      result.notes.push_back("INTERNAL FAULT: " + design.id +
-                             " differs from its re-evaluation on the plain path and was left out; please "
-                             "report it.");
+      result.notes.push_back(
+          "INTERNAL FAULT: " + design.id +
+          " differs from its re-evaluation on the plain path and was left out; please "
+          "report it.");
       ranked_.erase(ranked_.begin() + static_cast<std::ptrdiff_t>(row));
       return false;
     }
@@ -185,8 +189,9 @@ class FrontBuilder {
     }
     const auto add = [&](Stage stage_of, const std::map<std::string, std::size_t>& counts) {
       std::vector<std::pair<std::string, std::size_t>> sorted(counts.begin(), counts.end());
-      std::stable_sort(sorted.begin(), sorted.end(),
-                       [](const auto& a, const auto& b) { return a.second > b.second; });
+      std::stable_sort(sorted.begin(), sorted.end(), [](const auto& a, const auto& b) {
+        return a.second > b.second;
+      });
       for (const auto& [reason, count] : sorted) {
         funnel.lines.push_back({stage_of, reason, count});
       }
@@ -203,21 +208,24 @@ class FrontBuilder {
   void add_notes(Result& result) const {
     if (part_.limits.column_method == ColumnMethod::euler) {
       result.notes.emplace_back(
-          "Columns by Euler's load alone: no imperfection and no yielding are in it. It is an upper bound on "
+          "Columns by Euler's load alone: no imperfection and no yielding are in it. It is an "
+          "upper bound on "
           "the resistance, not a check by itself.");
     }
     for (const auto& load_case : part_.body.load_cases) {
       for (const auto& [limit, factor] : load_case.factors) {
         if (factor < 1.0) {
-          result.notes.push_back("Load case \"" + load_case.name + "\": the factor " + plain(factor) +
-                                 " on " + limit + " is below 1, so designs fail before the load is reached.");
+          result.notes.push_back("Load case \"" + load_case.name + "\": the factor " +
+                                 plain(factor) + " on " + limit +
+                                 " is below 1, so designs fail before the load is reached.");
         }
       }
     }
     if (solved_.stopped) {
       result.exact = false;
       result.notes.emplace_back(
-          "Stopped before the end: designs shown are sound, but lighter or cheaper ones may be missing.");
+          "Stopped before the end: designs shown are sound, but lighter or cheaper ones may be "
+          "missing.");
     }
   }
 
@@ -229,16 +237,22 @@ class FrontBuilder {
   std::map<std::size_t, FunnelLine::Stage> stage_;
 };
 
-std::string group_label(const Solved& solved, const Outcome& outcome, const CandidateNames& labels,
-                        double size, GroupBy group_by) {
+std::string group_label(const Solved& solved,
+                        const Outcome& outcome,
+                        const CandidateNames& labels,
+                        double size,
+                        GroupBy group_by) {
   switch (group_by) {
-    case GroupBy::material: return labels.material;
+    case GroupBy::material:
+      return labels.material;
     case GroupBy::stock_item: {
       const auto item = item_id(solved, outcome, size);
       return item.empty() ? labels.material + "/" + labels.shape : labels.material + "/" + item;
     }
-    case GroupBy::material_and_shape: return labels.material + "/" + labels.shape;
-    case GroupBy::route: return labels.route;
+    case GroupBy::material_and_shape:
+      return labels.material + "/" + labels.shape;
+    case GroupBy::route:
+      return labels.route;
   }
   throw InternalError("fronts: unknown grouping");
 }
@@ -248,7 +262,10 @@ void check_candidate(const Candidate& candidate, const Part& part, const Catalog
   FaultList faults;
   const auto check = [&](bool good, const char* field, const char* allowed) {
     if (!good) {
-      faults.add({Code::out_of_range, std::string("candidate.") + field, {}, allowed,
+      faults.add({Code::out_of_range,
+                  std::string("candidate.") + field,
+                  {},
+                  allowed,
                   std::string("The candidate's ") + field + " must be " + allowed + "."});
     }
   };
@@ -258,22 +275,29 @@ void check_candidate(const Candidate& candidate, const Part& part, const Catalog
   const bool from_shape = candidate.shape != Candidate::none;
   const bool from_stock = candidate.stock != Candidate::none;
   check(candidate.material < catalogue.materials.size(), "material", "a material of the catalogue");
-  check(among(route_choices(part, catalogue), candidate.route), "route", "a route that the part admits");
+  check(among(route_choices(part, catalogue), candidate.route),
+        "route",
+        "a route that the part admits");
   check(from_shape != from_stock, "shape", "set where stock is not, and the other way round");
   check(!from_shape || candidate.shape < part.body.shapes.size(), "shape", "a shape of the part");
-  check(!from_stock || among(stock_lists(part, catalogue), candidate.stock), "stock",
+  check(!from_stock || among(stock_lists(part, catalogue), candidate.stock),
+        "stock",
         "a stock list that the part admits");
   check(candidate.treatment == Candidate::none ||
             (candidate.treatment < catalogue.routes.size() &&
              catalogue.routes[candidate.treatment].kind == RouteKind::treatment),
-        "treatment", "a treatment of the catalogue, or none");
-  check(among(finish_choices(part, catalogue), candidate.finish), "finish",
+        "treatment",
+        "a treatment of the catalogue, or none");
+  check(among(finish_choices(part, catalogue), candidate.finish),
+        "finish",
         "a finish that the part tries");
   faults.throw_if_any();
 }
 
 /// The functions that the guard protects are compiled apart from it (see FloatingPointGuard).
-Result build_front(const Part& part, const Catalogue& catalogue, const Settings& settings,
+Result build_front(const Part& part,
+                   const Catalogue& catalogue,
+                   const Settings& settings,
                    const RunOptions& run) {
   auto solved = solve_candidates(part, catalogue, settings, run);
   return FrontBuilder(part, settings, solved).run();
@@ -281,7 +305,9 @@ Result build_front(const Part& part, const Catalogue& catalogue, const Settings&
 
 }  // namespace
 
-Result front(const Part& part, const Catalogue& catalogue, const Settings& settings,
+Result front(const Part& part,
+             const Catalogue& catalogue,
+             const Settings& settings,
              const RunOptions& run) {
   const auto start = std::chrono::steady_clock::now();
   const FloatingPointGuard guard;
@@ -292,7 +318,9 @@ Result front(const Part& part, const Catalogue& catalogue, const Settings& setti
   return result;
 }
 
-std::vector<GroupedFront> fronts(const Part& part, const Catalogue& catalogue, GroupBy group_by,
+std::vector<GroupedFront> fronts(const Part& part,
+                                 const Catalogue& catalogue,
+                                 GroupBy group_by,
                                  const Settings& settings) {
   const FloatingPointGuard guard;
   validate(part, catalogue, settings);
@@ -318,16 +346,19 @@ std::vector<GroupedFront> fronts(const Part& part, const Catalogue& catalogue, G
     GroupedFront group{label, {}};
     for (const auto row : front_2d(objectives)) {
       const auto& one = points[row];
-      group.points.push_back({solved.outcomes[one.outcome].candidate, one.point.size,
-                              one.point.mass, one.point.cost});
+      group.points.push_back(
+          {solved.outcomes[one.outcome].candidate, one.point.size, one.point.mass, one.point.cost});
     }
     out.push_back(std::move(group));
   }
   return out;
 }
 
-Design evaluate(const Part& part, const Catalogue& catalogue, const Candidate& candidate,
-                double size, const Settings& settings) {
+Design evaluate(const Part& part,
+                const Catalogue& catalogue,
+                const Candidate& candidate,
+                double size,
+                const Settings& settings) {
   const FloatingPointGuard guard;
   validate(part, catalogue, settings);
   check_candidate(candidate, part, catalogue);
@@ -338,12 +369,18 @@ Design evaluate(const Part& part, const Catalogue& catalogue, const Candidate& c
   const auto& compiled = problem.add(candidate);
   FaultList faults;
   for (const Property property : compiled.undecided) {
-    faults.add({Code::missing, std::string(info(property).name), {}, {},
+    faults.add({Code::missing,
+                std::string(info(property).name),
+                {},
+                {},
                 "The material has no value for " + std::string(info(property).name) +
                     ", which this part needs."});
   }
   for (const auto& limit : compiled.undecided_limits) {
-    faults.add({Code::missing, limit, {}, {},
+    faults.add({Code::missing,
+                limit,
+                {},
+                {},
                 "The material has no value for " + limit + ", on which the part has a limit."});
   }
   faults.throw_if_any();
@@ -353,7 +390,10 @@ Design evaluate(const Part& part, const Catalogue& catalogue, const Candidate& c
                           : std::find(variable.values.begin(), variable.values.end(), size) !=
                                 variable.values.end();
   if (!listed) {
-    throw Error({Code::out_of_range, "size", plain(size), "a size that the part asks for",
+    throw Error({Code::out_of_range,
+                 "size",
+                 plain(size),
+                 "a size that the part asks for",
                  "The size is not one of those that the part asks for."});
   }
   return make_design(problem, 0, size);

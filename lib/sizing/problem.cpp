@@ -30,7 +30,8 @@ MemberLimits limits_of_member(const Limits& limits) {
 }
 
 double by_class(const std::map<std::string, double, std::less<>>& values,
-                const MaterialInfo& material, double otherwise) {
+                const MaterialInfo& material,
+                double otherwise) {
   const auto own = values.find(material.material_class);
   return own != values.end() ? own->second : otherwise;
 }
@@ -66,7 +67,8 @@ std::size_t SizingProblem::constraints(std::size_t group) const {
   return groups_[group]->constraints.size();
 }
 
-Trend SizingProblem::objective_trend(std::size_t /*group*/, std::size_t /*i*/,
+Trend SizingProblem::objective_trend(std::size_t /*group*/,
+                                     std::size_t /*i*/,
                                      std::size_t /*v*/) const {
   return Trend::rises;
 }
@@ -89,8 +91,8 @@ const std::vector<UsableItem>& SizingProblem::blank_stock_of(std::uint32_t mater
                                                              std::uint32_t route) {
   const auto [entry, added] = blank_stock_.try_emplace({material, route});
   if (added) {
-    entry->second = blank_stock(catalogue_.materials.info(material), catalogue_.routes[route],
-                                catalogue_, settings_);
+    entry->second = blank_stock(
+        catalogue_.materials.info(material), catalogue_.routes[route], catalogue_, settings_);
   }
   return entry->second;
 }
@@ -116,7 +118,8 @@ StepState SizingProblem::make_state(std::size_t material, std::size_t row) const
   return state;
 }
 
-ResolvedMaterial SizingProblem::resolve_case(std::size_t material, std::size_t row,
+ResolvedMaterial SizingProblem::resolve_case(std::size_t material,
+                                             std::size_t row,
                                              std::size_t load_case) const {
   const auto& loads = part_.body.load_cases[load_case];
   std::set<Symbol> filled;
@@ -124,8 +127,9 @@ ResolvedMaterial SizingProblem::resolve_case(std::size_t material, std::size_t r
   if (settings_.missing != Missing::class_median) {
     return resolved;
   }
-  // Whatever a limit state of this load case may read; the section is not known yet, so a tube stands for
-  // all: it has walls. A filled yield strength may change the rule, and so what is read: look again.
+  // Whatever a limit state of this load case may read; the section is not known yet, so a tube
+  // stands for all: it has walls. A filled yield strength may change the rule, and so what is read:
+  // look again.
   const auto any_section = bismar::round_tube(0.1, 0.01, Forming::unknown);
   for (int pass_number = 0; pass_number < 3; ++pass_number) {
     std::set<Symbol> wanted = {Symbol::rho};
@@ -135,7 +139,8 @@ ResolvedMaterial SizingProblem::resolve_case(std::size_t material, std::size_t r
         wanted.insert(needs.begin(), needs.end());
       }
     }
-    std::erase_if(wanted, [&](Symbol symbol) { return value_of(resolved.member, symbol).has_value(); });
+    std::erase_if(wanted,
+                  [&](Symbol symbol) { return value_of(resolved.member, symbol).has_value(); });
     if (wanted.empty()) {
       break;
     }
@@ -166,19 +171,22 @@ void SizingProblem::restore(std::size_t material, const std::vector<StepState>& 
 }
 
 const Piece& SizingProblem::piece_at(const CompiledCandidate& group, double x) const {
-  const auto found = std::lower_bound(group.pieces.begin(), group.pieces.end(), x,
-                                      [](const Piece& piece, double at) { return piece.upper < at; });
+  const auto found = std::lower_bound(
+      group.pieces.begin(), group.pieces.end(), x, [](const Piece& piece, double at) {
+        return piece.upper < at;
+      });
   return found == group.pieces.end() ? group.pieces.back() : *found;
 }
 
-std::optional<Purchase> SizingProblem::purchase(const CompiledCandidate& group, const Piece& piece,
+std::optional<Purchase> SizingProblem::purchase(const CompiledCandidate& group,
+                                                const Piece& piece,
                                                 const SectionProperties& section,
                                                 double net_mass) const {
   const double length = part_.body.length;
   const Route& route = catalogue_.routes[group.candidate.route];
   if (piece.item != nullptr) {
-    return buy_length(section.area, piece.step->density, length, piece.item->lengths,
-                      settings_.kerf);
+    return buy_length(
+        section.area, piece.step->density, length, piece.item->lengths, settings_.kerf);
   }
   if (machines_blank(route)) {
     return piece.blank == nullptr
@@ -189,7 +197,8 @@ std::optional<Purchase> SizingProblem::purchase(const CompiledCandidate& group, 
 }
 
 double SizingProblem::material_utilisation(const CompiledCandidate& group,
-                                           const Constraint& constraint, const StepState& step,
+                                           const Constraint& constraint,
+                                           const StepState& step,
                                            const SectionProperties& section) const {
   const auto& info = catalogue_.materials.info(group.candidate.material);
   const Finish* finish = group.candidate.finish == Candidate::none
@@ -201,8 +210,8 @@ double SizingProblem::material_utilisation(const CompiledCandidate& group,
     if (grade_holds || finish == nullptr) {
       return pass(grade_holds);
     }
-    // A finish helps where it states a rating; under it the grade holds out as well as it does by itself. The
-    // bore of a tube is only finished by a bath.
+    // A finish helps where it states a rating; under it the grade holds out as well as it does by
+    // itself. The bore of a tube is only finished by a bath.
     const auto after = finish->corrosion_after.find(medium);
     return pass(after != finish->corrosion_after.end() &&
                 after->second >= part_.limits.corrosion_at_least &&
@@ -227,13 +236,15 @@ double SizingProblem::material_utilisation(const CompiledCandidate& group,
   }
   if (limit.at_most) {
     const double value = limited_end(reader_, limit, *range, false);
-    u = std::max(u, value > 0.0 && *limit.at_most > 0.0 ? value / *limit.at_most
-                                                        : pass(value <= *limit.at_most));
+    u = std::max(u,
+                 value > 0.0 && *limit.at_most > 0.0 ? value / *limit.at_most
+                                                     : pass(value <= *limit.at_most));
   }
   return u;
 }
 
-void SizingProblem::evaluate_section(const CompiledCandidate& group, const Piece& piece,
+void SizingProblem::evaluate_section(const CompiledCandidate& group,
+                                     const Piece& piece,
                                      const SectionProperties& section,
                                      std::span<double> objectives,
                                      std::span<double> utilisations) const {
@@ -247,8 +258,8 @@ void SizingProblem::evaluate_section(const CompiledCandidate& group, const Piece
     bought = purchase(group, piece, section, net_mass);
     mass = net_mass + group.cost->finish_mass(section);
     if (bought) {
-      cost = group.cost->total({section, net_mass, *bought}, piece.step->price,
-                               piece.step->usual_price);
+      cost = group.cost->total(
+          {section, net_mass, *bought}, piece.step->price, piece.step->usual_price);
     }
   }
   objectives[0] = mass;
@@ -266,8 +277,11 @@ void SizingProblem::evaluate_section(const CompiledCandidate& group, const Piece
     } else if (piece.step != nullptr) {
       switch (constraint.kind) {
         case Constraint::Kind::thickness_limit:
-        case Constraint::Kind::corners: break;
-        case Constraint::Kind::blank: u = pass(bought.has_value()); break;
+        case Constraint::Kind::corners:
+          break;
+        case Constraint::Kind::blank:
+          u = pass(bought.has_value());
+          break;
         case Constraint::Kind::property:
         case Constraint::Kind::corrosion:
         case Constraint::Kind::temperature:
@@ -282,41 +296,58 @@ void SizingProblem::evaluate_section(const CompiledCandidate& group, const Piece
         case Constraint::Kind::route_section:
           u = section.wall / by_class(route.max_wall_by_class, material, route.section_max);
           break;
-        case Constraint::Kind::route_mass_min: u = route.mass_min / net_mass; break;
-        case Constraint::Kind::route_mass_max: u = net_mass / route.mass_max; break;
-        case Constraint::Kind::mass_cap: u = mass / *part_.limits.mass; break;
-        case Constraint::Kind::cost_cap: u = cost / *part_.limits.cost; break;
+        case Constraint::Kind::route_mass_min:
+          u = route.mass_min / net_mass;
+          break;
+        case Constraint::Kind::route_mass_max:
+          u = net_mass / route.mass_max;
+          break;
+        case Constraint::Kind::mass_cap:
+          u = mass / *part_.limits.mass;
+          break;
+        case Constraint::Kind::cost_cap:
+          u = cost / *part_.limits.cost;
+          break;
       }
     }
     utilisations[i] = u;
   }
 }
 
-double SizingProblem::limit_utilisation(const Constraint& constraint, const StepState& step,
+double SizingProblem::limit_utilisation(const Constraint& constraint,
+                                        const StepState& step,
                                         const SectionProperties& section) const {
   const auto& resolved = step.cases[constraint.load_case];
   const auto check = [&](const MemberMaterial& material) {
-    return constraint.state->utilisation({section, material, effects_[constraint.load_case],
-                                          member_limits_, part_.body.length, constraint.factor});
+    return constraint.state->utilisation({section,
+                                          material,
+                                          effects_[constraint.load_case],
+                                          member_limits_,
+                                          part_.body.length,
+                                          constraint.factor});
   };
   // Only LVL changes with its depth; the copy is not worth making for the others.
   return resolved.depth_reference > 0.0 ? check(resolved.at_depth(section.height))
                                         : check(resolved.member);
 }
 
-void SizingProblem::evaluate(std::size_t group, std::span<const double> x,
-                             std::span<double> objectives, std::span<double> utilisations) const {
+void SizingProblem::evaluate(std::size_t group,
+                             std::span<const double> x,
+                             std::span<double> objectives,
+                             std::span<double> utilisations) const {
   const auto& compiled = *groups_[group];
   const Piece& piece = piece_at(compiled, x[0]);
   if (piece.item != nullptr || piece.impossible || x[0] == piece.size) {
     evaluate_section(compiled, piece, piece.section, objectives, utilisations);
   } else {
-    evaluate_section(compiled, piece, scaled(piece.section, x[0] / piece.size), objectives,
-                     utilisations);
+    evaluate_section(
+        compiled, piece, scaled(piece.section, x[0] / piece.size), objectives, utilisations);
   }
 }
 
-void SizingProblem::evaluate_plain(std::size_t group, double x, std::span<double> objectives,
+void SizingProblem::evaluate_plain(std::size_t group,
+                                   double x,
+                                   std::span<double> objectives,
                                    std::span<double> utilisations) const {
   const auto one = detail(group, x);
   evaluate_section(*groups_[group], *one.piece, one.section, objectives, utilisations);
@@ -329,7 +360,8 @@ SizingProblem::Detail SizingProblem::detail(std::size_t group, double x) const {
   out.section = out.piece->item != nullptr || out.piece->impossible
                     ? out.piece->section
                     : section_of(part_.body.shapes[compiled.candidate.shape],
-                                 catalogue_.routes[compiled.candidate.route], x);
+                                 catalogue_.routes[compiled.candidate.route],
+                                 x);
   if (out.piece->step != nullptr) {
     out.net_mass = out.piece->step->density * out.section.area * part_.body.length;
     out.purchase = purchase(compiled, *out.piece, out.section, out.net_mass);

@@ -61,8 +61,8 @@ struct Piece {
   const StepState* step = nullptr;  ///< Null: thicker than the table's last limit.
   const Blank* blank = nullptr;     ///< Machined parts.
   const StockItem* item = nullptr;  ///< Stock.
-  bool impossible = false;  ///< There is no such section: its corners leave no wall.
-  SectionProperties section;  ///< At `size`; other sizes of the piece are scaled from it.
+  bool impossible = false;          ///< There is no such section: its corners leave no wall.
+  SectionProperties section;        ///< At `size`; other sizes of the piece are scaled from it.
   double size = 0.0;
   std::vector<bool> applies;  ///< Per constraint: can this load case cause it here?
 };
@@ -76,7 +76,8 @@ struct CompiledCandidate {
   std::vector<Blank> blanks;
   std::optional<CandidateCost> cost;
   std::vector<Property> undecided;  ///< Needed and missing; the candidate is not solved then.
-  std::vector<std::string> undecided_limits;  ///< Limits of the job that a missing value leaves open.
+  std::vector<std::string>
+      undecided_limits;  ///< Limits of the job that a missing value leaves open.
 };
 
 /// A part's sizing as the solver sees it. One group a candidate; the variable is the height of the

@@ -24,8 +24,12 @@ struct Row {
   double cost = 0.0;
 };
 
-std::string label_of(const Row& row, const Result& result, std::size_t index, const Part& part,
-                     const Catalogue& catalogue, Per per) {
+std::string label_of(const Row& row,
+                     const Result& result,
+                     std::size_t index,
+                     const Part& part,
+                     const Catalogue& catalogue,
+                     Per per) {
   const auto labels = names(row.candidate, part, catalogue);
   switch (per) {
     case Per::design:
@@ -35,9 +39,12 @@ std::string label_of(const Row& row, const Result& result, std::size_t index, co
                  : labels.material + "/" + labels.shape + "/" + labels.route +
                        (labels.treatment.empty() ? "" : "+" + labels.treatment) + "/" +
                        labels.finish + " #" + std::to_string(index);
-    case Per::material: return labels.material;
-    case Per::shape: return labels.shape;
-    case Per::route: return labels.route;
+    case Per::material:
+      return labels.material;
+    case Per::shape:
+      return labels.shape;
+    case Per::route:
+      return labels.route;
   }
   return labels.material;
 }
@@ -53,8 +60,8 @@ class Band {
   Band(const Part& part, const Catalogue& catalogue, const Settings& settings)
       : problem_(part, catalogue, settings) {}
 
-  /// Breakpoint between the design that holds below and the one that holds above, over all ends of their
-  /// price and density ranges; those of one material move together.
+  /// Breakpoint between the design that holds below and the one that holds above, over all ends of
+  /// their price and density ranges; those of one material move together.
   BreakpointBand breakpoint(const Row& below, const Row& above) {
     const auto low = corners(below);
     const auto high = corners(above);
@@ -69,8 +76,8 @@ class Band {
         const double saved = low[i].mass - high[j].mass;
         const double paid = high[j].cost - low[i].cost;
         // No mass saved at these ends: no worth of a kilogram makes the upper one the choice.
-        const double alpha = saved <= 0.0 ? std::numeric_limits<double>::infinity()
-                                          : std::max(0.0, paid / saved);
+        const double alpha =
+            saved <= 0.0 ? std::numeric_limits<double>::infinity() : std::max(0.0, paid / saved);
         least = std::min(least, alpha);
         most = std::max(most, alpha);
       }
@@ -83,13 +90,17 @@ class Band {
     const auto& compiled = problem_.add(row.candidate);
     const auto detail = problem_.detail(problem_.groups() - 1, row.size);
     if (detail.piece->step == nullptr || !detail.purchase) {
-      throw Error({Code::conflict, "result", {}, "a result of this part, catalogue and settings",
-                   "The result does not fit the part, catalogue and settings that it is read with."});
+      throw Error(
+          {Code::conflict,
+           "result",
+           {},
+           "a result of this part, catalogue and settings",
+           "The result does not fit the part, catalogue and settings that it is read with."});
     }
     const auto& step = *detail.piece->step;
-    const auto density =
-        problem_.catalogue().materials.value(Property::density, step.row).value_or(
-            Range{step.density, step.density});
+    const auto density = problem_.catalogue()
+                             .materials.value(Property::density, step.row)
+                             .value_or(Range{step.density, step.density});
     std::array<Corner, 4> out;
     std::size_t k = 0;
     for (const double rho : {density.low, density.high}) {
@@ -111,8 +122,11 @@ class Band {
 
 }  // namespace
 
-ExchangeRuler exchange_ruler(const Result& result, const Part& part, const Catalogue& catalogue,
-                             Per per, const Settings& settings) {
+ExchangeRuler exchange_ruler(const Result& result,
+                             const Part& part,
+                             const Catalogue& catalogue,
+                             Per per,
+                             const Settings& settings) {
   const FloatingPointGuard guard;
   std::vector<Row> rows;
   for (const auto& design : result.designs) {
@@ -128,8 +142,7 @@ ExchangeRuler exchange_ruler(const Result& result, const Part& part, const Catal
   for (std::size_t i = 0; i < rows.size(); ++i) {
     objectives.insert(objectives.end(), {rows[i].mass, rows[i].cost});
     auto word = label_of(rows[i], result, i, part, catalogue, per);
-    const auto [entry, added] =
-        numbers.try_emplace(word, static_cast<std::uint32_t>(words.size()));
+    const auto [entry, added] = numbers.try_emplace(word, static_cast<std::uint32_t>(words.size()));
     if (added) {
       words.push_back(std::move(word));
     }
@@ -154,8 +167,14 @@ ExchangeRuler exchange_ruler(const Result& result, const Part& part, const Catal
     named.cost = first.cost;
     for (const auto& other : stretch.runners_up) {
       const Row& row = rows[other.rows.front()];
-      named.runners_up.push_back({other.from, other.to, words[other.label], row.candidate, row.mass,
-                                  row.cost, other.regret_from, other.regret_to});
+      named.runners_up.push_back({other.from,
+                                  other.to,
+                                  words[other.label],
+                                  row.candidate,
+                                  row.mass,
+                                  row.cost,
+                                  other.regret_from,
+                                  other.regret_to});
     }
     if (previous != nullptr) {
       named.from_band = band.breakpoint(*previous, rows[named.design]);

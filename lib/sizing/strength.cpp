@@ -54,8 +54,12 @@ Property k_mod(double seconds) {
 
 class Resolver {
  public:
-  Resolver(const PropertyReader& reader, std::size_t material, std::size_t row,
-           const LoadCase& load_case, ServiceClass service_class, const std::set<Symbol>& filled)
+  Resolver(const PropertyReader& reader,
+           std::size_t material,
+           std::size_t row,
+           const LoadCase& load_case,
+           ServiceClass service_class,
+           const std::set<Symbol>& filled)
       : reader_(reader),
         info_(reader.catalogue().materials.info(material)),
         row_(row),
@@ -78,9 +82,7 @@ class Resolver {
   }
 
  private:
-  std::optional<double> read(Property property) const {
-    return reader_.value(property, row_);
-  }
+  std::optional<double> read(Property property) const { return reader_.value(property, row_); }
 
   std::optional<double> need(Property property) {
     if (const auto value = read(property)) {
@@ -155,7 +157,9 @@ class Resolver {
           **modulus *= *factor;
         }
       }
-      out_.notes.emplace_back("short-fibre moulding: strength and stiffness of the test bar times its orientation factor");
+      out_.notes.emplace_back(
+          "short-fibre moulding: strength and stiffness of the test bar times its orientation "
+          "factor");
     }
   }
 
@@ -167,7 +171,8 @@ class Resolver {
   }
 
   void timber() {
-    // The table's k_mod hold for service classes 1 and 2 in solid and glued timber, for 1 in boards.
+    // The table's k_mod hold for service classes 1 and 2 in solid and glued timber, for 1 in
+    // boards.
     if (service_class_ == ServiceClass::two && has(info_.group, "panel")) {
       out_.missing.insert(k_mod(load_case_.duration));
       return;
@@ -185,8 +190,8 @@ class Resolver {
       out_.notes.emplace_back("5 % modulus taken as two thirds of the mean");
     }
     if (load_case_.duration > hour && m.E) {
-      const auto k_def = need(service_class_ == ServiceClass::one ? Property::k_def_1
-                                                                 : Property::k_def_2);
+      const auto k_def =
+          need(service_class_ == ServiceClass::one ? Property::k_def_1 : Property::k_def_2);
       if (k_def) {
         *m.E *= at_time(load_case_.duration, std::nullopt, 1.0 / (1.0 + *k_def));
       }
@@ -224,8 +229,8 @@ class Resolver {
   void column_law() {
     auto& m = out_.member;
     if (info_.material_class == "aluminium") {
-      m.column_law = is_class_a(info_.condition) ? ColumnLaw::aluminium_class_a
-                                                 : ColumnLaw::aluminium_class_b;
+      m.column_law =
+          is_class_a(info_.condition) ? ColumnLaw::aluminium_class_a : ColumnLaw::aluminium_class_b;
     } else if (info_.material_class == "wood") {
       const bool glued = has(info_.group, "glued") || has(info_.name, "LVL");
       m.column_law = glued ? ColumnLaw::timber_glued : ColumnLaw::timber_solid;
@@ -244,8 +249,8 @@ class Resolver {
 }  // namespace
 
 bool is_metal(std::string_view material_class) {
-  static constexpr std::array<std::string_view, 5> others = {"polymer", "composite", "wood",
-                                                             "ceramic", "glass"};
+  static constexpr std::array<std::string_view, 5> others = {
+      "polymer", "composite", "wood", "ceramic", "glass"};
   return std::find(others.begin(), others.end(), material_class) == others.end();
 }
 
@@ -263,29 +268,39 @@ bool is_cast(const MaterialInfo& material) {
 
 Property property_of(Symbol symbol) {
   switch (symbol) {
-    case Symbol::rho: return Property::density;
-    case Symbol::E: return Property::youngs_modulus;
-    case Symbol::E_05: return Property::youngs_modulus_05;
-    case Symbol::G: return Property::shear_modulus;
-    case Symbol::sigma_y: return Property::yield_strength;
-    case Symbol::tensile: return Property::tensile_strength;
-    case Symbol::compressive: return Property::compressive_strength;
-    case Symbol::flexural: return Property::flexural_strength;
-    case Symbol::shear: return Property::shear_strength;
+    case Symbol::rho:
+      return Property::density;
+    case Symbol::E:
+      return Property::youngs_modulus;
+    case Symbol::E_05:
+      return Property::youngs_modulus_05;
+    case Symbol::G:
+      return Property::shear_modulus;
+    case Symbol::sigma_y:
+      return Property::yield_strength;
+    case Symbol::tensile:
+      return Property::tensile_strength;
+    case Symbol::compressive:
+      return Property::compressive_strength;
+    case Symbol::flexural:
+      return Property::flexural_strength;
+    case Symbol::shear:
+      return Property::shear_strength;
   }
   throw InternalError("property_of: unknown symbol");
 }
 
 std::optional<double> highest_temperature(const PropertyReader& reader,
-                                          const MaterialInfo& material, std::size_t row) {
+                                          const MaterialInfo& material,
+                                          std::size_t row) {
   if (const auto loaded = reader.value(Property::loaded_temperature_max, row)) {
     return loaded;
   }
   if (!is_metal(material.material_class)) {
     return std::nullopt;  // the service maximum of a polymer is an ageing limit
   }
-  // Room-temperature strength of metals: full up to 100 C in EN 1993-1-2, table 3.1, and EN 1999-1-2 (from
-  // memory); above, the strength at temperature would be needed.
+  // Room-temperature strength of metals: full up to 100 C in EN 1993-1-2, table 3.1, and EN
+  // 1999-1-2 (from memory); above, the strength at temperature would be needed.
   constexpr double room_strength_up_to = 373.15;
   const auto service = reader.value(Property::service_temperature_max, row);
   return service ? std::min(*service, room_strength_up_to) : room_strength_up_to;
@@ -293,15 +308,24 @@ std::optional<double> highest_temperature(const PropertyReader& reader,
 
 const std::optional<double>& value_of(const MemberMaterial& material, Symbol symbol) {
   switch (symbol) {
-    case Symbol::rho: return material.rho;
-    case Symbol::E: return material.E;
-    case Symbol::E_05: return material.E_05;
-    case Symbol::G: return material.G;
-    case Symbol::sigma_y: return material.sigma_y;
-    case Symbol::tensile: return material.tensile;
-    case Symbol::compressive: return material.compressive;
-    case Symbol::flexural: return material.flexural;
-    case Symbol::shear: return material.shear;
+    case Symbol::rho:
+      return material.rho;
+    case Symbol::E:
+      return material.E;
+    case Symbol::E_05:
+      return material.E_05;
+    case Symbol::G:
+      return material.G;
+    case Symbol::sigma_y:
+      return material.sigma_y;
+    case Symbol::tensile:
+      return material.tensile;
+    case Symbol::compressive:
+      return material.compressive;
+    case Symbol::flexural:
+      return material.flexural;
+    case Symbol::shear:
+      return material.shear;
   }
   throw InternalError("value_of: unknown symbol");
 }
@@ -349,8 +373,11 @@ std::optional<double> PropertyReader::class_median(Property property,
   return entry->second;
 }
 
-ResolvedMaterial resolve(const PropertyReader& reader, std::size_t material, std::size_t row,
-                         const LoadCase& load_case, ServiceClass service_class,
+ResolvedMaterial resolve(const PropertyReader& reader,
+                         std::size_t material,
+                         std::size_t row,
+                         const LoadCase& load_case,
+                         ServiceClass service_class,
                          const std::set<Symbol>& filled) {
   return Resolver(reader, material, row, load_case, service_class, filled).run();
 }

@@ -49,8 +49,9 @@ class PropertyReader {
   mutable std::map<std::pair<std::string, Property>, std::optional<double>> medians_;
 };
 
-/// Highest temperature [K] at which the tabulated strength may be used: the loaded maximum of the row; for a metal
-/// without one 100 C, or its service maximum where that is lower. Nothing: not known.
+/// Highest temperature [K] at which the tabulated strength may be used: the loaded maximum of the
+/// row; for a metal without one 100 C, or its service maximum where that is lower. Nothing: not
+/// known.
 [[nodiscard]] std::optional<double> highest_temperature(const PropertyReader& reader,
                                                         const MaterialInfo& material,
                                                         std::size_t row);
@@ -74,7 +75,8 @@ struct ResolvedMaterial {
 /// - otherwise brittle: largest principal stress.
 /// Typical strengths are divided by 1.25 and marked. Graded timber: k_mod / gamma_M of its row.
 /// Lasting loads: creep and long-term factors of the row, otherwise undecided beyond an hour.
-/// @param filled  Symbols whose gaps the class median fills (under Missing::class_median), before any factor
+/// @param filled  Symbols whose gaps the class median fills (under Missing::class_median), before
+/// any factor
 ///   is applied, so that a filled value is treated as the row's own would be.
 [[nodiscard]] BISMAR_API ResolvedMaterial resolve(const PropertyReader& reader,
                                                   std::size_t material,

@@ -142,7 +142,8 @@ class Enumeration {
     }
   }
 
-  [[nodiscard]] bool has_stock(const MaterialInfo& info, const Route& route,
+  [[nodiscard]] bool has_stock(const MaterialInfo& info,
+                               const Route& route,
                                std::uint32_t list) const {
     const auto& items = catalogue_.stock[list].items;
     return std::any_of(items.begin(), items.end(), [&](const StockItem& item) {
@@ -172,7 +173,8 @@ CandidateNames names(const Candidate& candidate, const Part& part, const Catalog
   out.route = catalogue.routes[candidate.route].id;
   out.treatment =
       candidate.treatment == Candidate::none ? "" : catalogue.routes[candidate.treatment].id;
-  out.finish = candidate.finish == Candidate::none ? "none" : catalogue.finishes[candidate.finish].id;
+  out.finish =
+      candidate.finish == Candidate::none ? "none" : catalogue.finishes[candidate.finish].id;
   return out;
 }
 
@@ -210,7 +212,8 @@ std::vector<std::uint32_t> route_choices(const Part& part, const Catalogue& cata
   for (std::size_t i = 0; i < catalogue.routes.size(); ++i) {
     const auto& route = catalogue.routes[i];
     const bool asked = limits.routes.empty() || contains_word(limits.routes, route.id);
-    // A route that runs after another one (bending after cutting) leaves no prismatic shape of its own.
+    // A route that runs after another one (bending after cutting) leaves no prismatic shape of its
+    // own.
     if (route.kind == RouteKind::primary && asked &&
         !contains_word(limits.forbidden_routes, route.id)) {
       out.push_back(static_cast<std::uint32_t>(i));
@@ -226,7 +229,7 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
   out.group = group;
   if (!compiled.undecided.empty() || !compiled.undecided_limits.empty()) {
     out.kind = problem.settings().missing == Missing::exclude ? Outcome::Kind::excluded
-                                                             : Outcome::Kind::undecided;
+                                                              : Outcome::Kind::undecided;
     out.reason = missing_text(compiled);
     return out;
   }
@@ -243,7 +246,8 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
   if (solution.points.empty()) {
     out.failed = failed_constraints(solution);
     for (const auto constraint : out.failed) {
-      out.reason += (out.reason.empty() ? "" : " against ") + compiled.constraints[constraint].label;
+      out.reason +=
+          (out.reason.empty() ? "" : " against ") + compiled.constraints[constraint].label;
     }
     out.least_utilisation = solution.least_utilisation;
     return out;
@@ -252,7 +256,8 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
   std::vector<double> utilisations(compiled.constraints.size());
   for (const auto& point : solution.points) {
     double x = point.x[0];
-    // The root lies on the feasible side of the scaled section; the plain path may differ by a rounding.
+    // The root lies on the feasible side of the scaled section; the plain path may differ by a
+    // rounding.
     double step = 4.0 * std::numeric_limits<double>::epsilon();
     for (int tries = 0; tries < 16; ++tries, step *= 2.0) {
       problem.evaluate_plain(group, x, objectives, utilisations);
@@ -272,8 +277,11 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
   return out;
 }
 
-Solved solve_candidates(const Part& part, const Catalogue& catalogue, const Settings& settings,
-                        const RunOptions& run, std::uint32_t material) {
+Solved solve_candidates(const Part& part,
+                        const Catalogue& catalogue,
+                        const Settings& settings,
+                        const RunOptions& run,
+                        std::uint32_t material) {
   Solved solved;
   solved.problem = std::make_unique<SizingProblem>(part, catalogue, settings);
   Enumeration enumeration(part, catalogue, solved);

@@ -25,10 +25,10 @@ struct Outcome {
   Candidate candidate;
   std::size_t group = 0;  ///< In the problem.
   Kind kind = Kind::infeasible;
-  std::string reason;  ///< Missing properties, or the limit that excludes it.
+  std::string reason;               ///< Missing properties, or the limit that excludes it.
   std::vector<std::size_t> failed;  ///< Infeasible: the constraints of that reason.
-  double least_utilisation = 0.0;  ///< Infeasible: the least value the excluding limit can have.
-  std::vector<Point> points;       ///< Feasible: its non-dominated points.
+  double least_utilisation = 0.0;   ///< Infeasible: the least value the excluding limit can have.
+  std::vector<Point> points;        ///< Feasible: its non-dominated points.
 };
 
 /// Every candidate of a part, solved.

@@ -75,7 +75,9 @@ std::string what(const Design& design) {
 
 class Asked {
  public:
-  Asked(std::uint32_t material, const Part& part, const Catalogue& catalogue,
+  Asked(std::uint32_t material,
+        const Part& part,
+        const Catalogue& catalogue,
         const Settings& settings)
       : part_(part),
         catalogue_(catalogue),
@@ -86,7 +88,8 @@ class Asked {
 
   Answer run() {
     const auto count = [&](Outcome::Kind kind) {
-      return std::count_if(solved_.outcomes.begin(), solved_.outcomes.end(),
+      return std::count_if(solved_.outcomes.begin(),
+                           solved_.outcomes.end(),
                            [kind](const Outcome& outcome) { return outcome.kind == kind; });
     };
     if (count(Outcome::Kind::feasible) > 0) {
@@ -109,7 +112,8 @@ class Asked {
     for (std::size_t i = 0; i < result_.designs.size(); ++i) {
       if (result_.designs[i].material == id) {
         answer_.design = result_.designs[i];
-        answer_.standing = i < result_.front_count ? Answer::Standing::front : Answer::Standing::near;
+        answer_.standing =
+            i < result_.front_count ? Answer::Standing::front : Answer::Standing::near;
         break;
       }
     }
@@ -144,8 +148,8 @@ class Asked {
     }
     for (const auto& one : ruler.unsupported) {
       if (!chosen && result_.designs[one.design].material == design.material) {
-        say("No worth of a kilogram makes it the choice; at " + format_significant(one.at, 3) + " " +
-            result_.currency + "/kg it is only " + money_text(one.regret, result_.currency) +
+        say("No worth of a kilogram makes it the choice; at " + format_significant(one.at, 3) +
+            " " + result_.currency + "/kg it is only " + money_text(one.regret, result_.currency) +
             " behind.");
       }
     }
@@ -160,8 +164,7 @@ class Asked {
       for (const auto& one : outcome.points) {
         const auto* other = beaten_by(result_, one.mass, one.cost);
         const double margin =
-            other == nullptr ? 0.0
-                             : std::max(one.mass / other->mass, one.cost / other->cost);
+            other == nullptr ? 0.0 : std::max(one.mass / other->mass, one.cost / other->cost);
         if (best == nullptr || margin < least) {
           best = &outcome;
           point = one;
@@ -172,7 +175,8 @@ class Asked {
     answer_.standing = Answer::Standing::dominated;
     answer_.design = make_design(*solved_.problem, best->group, point.size);
     answer_.headline = "Feasible, but beaten: " + what(*answer_.design) + ", " +
-                       mass_text(point.mass) + ", " + money_text(point.cost, result_.currency) + ".";
+                       mass_text(point.mass) + ", " + money_text(point.cost, result_.currency) +
+                       ".";
     say_beaten(*answer_.design);
   }
 
@@ -185,9 +189,10 @@ class Asked {
 
   void details() {
     const auto& design = *answer_.design;
-    const auto found = std::find_if(
-        solved_.outcomes.begin(), solved_.outcomes.end(),
-        [&](const Outcome& outcome) { return outcome.candidate == design.candidate; });
+    const auto found =
+        std::find_if(solved_.outcomes.begin(), solved_.outcomes.end(), [&](const Outcome& outcome) {
+          return outcome.candidate == design.candidate;
+        });
     answer_.checks = limit_lines(*solved_.problem, found->group, design);
     answer_.sources = provenance_lines(*solved_.problem, found->group, design);
   }
@@ -219,7 +224,8 @@ class Asked {
     answer_.standing = Answer::Standing::undecided;
     const auto& first = solved_.outcomes.front();
     answer_.headline = "Undecided: the table has no value for " + first.reason + ".";
-    say("Add the value to the table, or let the job fill gaps with the class median and flag every use.");
+    say("Add the value to the table, or let the job fill gaps with the class median and flag every "
+        "use.");
   }
 
   void cannot_exist() {
@@ -242,20 +248,22 @@ class Asked {
     candidate.material = material_;
     candidate.route = route;
     candidate.finish = finish_choices(part_, catalogue_).front();
-    const auto treatments = needed_treatments(catalogue_.materials.info(material_),
-                                              catalogue_.routes[route], catalogue_);
+    const auto treatments = needed_treatments(
+        catalogue_.materials.info(material_), catalogue_.routes[route], catalogue_);
     candidate.treatment = treatments.empty() ? Candidate::none : treatments.front();
     std::string text;
     for (std::uint32_t s = 0; s < part_.body.shapes.size(); ++s) {
       candidate.shape = s;
-      if (const auto broken = first_broken_rule(candidate, part_, catalogue_); broken && text.empty()) {
+      if (const auto broken = first_broken_rule(candidate, part_, catalogue_);
+          broken && text.empty()) {
         text = broken->text;
       }
     }
     candidate.shape = Candidate::none;
     for (const auto list : stock_lists(part_, catalogue_)) {
       candidate.stock = list;
-      if (const auto broken = first_broken_rule(candidate, part_, catalogue_); broken && text.empty()) {
+      if (const auto broken = first_broken_rule(candidate, part_, catalogue_);
+          broken && text.empty()) {
         text = broken->text;
       }
     }
@@ -273,7 +281,9 @@ class Asked {
 
 }  // namespace
 
-Answer why(const std::string& material, const Part& part, const Catalogue& catalogue,
+Answer why(const std::string& material,
+           const Part& part,
+           const Catalogue& catalogue,
            const Settings& settings) {
   const FloatingPointGuard guard;
   validate(part, catalogue, settings);

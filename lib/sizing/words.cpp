@@ -14,8 +14,8 @@ bool contains_word(std::span<const std::string> words, std::string_view word) {
 }
 
 bool shares_word(std::span<const std::string> a, std::span<const std::string> b) {
-  return std::any_of(a.begin(), a.end(),
-                     [&](const std::string& word) { return contains_word(b, word); });
+  return std::any_of(
+      a.begin(), a.end(), [&](const std::string& word) { return contains_word(b, word); });
 }
 
 bool starts_word(std::string_view text, std::string_view start) {

@@ -27,8 +27,8 @@ struct Stretch {
   double upper;
 };
 
-/// The pieces of a box in one variable. A piece is (previous breakpoint, this one], so the next starts
-/// at the next double.
+/// The pieces of a box in one variable. A piece is (previous breakpoint, this one], so the next
+/// starts at the next double.
 std::vector<Stretch> stretches(const Variable& variable, double lower, double upper) {
   std::vector<Stretch> out;
   if (variable.kind == Variable::Kind::ordered_set) {
@@ -118,8 +118,8 @@ void BoxProblem::bound(std::size_t group, const BoxBatch& boxes, BoundBatch boun
     }
     std::vector<std::size_t> index(all.size(), 0);
     std::vector<Stretch> piece(all.size());
-    bool more = std::none_of(per_variable.begin(), per_variable.end(),
-                             [](const auto& list) { return list.empty(); });
+    bool more = std::none_of(
+        per_variable.begin(), per_variable.end(), [](const auto& list) { return list.empty(); });
     while (more) {
       for (std::size_t v = 0; v < all.size(); ++v) {
         piece[v] = per_variable[v][index[v]];
@@ -129,13 +129,16 @@ void BoxProblem::bound(std::size_t group, const BoxBatch& boxes, BoundBatch boun
         double& lower = bounds.objective_lower[i * count + b];
         const bool known = least_corner(
             all.size(), [&](std::size_t v) { return objective_trend(group, i, v); }, corner);
-        lower = std::min(lower, known ? outward(corners.at(corner).objectives[i], -1.0) : -infinity);
+        lower =
+            std::min(lower, known ? outward(corners.at(corner).objectives[i], -1.0) : -infinity);
       }
       for (std::size_t i = 0; i < constraints(group); ++i) {
         double& lower = bounds.utilisation_lower[i * count + b];
         double& upper = bounds.utilisation_upper[i * count + b];
         if (!least_corner(
-                all.size(), [&](std::size_t v) { return utilisation_trend(group, i, v); }, corner)) {
+                all.size(),
+                [&](std::size_t v) { return utilisation_trend(group, i, v); },
+                corner)) {
           lower = -infinity;
           upper = infinity;
           continue;

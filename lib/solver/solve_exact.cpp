@@ -50,7 +50,8 @@ class OneVariable {
   }
 
   [[nodiscard]] bool feasible() const {
-    return std::all_of(utilisations_.begin(), utilisations_.end(), [](double u) { return u <= 1.0; });
+    return std::all_of(
+        utilisations_.begin(), utilisations_.end(), [](double u) { return u <= 1.0; });
   }
 
   /// Largest falling utilisation at the point last evaluated; 0 when there is none.
@@ -77,9 +78,10 @@ class OneVariable {
     }
   }
 
-  /// On a piece objectives rise, so its least feasible size is its only non-dominated point: the falling
-  /// utilisations bound the size from below and the rising ones from above, and the least size that the
-  /// falling ones allow is feasible, or nothing in the piece is. Between pieces anything may jump, so each is solved.
+  /// On a piece objectives rise, so its least feasible size is its only non-dominated point: the
+  /// falling utilisations bound the size from below and the rising ones from above, and the least
+  /// size that the falling ones allow is feasible, or nothing in the piece is. Between pieces
+  /// anything may jump, so each is solved.
   void run_pieces() {
     double from = variable_.lower;
     for (std::size_t p = 0; p <= variable_.breakpoints.size(); ++p) {
@@ -92,7 +94,8 @@ class OneVariable {
     }
   }
 
-  /// Whether a point found before is no worse in every objective than the whole piece that begins here.
+  /// Whether a point found before is no worse in every objective than the whole piece that begins
+  /// here.
   bool cannot_improve(double from) {
     if (solution_.points.empty()) {
       return false;
@@ -119,7 +122,8 @@ class OneVariable {
           evaluate(x);
           return largest_falling();
         },
-        from, to);
+        from,
+        to);
     evaluate(*bracket.x);
     if (feasible()) {
       add(*bracket.x);
@@ -177,7 +181,8 @@ class OneVariable {
     std::sort(points.begin(), points.end(), [](const Point& a, const Point& b) {
       return a.objectives != b.objectives ? a.objectives < b.objectives : a.x < b.x;
     });
-    // After sorting a point can be dominated only by an earlier one; sets have a few hundred values.
+    // After sorting a point can be dominated only by an earlier one; sets have a few hundred
+    // values.
     std::vector<Point> kept;
     for (auto& point : points) {
       const bool dominated = std::any_of(kept.begin(), kept.end(), [&](const Point& other) {

@@ -12,7 +12,7 @@ int main() {
   lever.limits = {.deflection = 12e-3, .mass = 0.5, .cost = 6.0, .routes = {"hot-forging"}};
   const auto result = bismar::front(lever, catalogue);
   for (const auto& stretch : bismar::exchange_ruler(result, lever, catalogue).stretches) {
-    std::cout << "from " << bismar::format_significant(stretch.from) << " EUR/kg: "
-              << result.designs[stretch.design].material_name << '\n';
+    std::cout << "from " << bismar::format_significant(stretch.from)
+              << " EUR/kg: " << result.designs[stretch.design].material_name << '\n';
   }
 }

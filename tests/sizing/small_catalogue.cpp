@@ -12,8 +12,12 @@ constexpr double MPa = 1e6;
 constexpr double GPa = 1e9;
 constexpr double hour = 3600.0;
 
-MaterialTableBuilder::Row row(std::string id, std::string material_class, double density, double E,
-                              double yield, double price) {
+MaterialTableBuilder::Row row(std::string id,
+                              std::string material_class,
+                              double density,
+                              double E,
+                              double yield,
+                              double price) {
   MaterialTableBuilder::Row out;
   out.info.id = std::move(id);
   out.info.name = out.info.id;
@@ -51,7 +55,7 @@ Route route(std::string id, std::vector<std::string> takes, std::string word, st
 
 std::vector<Route> routes() {
   Route forging = route("forging", {"bar"}, "hot forging", "solid");
-  forging.tooling_cost = {2000.0, 8000.0};  // geometric mean 4000
+  forging.tooling_cost = {2000.0, 8000.0};     // geometric mean 4000
   forging.rate = {50.0 / hour, 200.0 / hour};  // geometric mean 100 an hour
   forging.reference_mass = 1.0;
   forging.tooling_mass_exponent = 0.5;
@@ -223,20 +227,24 @@ Part random_part(std::mt19937& random) {
   Part part = small_lever();
   part.quantity = any_of<double>({1.0, 30.0, 1000.0, 50000.0}, random);
   part.body.length = any_of<double>({0.1, 0.3, 0.8}, random);
-  part.body.shapes = {round({.height_max = 0.08}),
-                      ellipse({.height_to_width = 1.25, .height_max = 0.08}),
-                      rectangle({.height_to_width = any_of<double>({0.5, 1.0, 2.0}, random),
-                                 .height_max = 0.1})};
+  part.body.shapes = {
+      round({.height_max = 0.08}),
+      ellipse({.height_to_width = 1.25, .height_max = 0.08}),
+      rectangle({.height_to_width = any_of<double>({0.5, 1.0, 2.0}, random), .height_max = 0.1})};
   part.body.stock = {"bars"};
   const double load = any_of<double>({50.0, 500.0, 2000.0}, random);
   switch (any_of<int>({0, 1, 2}, random)) {
-    case 0: part.body.load_cases = {cantilever({force(load, part.body.length)})}; break;
-    case 1: part.body.load_cases = {pinned_pinned({axial(-20.0 * load)})}; break;
+    case 0:
+      part.body.load_cases = {cantilever({force(load, part.body.length)})};
+      break;
+    case 1:
+      part.body.load_cases = {pinned_pinned({axial(-20.0 * load)})};
+      break;
     default:
-      part.body.load_cases = {cantilever({force(load, part.body.length), torque(0.1 * load, part.body.length)}),
-                              pinned_pinned({distributed(load, load, 0.0, part.body.length),
-                                             axial(5.0 * load)},
-                                            "second")};
+      part.body.load_cases = {
+          cantilever({force(load, part.body.length), torque(0.1 * load, part.body.length)}),
+          pinned_pinned({distributed(load, load, 0.0, part.body.length), axial(5.0 * load)},
+                        "second")};
   }
   if (any_of<int>({0, 1}, random) == 1) {
     part.limits.deflection = part.body.length / any_of<double>({30.0, 200.0}, random);

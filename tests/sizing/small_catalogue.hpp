@@ -14,8 +14,8 @@ namespace bismar::test {
 /// A cantilever of 0.3 m with 655 N at its end.
 [[nodiscard]] Part small_lever();
 
-/// Random materials (values drawn from short lists, so that ties are common), the routes of the small
-/// catalogue, random stock.
+/// Random materials (values drawn from short lists, so that ties are common), the routes of the
+/// small catalogue, random stock.
 [[nodiscard]] Catalogue random_catalogue(std::mt19937& random, std::size_t materials);
 
 /// Random part with solids, tubes and stock.

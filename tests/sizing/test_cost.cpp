@@ -10,8 +10,9 @@
 using namespace bismar;
 
 TEST_CASE("the resource cost model gives the four-term values over four decades of quantity") {
-  // Checks COST-001, 002, 004, 005. Formula: Esawi and Ashby, Materials and Design 24 (2003) 605-616,
-  // from memory; inputs constructed, recomputed independently; no published worked number was found.
+  // Checks COST-001, 002, 004, 005. Formula: Esawi and Ashby, Materials and Design 24 (2003)
+  // 605-616, from memory; inputs constructed, recomputed independently; no published worked number
+  // was found.
   ResourceCost cost{.mass = 0.5,
                     .material_price = 3.0,
                     .scrap = 0.1,
@@ -74,8 +75,8 @@ TEST_CASE("pieces out of a bar agree with the published count") {
 }
 
 TEST_CASE("a batch with a set-up cost agrees with the lecture example") {
-  // Check COST-010: production planning lecture notes; seen in print, recomputed: set-up 200, 15 minutes at
-  // 10 an hour, 20 of material, 200 parts: 23.5 a part.
+  // Check COST-010: production planning lecture notes; seen in print, recomputed: set-up 200, 15
+  // minutes at 10 an hour, 20 of material, 200 parts: 23.5 a part.
   Route route;
   route.setup_cost = 200.0;
   route.rate = {4.0 / 3600.0, 4.0 / 3600.0};
@@ -87,8 +88,10 @@ TEST_CASE("a batch with a set-up cost agrees with the lecture example") {
 TEST_CASE("process cost rises with the mass and stays inside the range of the row") {
   for (const auto& route : test::starter().routes) {
     double before = 0.0;
-    const auto cheap = process_cost(route, 1.0, 0.5, 1000.0, 100.0, RangeEnd::geometric_mid, CostEnd::cheap);
-    const auto dear = process_cost(route, 1.0, 0.5, 1000.0, 100.0, RangeEnd::geometric_mid, CostEnd::dear);
+    const auto cheap =
+        process_cost(route, 1.0, 0.5, 1000.0, 100.0, RangeEnd::geometric_mid, CostEnd::cheap);
+    const auto dear =
+        process_cost(route, 1.0, 0.5, 1000.0, 100.0, RangeEnd::geometric_mid, CostEnd::dear);
     INFO(route.id);
     CHECK(cheap.total() <= dear.total());
     for (double mass = 0.001; mass < 1000.0; mass *= 1.3) {
@@ -114,9 +117,10 @@ TEST_CASE("a treatment costs at least the minimum charge of its batch") {
   CHECK(process_cost(route, 1.0, 1.0, 1000.0, 1000.0, RangeEnd::mid).total() == Approx(0.5));
 }
 
-TEST_CASE("steel sheet and shaped parts of half a kilogram keep the order of costs known in the trade") {
-  // Common practice, no source: one by one a part is machined; forging pays from hundreds to thousands; the
-  // most expensive tools only in long runs.
+TEST_CASE(
+    "steel sheet and shaped parts of half a kilogram keep the order of costs known in the trade") {
+  // Common practice, no source: one by one a part is machined; forging pays from hundreds to
+  // thousands; the most expensive tools only in long runs.
   const auto& catalogue = test::starter();
   const auto cost = [&](const char* id, double quantity) {
     const auto& route = *catalogue.find_route(id);

@@ -21,15 +21,16 @@ const Route& route(const char* id) { return *test::starter().find_route(id); }
 
 bool any_item_made_of(const char* list, const MaterialInfo& info) {
   const auto& items = test::starter().find_stock(list)->items;
-  return std::any_of(items.begin(), items.end(),
-                     [&](const StockItem& item) { return made_of(item, info); });
+  return std::any_of(
+      items.begin(), items.end(), [&](const StockItem& item) { return made_of(item, info); });
 }
 
 }  // namespace
 
 TEST_CASE("every pair of route and shape is possible or not as a shop would say") {
-  // Common practice, no source. Letters: r round, s square, R rectangle, e ellipse, t round tube, T rectangular
-  // tube; "stock" keeps a bought section; "-" makes no prismatic member of these shapes.
+  // Common practice, no source. Letters: r round, s square, R rectangle, e ellipse, t round tube, T
+  // rectangular tube; "stock" keeps a bought section; "-" makes no prismatic member of these
+  // shapes.
   const std::map<std::string, std::string> expected = {
       {"hot-forging", "rsRe"},
       {"open-die-forging", "rsRe"},
@@ -73,10 +74,14 @@ TEST_CASE("every pair of route and shape is possible or not as a shop would say"
       {"painting", "-"},
   };
   const std::vector<std::pair<SectionFamily, char>> shapes = {
-      {SectionFamily::solid_round, 'r'},    {SectionFamily::solid_square, 's'},
-      {SectionFamily::solid_rectangle, 'R'}, {SectionFamily::solid_ellipse, 'e'},
-      {SectionFamily::round_tube, 't'},     {SectionFamily::rectangular_tube, 'T'},
-      {SectionFamily::i_section, 'i'},      {SectionFamily::channel, 'c'}};
+      {SectionFamily::solid_round, 'r'},
+      {SectionFamily::solid_square, 's'},
+      {SectionFamily::solid_rectangle, 'R'},
+      {SectionFamily::solid_ellipse, 'e'},
+      {SectionFamily::round_tube, 't'},
+      {SectionFamily::rectangular_tube, 'T'},
+      {SectionFamily::i_section, 'i'},
+      {SectionFamily::channel, 'c'}};
   REQUIRE(test::starter().routes.size() == expected.size());
   for (const auto& one : test::starter().routes) {
     INFO(one.id);
@@ -127,7 +132,8 @@ TEST_CASE("a forged part gets the treatment that its condition needs, and none t
   const auto treatment = [](const char* id) {
     const auto needed = needed_treatments(material(id), route("hot-forging"), test::starter());
     REQUIRE(needed.size() == 1);
-    return needed[0] == Candidate::none ? std::string("none") : test::starter().routes[needed[0]].id;
+    return needed[0] == Candidate::none ? std::string("none")
+                                        : test::starter().routes[needed[0]].id;
   };
   CHECK(treatment("42crmo4-quenched-and-tempered") == "quench-temper");
   CHECK(treatment("c45-normalised") == "none");
@@ -135,11 +141,14 @@ TEST_CASE("a forged part gets the treatment that its condition needs, and none t
   CHECK(treatment("38mnvs6-controlled-cooled-from-hot-forming") == "none");
   CHECK(treatment("en-aw-7075-t6-bar") == "solution-ageing");
   // Machining keeps the condition of the bar.
-  CHECK(needed_treatments(material("42crmo4-quenched-and-tempered"), route("machining-from-bar"),
+  CHECK(needed_treatments(material("42crmo4-quenched-and-tempered"),
+                          route("machining-from-bar"),
                           test::starter()) == std::vector<std::uint32_t>{Candidate::none});
 }
 
-TEST_CASE("cold-drawn and strain-hardened strength does not survive hot forming and nothing restores it") {
+TEST_CASE(
+    "cold-drawn and strain-hardened strength does not survive hot forming and nothing restores "
+    "it") {
   for (const char* condition :
        {"cold drawn", "cold worked to C700", "H14", "H116/H321", "cold rolled, dual phase"}) {
     CHECK(strength_is_lost_when_hot(condition));
@@ -149,9 +158,13 @@ TEST_CASE("cold-drawn and strain-hardened strength does not survive hot forming 
     info.processes = {"hot forging", "quench and temper"};
     CHECK(needed_treatments(info, route("hot-forging"), test::starter()).empty());
   }
-  for (const char* condition :
-       {"normalised", "annealed", "solution annealed bar", "as rolled",
-        "controlled cooled from hot forming", "soft annealed", "hot rolled"}) {
+  for (const char* condition : {"normalised",
+                                "annealed",
+                                "solution annealed bar",
+                                "as rolled",
+                                "controlled cooled from hot forming",
+                                "soft annealed",
+                                "hot rolled"}) {
     CHECK_FALSE(strength_is_lost_when_hot(condition));
   }
 }
@@ -172,16 +185,18 @@ TEST_CASE("a cast grade enters only through its own casting route") {
     }
   }
   CHECK(pairs >= 80);
-  const auto broken =
-      route_rules(material("en-ac-46000-alsi9cu3-fe-pressure-die-cast-f"), route("machining-from-bar"));
+  const auto broken = route_rules(material("en-ac-46000-alsi9cu3-fe-pressure-die-cast-f"),
+                                  route("machining-from-bar"));
   REQUIRE(broken.has_value());
   CHECK(broken->rule == Rule::casting_route);
 }
 
 TEST_CASE("stock keeps to its material family") {
   CHECK(any_item_made_of("chs", material("s355j2h-hot-finished-hollow-section")));
-  CHECK_FALSE(any_item_made_of("aluminium-round-tube", material("s355j2h-hot-finished-hollow-section")));
-  CHECK_FALSE(any_item_made_of("aluminium-rectangular-tube", material("s355j2h-hot-finished-hollow-section")));
+  CHECK_FALSE(
+      any_item_made_of("aluminium-round-tube", material("s355j2h-hot-finished-hollow-section")));
+  CHECK_FALSE(any_item_made_of("aluminium-rectangular-tube",
+                               material("s355j2h-hot-finished-hollow-section")));
   CHECK_FALSE(any_item_made_of("chs", material("en-aw-6082-t6-profile")));
   CHECK_FALSE(any_item_made_of("round-bar", material("c24-12-pct-moisture-graded")));
   CHECK(any_item_made_of("timber", material("c24-12-pct-moisture-graded")));
@@ -207,7 +222,8 @@ TEST_CASE("the filters of the job come first and say what was asked") {
   CHECK(material_rules(material("s235jr-as-rolled"), limits)->rule == Rule::not_asked_for);
   limits = {};
   limits.processes = {"welding (good)"};
-  CHECK(material_rules(material("42crmo4-quenched-and-tempered"), limits)->rule == Rule::not_asked_for);
+  CHECK(material_rules(material("42crmo4-quenched-and-tempered"), limits)->rule ==
+        Rule::not_asked_for);
   CHECK_FALSE(material_rules(material("s235jr-as-rolled"), limits).has_value());
   limits = {};
   limits.forms = {"plate"};
@@ -238,8 +254,10 @@ TEST_CASE("a finish goes only on the classes and processes it is for") {
   CHECK(finish_rules(material("42crmo4-quenched-and-tempered"), zinc).has_value());
 }
 
-TEST_CASE("the list of conditions that lose their strength covers every row that can be hot formed") {
-  // Each condition among the rows that allow hot forging or forming is one of these two, written out here.
+TEST_CASE(
+    "the list of conditions that lose their strength covers every row that can be hot formed") {
+  // Each condition among the rows that allow hot forging or forming is one of these two, written
+  // out here.
   const std::set<std::string> kept = {"normalised",
                                       "annealed",
                                       "solution annealed bar",
@@ -248,9 +266,10 @@ TEST_CASE("the list of conditions that lose their strength covers every row that
                                       "duplex annealed"};
   for (std::size_t m = 0; m < test::starter().materials.size(); ++m) {
     const auto& info = test::starter().materials.info(m);
-    const bool hot = std::any_of(info.processes.begin(), info.processes.end(), [](const auto& word) {
-      return word == "hot forging" || word == "hot forming";
-    });
+    const bool hot =
+        std::any_of(info.processes.begin(), info.processes.end(), [](const auto& word) {
+          return word == "hot forging" || word == "hot forming";
+        });
     if (hot) {
       INFO(info.id << ": " << info.condition);
       CHECK(strength_is_lost_when_hot(info.condition) != kept.contains(info.condition));

@@ -27,7 +27,8 @@ Part starter_lever() {
 
 }  // namespace
 
-TEST_CASE("the front of a lever over the starter table is sound, ordered and complete in its counts") {
+TEST_CASE(
+    "the front of a lever over the starter table is sound, ordered and complete in its counts") {
   const auto part = starter_lever();
   const auto result = front(part, test::starter());
   CHECK(result.exact);
@@ -125,8 +126,8 @@ TEST_CASE("sizes on a list, a step and a series are exact on them") {
 }
 
 TEST_CASE("a thickness step with a higher strength beyond it is not missed") {
-  // Strength that rises with the thickness (sheet and extrusions in some tempers): no size of the weak step
-  // carries the load, the first one of the strong step does.
+  // Strength that rises with the thickness (sheet and extrusions in some tempers): no size of the
+  // weak step carries the load, the first one of the strong step does.
   Catalogue catalogue = test::small_catalogue();
   MaterialTableBuilder builder("test");
   MaterialTableBuilder::Row thin;
@@ -200,7 +201,8 @@ TEST_CASE("a missing property leaves a candidate undecided, excluded or filled a
   const auto filled = front(part, catalogue, settings);
   CHECK(filled.front_count == 2);
   const auto& notes = filled.designs[1].notes;
-  CHECK(std::find(notes.begin(), notes.end(), "class median used for shear modulus") != notes.end());
+  CHECK(std::find(notes.begin(), notes.end(), "class median used for shear modulus") !=
+        notes.end());
 }
 
 TEST_CASE("limits on properties exclude by the end of the range that is on the safe side") {

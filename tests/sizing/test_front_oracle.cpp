@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
-// Brute force beside the front: every candidate of every combination, every size of a list or a dense grid.
+// Brute force beside the front: every candidate of every combination, every size of a list or a
+// dense grid.
 #include "sizing/small_catalogue.hpp"
 #include "support/catch.hpp"
 
@@ -33,8 +34,8 @@ std::vector<Candidate> all_candidates(const Part& part, const Catalogue& catalog
             one.treatment = t < catalogue.routes.size() ? t : Candidate::none;
             const bool stock = s >= part.body.shapes.size();
             one.shape = stock ? Candidate::none : s;
-            one.stock = stock ? s - static_cast<std::uint32_t>(part.body.shapes.size())
-                              : Candidate::none;
+            one.stock =
+                stock ? s - static_cast<std::uint32_t>(part.body.shapes.size()) : Candidate::none;
             one.finish = f < catalogue.finishes.size() ? f : Candidate::none;
             if (catalogue.routes[r].kind == RouteKind::primary &&
                 !first_broken_rule(one, part, catalogue)) {
@@ -49,7 +50,8 @@ std::vector<Candidate> all_candidates(const Part& part, const Catalogue& catalog
 }
 
 bool feasible(const Design& design) {
-  return std::all_of(design.utilisations.begin(), design.utilisations.end(),
+  return std::all_of(design.utilisations.begin(),
+                     design.utilisations.end(),
                      [](const Utilisation& u) { return u.value <= 1.0; });
 }
 

@@ -34,8 +34,9 @@ double line_of(const Design& design, const char* item) {
 }  // namespace
 
 TEST_CASE("the preload of a bolt gives the force at the end of a lever as common practice has it") {
-  // Common practice, no source: a preload of 17,400 lbf on a nominal diameter of half an inch with K = 0.2
-  // needs about 1,740 lbf.in = 197 N m; at 0.3 m that is about 650 N, and 980 N with a factor of 1.5.
+  // Common practice, no source: a preload of 17,400 lbf on a nominal diameter of half an inch with
+  // K = 0.2 needs about 1,740 lbf.in = 197 N m; at 0.3 m that is about 650 N, and 980 N with a
+  // factor of 1.5.
   const double preload = 17400.0 * 4.4482216152605;
   const double torque = torque_from_preload(0.2, preload, 0.0127);
   CHECK(torque / (4.4482216152605 * 0.0254) == Approx(1740.0).epsilon(1e-9));
@@ -46,8 +47,8 @@ TEST_CASE("the preload of a bolt gives the force at the end of a lever as common
 }
 
 TEST_CASE("an elliptical handle holds the volume, and so allows the price, of common practice") {
-  // Common practice, no source: semi-axes of 20 and 16 mm over 0.3 m hold about 3.0e-4 m3; 5 currency units
-  // over that volume are about 16,600 per m3.
+  // Common practice, no source: semi-axes of 20 and 16 mm over 0.3 m hold about 3.0e-4 m3; 5
+  // currency units over that volume are about 16,600 per m3.
   const double volume = solid_ellipse(0.040, 0.032).area * 0.3;
   CHECK(volume == Approx(3.0e-4).epsilon(0.01));
   CHECK(5.0 / volume == Approx(16600.0).epsilon(0.005));
@@ -83,7 +84,8 @@ TEST_CASE("a forged round lever is sized and costed as by hand") {
   // Set-up: 200 over a batch of 1000.
   CHECK(line_of(lever, "set-up") == Approx(0.2).epsilon(1e-12));
   // Time: 100 an hour at 1 kg, exponent 0.5; 90 + 20 an hour.
-  CHECK(line_of(lever, "machine and labour") == Approx(110.0 / 100.0 * std::sqrt(mass)).epsilon(1e-9));
+  CHECK(line_of(lever, "machine and labour") ==
+        Approx(110.0 / 100.0 * std::sqrt(mass)).epsilon(1e-9));
   const double total = mass / 0.8 + 5.1 * std::sqrt(mass) + 0.2;
   CHECK(lever.cost == Approx(total).epsilon(1e-9));
   CHECK(lever.cost_breakdown.low < lever.cost);
@@ -96,7 +98,8 @@ TEST_CASE("a forged round lever is sized and costed as by hand") {
   CHECK(lever.buyable_mass == Approx(mass * (0.022 / d) * (0.022 / d)).epsilon(1e-9));
 }
 
-TEST_CASE("a forged lever of tempered steel carries its heat treatment and the rejects of the chain") {
+TEST_CASE(
+    "a forged lever of tempered steel carries its heat treatment and the rejects of the chain") {
   Part part = test::small_lever();
   part.limits.routes = {"forging"};
   part.limits.materials = {"steel-b"};
@@ -105,8 +108,8 @@ TEST_CASE("a forged lever of tempered steel carries its heat treatment and the r
   REQUIRE(result.front_count == 1);
   const auto& lever = result.designs[0];
   CHECK(lever.treatment == "temper");
-  // Deflection: I = F L3 / (3 E w) = 655 x 0.027 / (3 x 210e9 x 0.005) = 5.6143e-9 m4, d = (64 I / pi)^(1/4) =
-  // 18.39 mm; yield alone would need 16.25 mm.
+  // Deflection: I = F L3 / (3 E w) = 655 x 0.027 / (3 x 210e9 x 0.005) = 5.6143e-9 m4, d = (64 I /
+  // pi)^(1/4) = 18.39 mm; yield alone would need 16.25 mm.
   const double I = 655.0 * 0.027 / (3.0 * 210e9 * 0.005);
   const double d = std::pow(64.0 * I / pi, 0.25);
   CHECK(lever.size == Approx(d).epsilon(1e-9));
@@ -115,8 +118,8 @@ TEST_CASE("a forged lever of tempered steel carries its heat treatment and the r
   const double W = pi * d * d * d / 32.0;
   CHECK(u_of(lever, "yield") == Approx(1.5 * 196.5 / W / 700e6).epsilon(1e-9));
   const double mass = 0.25 * pi * d * d * 0.3 * 7850.0;
-  // Treatment: mass at 100 kg/h and 50 an hour = 0.5 a kilogram; the batch of 1000 parts is worth more than
-  // the charge of 100. Two parts in a hundred are lost with all that was spent on them.
+  // Treatment: mass at 100 kg/h and 50 an hour = 0.5 a kilogram; the batch of 1000 parts is worth
+  // more than the charge of 100. Two parts in a hundred are lost with all that was spent on them.
   const double before = 2.0 * mass / 0.8 + 5.1 * std::sqrt(mass) + 0.2 + 0.5 * mass;
   CHECK(line_of(lever, "treatment") == Approx(0.5 * mass).epsilon(1e-9));
   CHECK(line_of(lever, "rejects") == Approx(before * 0.02 / 0.98).epsilon(1e-9));
@@ -130,8 +133,8 @@ TEST_CASE("a machined lever buys the bar that holds it, saw cut and offcut inclu
   const auto result = front(part, test::small_catalogue());
   REQUIRE(result.front_count == 1);
   const auto& lever = result.designs[0];
-  // d = 21.549 mm with 2 mm of allowance fits into the 25 mm bar. Of 6 m: (6 + 0.003) / 0.303 = 19 pieces; of
-  // 3 m: 9 pieces, which waste more.
+  // d = 21.549 mm with 2 mm of allowance fits into the 25 mm bar. Of 6 m: (6 + 0.003) / 0.303 = 19
+  // pieces; of 3 m: 9 pieces, which waste more.
   const double bar_area = 0.25 * pi * 0.025 * 0.025;
   const double bought = bar_area * 7850.0 * 6.0 / 19.0;
   CHECK(lever.cost_breakdown.bought_mass == Approx(bought).epsilon(1e-12));
@@ -141,8 +144,9 @@ TEST_CASE("a machined lever buys the bar that holds it, saw cut and offcut inclu
 }
 
 TEST_CASE("sold scrap comes off the material as in the worked case of titanium") {
-  // Check MFC-019: buy-to-fly of 10; blank 20 kg at 30, chips 18 kg sold at 4: 528. Constructed prices,
-  // recomputed independently. Here: the same rule on the machined lever, credit 4/30 of the price.
+  // Check MFC-019: buy-to-fly of 10; blank 20 kg at 30, chips 18 kg sold at 4: 528. Constructed
+  // prices, recomputed independently. Here: the same rule on the machined lever, credit 4/30 of the
+  // price.
   CHECK(20.0 * 30.0 - 18.0 * 30.0 * (4.0 / 30.0) == Approx(528.0));
   Part part = test::small_lever();
   part.limits.routes = {"machining"};
@@ -156,7 +160,8 @@ TEST_CASE("sold scrap comes off the material as in the worked case of titanium")
 }
 
 TEST_CASE("a stem from stock is checked and costed as by hand") {
-  // Strut of 1.2 m, pinned at both ends, 12 kN of compression, factor 1.5; steel A, fy 300 MPa, E 210 GPa.
+  // Strut of 1.2 m, pinned at both ends, 12 kN of compression, factor 1.5; steel A, fy 300 MPa, E
+  // 210 GPa.
   Part part = test::small_lever();
   part.body.length = 1.2;
   part.body.shapes.clear();
@@ -168,9 +173,10 @@ TEST_CASE("a stem from stock is checked and costed as by hand") {
   const auto& stem = result.designs[0];
 
   // Bar of 25 mm: A = 490.87 mm2, i = d / 4 = 6.25 mm, slenderness 192 (below 200).
-  // N_cr = pi2 E I / L2 = pi2 x 210e9 x 1.9175e-8 / 1.44 = 27.60 kN; lambda-bar = sqrt(A fy / N_cr) = 2.310.
-  // Solid section, curve c (EN 1993-1-1, table 6.2), alpha 0.49: Phi = 3.685, chi = 0.1528;
-  // N_b = 0.1528 x 147.3 kN = 22.5 kN; 1.5 x 12 = 18 kN: u = 0.80. Bar of 20 mm: slenderness 240, refused.
+  // N_cr = pi2 E I / L2 = pi2 x 210e9 x 1.9175e-8 / 1.44 = 27.60 kN; lambda-bar = sqrt(A fy / N_cr)
+  // = 2.310. Solid section, curve c (EN 1993-1-1, table 6.2), alpha 0.49: Phi = 3.685, chi =
+  // 0.1528; N_b = 0.1528 x 147.3 kN = 22.5 kN; 1.5 x 12 = 18 kN: u = 0.80. Bar of 20 mm:
+  // slenderness 240, refused.
   CHECK(stem.stock_item == "bar-25");
   const double area = 0.25 * pi * 0.025 * 0.025;
   const double inertia = pi * std::pow(0.025, 4) / 64.0;
@@ -184,8 +190,8 @@ TEST_CASE("a stem from stock is checked and costed as by hand") {
   CHECK(u_of(stem, "slenderness") == Approx(1.2 / (0.025 / 4.0) / 200.0).epsilon(1e-9));
   CHECK(stem.utilisations[stem.governing].limit == "slenderness");
 
-  // 6 m give 4 of 1.2 m with saw cuts of 3 mm (6.003 / 1.203 = 4.99); 3 m give 2: the same waste, 3 m is the
-  // first. Saw: 60 an hour at 30.
+  // 6 m give 4 of 1.2 m with saw cuts of 3 mm (6.003 / 1.203 = 4.99); 3 m give 2: the same waste, 3
+  // m is the first. Saw: 60 an hour at 30.
   CHECK(stem.mass == Approx(area * 1.2 * 7850.0).epsilon(1e-12));
   CHECK(stem.cost_breakdown.bought_mass == Approx(area * 7850.0 * 1.5).epsilon(1e-12));
   CHECK(stem.cost == Approx(area * 7850.0 * 1.5 + 0.5).epsilon(1e-9));

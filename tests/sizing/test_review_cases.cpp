@@ -53,10 +53,10 @@ TEST_CASE("a plate at the very end of a thickness step has the strength of that 
       Candidate candidate;
       candidate.material = id;
       candidate.shape = 0;
-      candidate.route = static_cast<std::uint32_t>(&route("laser-cut-plate") -
-                                                   test::starter().routes.data());
-      const auto expected = table.value(Property::yield_strength,
-                                        table.step_at(id, thickness)->row)->low;
+      candidate.route =
+          static_cast<std::uint32_t>(&route("laser-cut-plate") - test::starter().routes.data());
+      const auto expected =
+          table.value(Property::yield_strength, table.step_at(id, thickness)->row)->low;
       const auto result = front(part, test::starter());
       for (const auto& design : result.designs) {
         if (design.candidate == candidate) {
@@ -69,8 +69,9 @@ TEST_CASE("a plate at the very end of a thickness step has the strength of that 
 }
 
 TEST_CASE("hardened bar grades count by the equivalent diameter of a flat") {
-  // EN 10083-3, 42CrMo4 +QT: 900 MPa for d <= 16 or t <= 8, 750 MPa for d <= 40 or t <= 20 (from memory; the
-  // table carries the diameters). A flat of 30 x 15 mm has 4 A / U = 20 mm and belongs to the second step.
+  // EN 10083-3, 42CrMo4 +QT: 900 MPa for d <= 16 or t <= 8, 750 MPa for d <= 40 or t <= 20 (from
+  // memory; the table carries the diameters). A flat of 30 x 15 mm has 4 A / U = 20 mm and belongs
+  // to the second step.
   Part part = starter_lever();
   part.limits.deflection.reset();
   part.limits.routes = {"hot-forging"};
@@ -157,8 +158,9 @@ TEST_CASE("evaluate refuses indices outside the catalogue and what the part does
       static_cast<void>(evaluate(part, catalogue, bad, 0.03));
       FAIL("no error");
     } catch (const Error& error) {
-      CHECK(std::any_of(error.faults().begin(), error.faults().end(),
-                        [&](const Fault& fault) { return fault.where == change.first; }));
+      CHECK(std::any_of(error.faults().begin(), error.faults().end(), [&](const Fault& fault) {
+        return fault.where == change.first;
+      }));
     }
   }
   Part other = part;
@@ -175,22 +177,27 @@ TEST_CASE("extrusion keeps ageing and loses cold work, and makes only what the r
   CHECK_FALSE(lost("en-aw-7075-t6-bar"));
   CHECK_FALSE(route_rules(material("en-aw-6082-t6-profile"), route("extrusion")).has_value());
   // A bar's values are not a tube's.
-  CHECK(drawn_form_rules(material("en-aw-7075-t6-bar"), route("extrusion"), SectionFamily::round_tube)
-            .has_value());
-  CHECK_FALSE(drawn_form_rules(material("en-aw-7075-t6-bar"), route("extrusion"),
-                               SectionFamily::solid_round)
+  CHECK(
+      drawn_form_rules(material("en-aw-7075-t6-bar"), route("extrusion"), SectionFamily::round_tube)
+          .has_value());
+  CHECK_FALSE(drawn_form_rules(
+                  material("en-aw-7075-t6-bar"), route("extrusion"), SectionFamily::solid_round)
                   .has_value());
-  CHECK(drawn_form_rules(material("en-aw-6005a-t6-open-profile"), route("extrusion"),
+  CHECK(drawn_form_rules(material("en-aw-6005a-t6-open-profile"),
+                         route("extrusion"),
                          SectionFamily::rectangular_tube)
             .has_value());
   // Granulate takes any form.
-  CHECK_FALSE(drawn_form_rules(material("pp-homopolymer-as-moulded"), route("polymer-extrusion"),
+  CHECK_FALSE(drawn_form_rules(material("pp-homopolymer-as-moulded"),
+                               route("polymer-extrusion"),
                                SectionFamily::round_tube)
                   .has_value());
 }
 
 TEST_CASE("a rolled tube is welded: weldable grades only, and no heat-treated aluminium") {
-  const auto broken = [](const char* id) { return route_rules(material(id), route("roll-forming")); };
+  const auto broken = [](const char* id) {
+    return route_rules(material(id), route("roll-forming"));
+  };
   CHECK_FALSE(broken("s355mc-thermomechanically-rolled").has_value());
   CHECK(broken("en-aw-6082-t6").has_value());
   for (std::size_t m = 0; m < test::starter().materials.size(); ++m) {

@@ -67,9 +67,10 @@ TEST_CASE("declared trends of a part's utilisations and objectives hold on rando
         problem.evaluate(g, std::span(&a, 1), lower_objectives, lower);
         problem.evaluate(g, std::span(&b, 1), upper_objectives, upper);
         const double slack = 1.0 + 1e-12;
-        const bool same_piece =
-            std::none_of(variable.breakpoints.begin(), variable.breakpoints.end(),
-                         [&](double breakpoint) { return breakpoint >= a && breakpoint < b; });
+        const bool same_piece = std::none_of(
+            variable.breakpoints.begin(), variable.breakpoints.end(), [&](double breakpoint) {
+              return breakpoint >= a && breakpoint < b;
+            });
         if (!same_piece) {
           continue;
         }
@@ -78,12 +79,18 @@ TEST_CASE("declared trends of a part's utilisations and objectives hold on rando
         for (std::size_t i = 0; i < lower.size(); ++i) {
           INFO(problem.compiled(g).constraints[i].label);
           switch (problem.utilisation_trend(g, i, 0)) {
-            case Trend::falls: CHECK(upper[i] <= lower[i] * slack); break;
-            case Trend::rises: CHECK(upper[i] * slack >= lower[i]); break;
+            case Trend::falls:
+              CHECK(upper[i] <= lower[i] * slack);
+              break;
+            case Trend::rises:
+              CHECK(upper[i] * slack >= lower[i]);
+              break;
             case Trend::constant:
               CHECK((upper[i] == lower[i] || upper[i] == Approx(lower[i]).epsilon(1e-9)));
               break;
-            case Trend::neither: FAIL("no trend"); break;
+            case Trend::neither:
+              FAIL("no trend");
+              break;
           }
         }
       }

@@ -12,8 +12,10 @@ namespace {
 constexpr double MPa = 1e6;
 constexpr double hour = 3600.0;
 
-ResolvedMaterial resolved(const char* id, const LoadCase& load_case = {},
-                          const Settings& settings = {}, ServiceClass service = ServiceClass::one) {
+ResolvedMaterial resolved(const char* id,
+                          const LoadCase& load_case = {},
+                          const Settings& settings = {},
+                          ServiceClass service = ServiceClass::one) {
   const auto& catalogue = test::starter();
   const auto material = catalogue.materials.find(id).value();
   const PropertyReader reader(catalogue, settings);
@@ -34,14 +36,16 @@ TEST_CASE("the stress rule follows yield, elongation and isotropy") {
   CHECK(resolved("en-aw-7075-t6-bar").member.rule == StressRule::von_mises_yield);
   // Cast metal needs 5 %.
   CHECK(resolved("en-gjl-250-as-cast").member.rule == StressRule::principal);
-  CHECK(resolved("en-ac-43400-alsi10mg-fe-pressure-die-cast-f").member.rule == StressRule::principal);
+  CHECK(resolved("en-ac-43400-alsi10mg-fe-pressure-die-cast-f").member.rule ==
+        StressRule::principal);
   CHECK(resolved("en-gjs-400-18-as-cast-or-annealed").member.rule == StressRule::von_mises_yield);
   CHECK(resolved("c24-12-pct-moisture-graded").member.rule == StressRule::direct_and_shear);
   CHECK(resolved("alumina-96-pct-sintered").member.rule == StressRule::principal);
   CHECK(resolved("alumina-96-pct-sintered").member.ceramic);
 }
 
-TEST_CASE("the stress rule agrees with the rule that the table states for every row that states one") {
+TEST_CASE(
+    "the stress rule agrees with the rule that the table states for every row that states one") {
   // The column "strength rule" was filled by the compilers of the table apart from this code.
   const auto& table = test::starter().materials;
   const Settings settings;
@@ -71,14 +75,14 @@ TEST_CASE("specified minima count whole and typical strengths are divided by 1.2
   const auto plastic = resolved("pa66-conditioned");
   const auto& table = test::starter().materials;
   const auto row = table.steps(table.find("pa66-conditioned").value())[0].row;
-  CHECK(*plastic.member.sigma_y ==
-        Approx(table.value(Property::yield_strength, row)->low / 1.25));
+  CHECK(*plastic.member.sigma_y == Approx(table.value(Property::yield_strength, row)->low / 1.25));
   CHECK(plastic.notes.size() == 1);
 }
 
 TEST_CASE("graded timber takes k_mod and gamma_M from its row by the duration of the load") {
-  // EN 338 C24 f_m,k = 24 MPa; EN 1995-1-1 tables 2.3 and 3.1: gamma_M 1.3; k_mod 0.9 short, 0.8 medium,
-  // 0.7 long, 0.6 permanent (checks TIM-014, TIM-016: recommended values, seen in open-source codes).
+  // EN 338 C24 f_m,k = 24 MPa; EN 1995-1-1 tables 2.3 and 3.1: gamma_M 1.3; k_mod 0.9 short, 0.8
+  // medium, 0.7 long, 0.6 permanent (checks TIM-014, TIM-016: recommended values, seen in
+  // open-source codes).
   const char* c24 = "c24-12-pct-moisture-graded";
   const auto bending = [&](double seconds) {
     return *resolved(c24, lasting(seconds)).member.flexural;

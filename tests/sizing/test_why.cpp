@@ -26,7 +26,8 @@ Part forged() {
 
 }  // namespace
 
-TEST_CASE("why tells of a material on the front: its stretch, its limits, its cost and its sources") {
+TEST_CASE(
+    "why tells of a material on the front: its stretch, its limits, its cost and its sources") {
   const auto answer = why("alu-a", forged(), test::small_catalogue());
   CHECK(answer.standing == Answer::Standing::front);
   REQUIRE(answer.design.has_value());
@@ -61,14 +62,16 @@ TEST_CASE("why tells of a beaten material which design beats it and by how much"
   CHECK(says(answer, "lighter"));
 }
 
-TEST_CASE("why tells of an infeasible material the limit, by how much, and the value that would let it in") {
+TEST_CASE(
+    "why tells of an infeasible material the limit, by how much, and the value that would let it "
+    "in") {
   Part part = forged();
   part.body.shapes = {round({.height_max = 20e-3})};  // steel A needs 21.549 mm
   const auto answer = why("steel-a", part, test::small_catalogue());
   CHECK(answer.standing == Answer::Standing::infeasible);
   CHECK(says(answer, "yield"));
-  // At 20 mm the stress is 196.5 / (pi 8e-6 / 32) = 250.2 MPa; with 1.5 a yield strength of 375.3 MPa is needed,
-  // which is 1.25 times what there is.
+  // At 20 mm the stress is 196.5 / (pi 8e-6 / 32) = 250.2 MPa; with 1.5 a yield strength of 375.3
+  // MPa is needed, which is 1.25 times what there is.
   CHECK(says(answer, "1.25"));
   CHECK(says(answer, "375."));
 }

@@ -9,7 +9,8 @@
 
 namespace bismar::test {
 
-/// Utilisations (a / x)^p, or (x / a)^p for positive powers; objectives x and x^2. One group a list.
+/// Utilisations (a / x)^p, or (x / a)^p for positive powers; objectives x and x^2. One group a
+/// list.
 class PowerProblem : public BoxProblem {
  public:
   using Term = std::pair<double, double>;  // a, exponent: negative falls, positive rises
@@ -42,18 +43,22 @@ class PowerProblem : public BoxProblem {
   [[nodiscard]] std::size_t constraints(std::size_t group) const override {
     return groups_[group].size();
   }
-  [[nodiscard]] Trend objective_trend(std::size_t /*group*/, std::size_t /*i*/,
+  [[nodiscard]] Trend objective_trend(std::size_t /*group*/,
+                                      std::size_t /*i*/,
                                       std::size_t /*v*/) const override {
     return Trend::rises;
   }
-  [[nodiscard]] Trend utilisation_trend(std::size_t group, std::size_t i,
+  [[nodiscard]] Trend utilisation_trend(std::size_t group,
+                                        std::size_t i,
                                         std::size_t /*v*/) const override {
     if (hidden_) {
       return Trend::neither;
     }
     return groups_[group][i].second < 0.0 ? Trend::falls : Trend::rises;
   }
-  void evaluate(std::size_t group, std::span<const double> x, std::span<double> objectives,
+  void evaluate(std::size_t group,
+                std::span<const double> x,
+                std::span<double> objectives,
                 std::span<double> utilisations) const override {
     objectives[0] = x[0];
     objectives[1] = x[0] * x[0];

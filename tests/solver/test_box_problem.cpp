@@ -16,10 +16,12 @@ struct Bounds {
   std::vector<double> upper;
 };
 
-Bounds bounds_of(const BoxProblem& problem, const std::vector<double>& from,
+Bounds bounds_of(const BoxProblem& problem,
+                 const std::vector<double>& from,
                  const std::vector<double>& to) {
   const std::size_t count = from.size();
-  Bounds out{std::vector<double>(2 * count), std::vector<double>(problem.constraints(0) * count),
+  Bounds out{std::vector<double>(2 * count),
+             std::vector<double>(problem.constraints(0) * count),
              std::vector<double>(problem.constraints(0) * count)};
   problem.bound(0, {count, from, to}, {out.objective_lower, out.lower, out.upper});
   return out;

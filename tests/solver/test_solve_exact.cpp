@@ -5,7 +5,9 @@
 using namespace bismar;
 using bismar::test::PowerProblem;
 
-TEST_CASE("the least feasible size is the root of the largest falling utilisation, on the feasible side") {
+TEST_CASE(
+    "the least feasible size is the root of the largest falling utilisation, on the feasible "
+    "side") {
   // u = (2/x)^3 and (1.5/x)^2: the first rules, x = 2.
   PowerProblem problem({{{2.0, -3.0}, {1.5, -2.0}}}, 0.1, 10.0);
   const auto solution = solve_exact(problem, 0);
@@ -55,7 +57,8 @@ TEST_CASE("on an ordered set every value is tried and the non-dominated ones are
 }
 
 TEST_CASE("a jump between pieces is honoured on both of its sides") {
-  // Beyond x = 1 the falling limit is a tenth: nothing at or below 1 is feasible, the next double is.
+  // Beyond x = 1 the falling limit is a tenth: nothing at or below 1 is feasible, the next double
+  // is.
   PowerProblem problem({{{3.0, -1.0}}}, 0.1, 10.0);
   problem.jump(1.0, 0.1);
   const auto solution = solve_exact(problem, 0);

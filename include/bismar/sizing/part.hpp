@@ -18,7 +18,7 @@ namespace bismar {
 struct Sizes {
   enum class Kind : std::uint8_t { continuous, step, series, list };
   Kind kind = Kind::continuous;
-  double step = 0.0;           ///< [m], multiples of it.
+  double step = 0.0;                ///< [m], multiples of it.
   std::string series = {};          ///< "R10", "R20", ...: preferred numbers in millimetres.
   std::vector<double> values = {};  ///< [m]
 
@@ -33,14 +33,14 @@ struct Sizes {
   }
 };
 
-/// A parametric shape. Its size is its height (diameter, side); the other dimensions follow by ratios.
-/// A ratio that is left out where the shape has one is free, and makes a second free size.
+/// A parametric shape. Its size is its height (diameter, side); the other dimensions follow by
+/// ratios. A ratio that is left out where the shape has one is free, and makes a second free size.
 struct Shape {
   SectionFamily family = SectionFamily::solid_round;
   std::optional<double> height_to_width = {};  ///< h/b: ellipse, rectangle, rectangular tube.
   std::optional<double> wall_to_height = {};   ///< t/h (t/d): tubes.
-  double height_min = 4e-3;               ///< [m]
-  double height_max = 0.5;                ///< [m]
+  double height_min = 4e-3;                    ///< [m]
+  double height_max = 0.5;                     ///< [m]
   Sizes sizes = {};
   friend bool operator==(const Shape&, const Shape&) = default;
 };
@@ -63,15 +63,16 @@ struct ShapeOptions {
 /// A prismatic member: tie, strut, beam, shaft, or all at once.
 struct Member {
   double length = 0.0;             ///< L [m]
-  std::vector<Shape> shapes = {};       ///< Parametric shapes to try.
-  std::vector<std::string> stock = {};  ///< Stock lists to try, by id; "all" for every list of sections.
+  std::vector<Shape> shapes = {};  ///< Parametric shapes to try.
+  std::vector<std::string> stock =
+      {};  ///< Stock lists to try, by id; "all" for every list of sections.
   std::vector<LoadCase> load_cases = {};
 };
 
 /// A bound on a property of the material.
 struct PropertyLimit {
-  std::string property = {};             ///< A property's name, or the name of an extra column.
-  std::optional<double> at_least = {};   ///< SI (for an extra column: SI of its own unit).
+  std::string property = {};            ///< A property's name, or the name of an extra column.
+  std::optional<double> at_least = {};  ///< SI (for an extra column: SI of its own unit).
   std::optional<double> at_most = {};
 };
 
@@ -82,29 +83,31 @@ struct Limits {
   std::optional<double> height = {};      ///< Envelope [m]
   std::optional<double> width = {};       ///< Envelope [m]
   std::optional<double> wall = {};        ///< Least wall [m]
-  double slenderness = 200.0;        ///< K L / i of a member in compression.
+  double slenderness = 200.0;             ///< K L / i of a member in compression.
   ColumnMethod column_method = ColumnMethod::curves;
-  std::optional<double> mass = {};        ///< Cap [kg]
-  std::optional<double> cost = {};        ///< Cap [currency]
-  std::vector<std::string> routes = {};             ///< Only these routes; empty = every primary route.
+  std::optional<double> mass = {};       ///< Cap [kg]
+  std::optional<double> cost = {};       ///< Cap [currency]
+  std::vector<std::string> routes = {};  ///< Only these routes; empty = every primary route.
   std::vector<std::string> forbidden_routes = {};
-  std::vector<std::string> processes = {};          ///< Process words that the material must allow, all of them.
-  std::vector<std::string> forms = {};              ///< The material must be sold in one of these; empty = any.
-  std::vector<std::string> classes = {};            ///< Only these material classes; empty = any.
-  std::vector<std::string> materials = {};          ///< Only these materials, by id; empty = any.
+  std::vector<std::string> processes =
+      {};  ///< Process words that the material must allow, all of them.
+  std::vector<std::string> forms = {};  ///< The material must be sold in one of these; empty = any.
+  std::vector<std::string> classes = {};              ///< Only these material classes; empty = any.
+  std::vector<std::string> materials = {};            ///< Only these materials, by id; empty = any.
   std::vector<std::string> forbidden_materials = {};  ///< Material ids or classes.
   std::vector<PropertyLimit> properties = {};
-  std::optional<std::string> medium = {};           ///< "fresh water", "sea water": corrosion is checked there ...
-  Rating corrosion_at_least = Rating::good;    ///< ... by the material's rating or its finish's.
-  std::optional<double> temperature = {};           ///< Service temperature [K].
-  bool allow_brittle = false;                  ///< Admits rows marked "on request" that are brittle.
-  bool allow_hard = false;                     ///< Admits rows marked "on request" that are very hard.
+  std::optional<std::string> medium =
+      {};  ///< "fresh water", "sea water": corrosion is checked there ...
+  Rating corrosion_at_least = Rating::good;  ///< ... by the material's rating or its finish's.
+  std::optional<double> temperature = {};    ///< Service temperature [K].
+  bool allow_brittle = false;                ///< Admits rows marked "on request" that are brittle.
+  bool allow_hard = false;  ///< Admits rows marked "on request" that are very hard.
 };
 
 /// A step that every candidate gets, so many units of it.
 struct OperationUse {
   std::string operation = {};  ///< Id in the catalogue.
-  double units = 1.0;     ///< Cuts, holes, metres ... a part.
+  double units = 1.0;          ///< Cuts, holes, metres ... a part.
 };
 
 /// Climate of timber (EN 1995-1-1, 2.3.1.3).
@@ -114,7 +117,7 @@ enum class ServiceClass : std::uint8_t { one = 1, two = 2 };
 struct Part {
   std::string name = "part";
   double quantity = 1.0;             ///< Parts made over the life of the tooling.
-  std::optional<double> batch = {};       ///< Parts a batch; absent = the whole quantity at once.
+  std::optional<double> batch = {};  ///< Parts a batch; absent = the whole quantity at once.
   Member body = {};
   Limits limits = {};
   std::vector<std::string> finishes = {"none"};  ///< Finishes to try, by id.
@@ -134,17 +137,20 @@ struct Settings {
   Missing missing = Missing::undecided;
   std::map<Property, RangeEnd> range_ends = {};  ///< Overrides of the properties' default ends.
   RangeEnd route_end = RangeEnd::geometric_mid;  ///< Of route, finish and operation ranges.
-  double near = 0.05;   ///< beta: designs within this of the front are kept.
-  double fold = 0.02;   ///< Designs this close are shown under one representative.
-  bool doubtful_sizes = false;  ///< Offer stock sizes marked doubtful.
-  double kerf = 3e-3;           ///< Saw cut [m].
+  double near = 0.05;                 ///< beta: designs within this of the front are kept.
+  double fold = 0.02;                 ///< Designs this close are shown under one representative.
+  bool doubtful_sizes = false;        ///< Offer stock sizes marked doubtful.
+  double kerf = 3e-3;                 ///< Saw cut [m].
   double machining_allowance = 2e-3;  ///< Added to each outside dimension of a machined part [m].
-  double scrap_credit = 0.0;    ///< Fraction of the price at which scrap metal is sold back.
+  double scrap_credit = 0.0;          ///< Fraction of the price at which scrap metal is sold back.
 };
 
 /// Checks a part against a catalogue without solving it.
-/// @throws bismar::Error  every fault: names that the catalogue does not have (with the nearest one),
+/// @throws bismar::Error  every fault: names that the catalogue does not have (with the nearest
+/// one),
 ///   impossible numbers, shapes with two or more free sizes (unsupported), contradictory limits.
-BISMAR_API void validate(const Part& part, const Catalogue& catalogue, const Settings& settings = {});
+BISMAR_API void validate(const Part& part,
+                         const Catalogue& catalogue,
+                         const Settings& settings = {});
 
 }  // namespace bismar

@@ -17,7 +17,8 @@ inline constexpr int result_format_version = 1;
 
 /// One utilisation of a design.
 struct Utilisation {
-  std::string limit;      ///< A limit state's id, or "mass cap", "cost cap", "route section", "route mass".
+  std::string
+      limit;  ///< A limit state's id, or "mass cap", "cost cap", "route section", "route mass".
   std::string load_case;  ///< Empty where no load case is meant.
   double value = 0.0;     ///< u; feasible when <= 1.
   double factor = 1.0;    ///< The factor used.
@@ -40,12 +41,13 @@ struct CostBreakdown {
   std::string blank;            ///< From what it is made: "round bar 45, 6 of 300 mm from 6 m".
 };
 
-/// A candidate: what a part is made of and by, before it has a size. Indices into the catalogue and part.
+/// A candidate: what a part is made of and by, before it has a size. Indices into the catalogue and
+/// part.
 struct Candidate {
   static constexpr std::uint32_t none = UINT32_MAX;
   std::uint32_t material = 0;
-  std::uint32_t shape = none;      ///< Index into Member::shapes, or none for stock.
-  std::uint32_t stock = none;      ///< Index into Catalogue::stock, or none for a shape.
+  std::uint32_t shape = none;  ///< Index into Member::shapes, or none for stock.
+  std::uint32_t stock = none;  ///< Index into Catalogue::stock, or none for a shape.
   std::uint32_t route = 0;
   std::uint32_t treatment = none;  ///< Index into Catalogue::routes.
   std::uint32_t finish = none;     ///< Index into Catalogue::finishes.
@@ -54,7 +56,9 @@ struct Candidate {
 
 /// A candidate with its size.
 struct Design {
-  std::string id;         ///< Stable: "42crmo4-quenched-and-tempered/ellipse 24.31x19.45/hot-forging+quench-temper/none".
+  std::string
+      id;  ///< Stable:
+           ///< "42crmo4-quenched-and-tempered/ellipse 24.31x19.45/hot-forging+quench-temper/none".
   Candidate candidate;
   std::string material;       ///< Id.
   std::string material_name;  ///< "42CrMo4, quenched and tempered"
@@ -62,17 +66,19 @@ struct Design {
   std::string size_text;      ///< "24.3 x 19.4 mm", or the stock designation.
   std::string stock_item;     ///< Id, empty for a shape.
   std::string route;
-  std::string treatment;      ///< Empty for none.
-  std::string finish;         ///< "none" for none.
-  double size = 0.0;          ///< Height [m]; for stock the index of the item in its list.
+  std::string treatment;  ///< Empty for none.
+  std::string finish;     ///< "none" for none.
+  double size = 0.0;      ///< Height [m]; for stock the index of the item in its list.
   SectionProperties section;
-  double mass = 0.0;  ///< [kg], finish included.
-  double cost = 0.0;  ///< [currency] a part.
+  double mass = 0.0;                      ///< [kg], finish included.
+  double cost = 0.0;                      ///< [currency] a part.
   std::vector<Utilisation> utilisations;  ///< In the order of the limit states, load cases inside.
-  std::size_t governing = 0;              ///< Index of the largest utilisation (caps aside unless they bind).
+  std::size_t governing = 0;  ///< Index of the largest utilisation (caps aside unless they bind).
   CostBreakdown cost_breakdown;
-  std::vector<std::string> notes;  ///< Marks: typical strength divided, unverified, class median used, ...
-  /// Continuous sizes: the next size up in the usual 1 mm step (or the step asked for), re-checked and re-costed.
+  std::vector<std::string>
+      notes;  ///< Marks: typical strength divided, unverified, class median used, ...
+  /// Continuous sizes: the next size up in the usual 1 mm step (or the step asked for), re-checked
+  /// and re-costed.
   std::optional<double> buyable_size;
   double buyable_mass = 0.0;
   double buyable_cost = 0.0;
@@ -88,13 +94,15 @@ struct FunnelLine {
 };
 
 struct Funnel {
-  std::size_t considered = 0;     ///< All combinations of material, shape or list, route, treatment, finish.
-  std::vector<FunnelLine> lines;  ///< In the stated order; counts add up to `considered`.
+  std::size_t considered =
+      0;  ///< All combinations of material, shape or list, route, treatment, finish.
+  std::vector<FunnelLine> lines;   ///< In the stated order; counts add up to `considered`.
   std::size_t doubtful_sizes = 0;  ///< Stock sizes that were not offered.
   [[nodiscard]] BISMAR_API std::size_t count(FunnelLine::Stage stage) const;
 };
 
-/// A feasible point of a candidate that is neither on nor near the front: enough for plots and rulers.
+/// A feasible point of a candidate that is neither on nor near the front: enough for plots and
+/// rulers.
 struct FeasiblePoint {
   Candidate candidate;
   double size = 0.0;
@@ -112,9 +120,9 @@ struct Result {
   int version = result_format_version;
   std::string part;
   std::string currency;
-  bool exact = true;              ///< Stock, size lists and one-size shapes: exact to 1e-9 in the size.
-  std::vector<Design> designs;    ///< Front first, then near designs; each in canonical order.
-  std::size_t front_count = 0;    ///< designs[0, front_count) is the front, by rising mass.
+  bool exact = true;  ///< Stock, size lists and one-size shapes: exact to 1e-9 in the size.
+  std::vector<Design> designs;        ///< Front first, then near designs; each in canonical order.
+  std::size_t front_count = 0;        ///< designs[0, front_count) is the front, by rising mass.
   std::vector<FeasiblePoint> others;  ///< Every other feasible point, canonical order.
   Funnel funnel;
   std::vector<std::string> undecided;  ///< "material: property", for the report.
@@ -127,17 +135,18 @@ enum class Per : std::uint8_t { design, material, shape, route };
 
 /// Where a breakpoint may lie over the price and density ranges of its two neighbours.
 struct BreakpointBand {
-  double low = 0.0;            ///< [currency/kg]
-  std::optional<double> high;  ///< [currency/kg]; absent: at some ends no worth of a kilogram changes the choice.
+  double low = 0.0;  ///< [currency/kg]
+  std::optional<double>
+      high;  ///< [currency/kg]; absent: at some ends no worth of a kilogram changes the choice.
 };
 
 /// A stretch of the exchange constant with its choice.
 struct NamedStretch {
-  double from = 0.0;           ///< [currency/kg], inclusive.
-  std::optional<double> to;    ///< Absent: no upper end.
-  std::size_t design = 0;      ///< Index into Result::designs: the choice at the lower end.
-  std::string choice;          ///< Label at the chosen level.
-  double penalty_from = 0.0;   ///< Z at the lower end [currency].
+  double from = 0.0;          ///< [currency/kg], inclusive.
+  std::optional<double> to;   ///< Absent: no upper end.
+  std::size_t design = 0;     ///< Index into Result::designs: the choice at the lower end.
+  std::string choice;         ///< Label at the chosen level.
+  double penalty_from = 0.0;  ///< Z at the lower end [currency].
   std::optional<double> penalty_to;
   double mass = 0.0;
   double cost = 0.0;
@@ -152,14 +161,15 @@ struct NamedStretch {
     std::optional<double> regret_to;
   };
   std::vector<RunnerUp> runners_up;
-  /// Band of the lower breakpoint over the price and density ranges of the two neighbours [currency/kg].
+  /// Band of the lower breakpoint over the price and density ranges of the two neighbours
+  /// [currency/kg].
   std::optional<BreakpointBand> from_band;
 };
 
 struct UnsupportedDesign {
-  std::size_t design = 0;       ///< Index into Result::designs.
-  double regret = 0.0;          ///< Least regret over all alpha [currency].
-  double at = 0.0;              ///< Where [currency/kg].
+  std::size_t design = 0;  ///< Index into Result::designs.
+  double regret = 0.0;     ///< Least regret over all alpha [currency].
+  double at = 0.0;         ///< Where [currency/kg].
 };
 
 struct ExchangeRuler {

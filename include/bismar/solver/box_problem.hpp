@@ -20,13 +20,14 @@ struct Variable {
   Kind kind = Kind::continuous;
   double lower = 0.0;
   double upper = 0.0;
-  std::vector<double> values;       ///< Ordered set: its values, ascending, lower and upper at its ends.
-  std::vector<double> breakpoints;  ///< Continuous: interior values where outputs may jump, ascending. A
-                                    ///< piece is (previous, this], the first one closed below.
+  std::vector<double> values;  ///< Ordered set: its values, ascending, lower and upper at its ends.
+  std::vector<double>
+      breakpoints;  ///< Continuous: interior values where outputs may jump, ascending. A
+                    ///< piece is (previous, this], the first one closed below.
 };
 
-/// Boxes side by side: `lower[v * count + b]` and `upper[v * count + b]` bound variable v of box b. An
-/// ordered set is boxed by values of the set.
+/// Boxes side by side: `lower[v * count + b]` and `upper[v * count + b]` bound variable v of box b.
+/// An ordered set is boxed by values of the set.
 struct BoxBatch {
   std::size_t count = 0;
   std::span<const double> lower;  ///< [variables x count]
@@ -61,22 +62,26 @@ class BISMAR_API BoxProblem {
   /// Number of utilisations of a group.
   [[nodiscard]] virtual std::size_t constraints(std::size_t group) const = 0;
   /// Trend of objective `i` in variable `v`, on each piece between breakpoints.
-  [[nodiscard]] virtual Trend objective_trend(std::size_t group, std::size_t i,
+  [[nodiscard]] virtual Trend objective_trend(std::size_t group,
+                                              std::size_t i,
                                               std::size_t v) const = 0;
   /// Trend of utilisation `i` in variable `v`, on each piece between breakpoints.
-  [[nodiscard]] virtual Trend utilisation_trend(std::size_t group, std::size_t i,
+  [[nodiscard]] virtual Trend utilisation_trend(std::size_t group,
+                                                std::size_t i,
                                                 std::size_t v) const = 0;
   /// Objectives [objectives] and utilisations [constraints] at `x` [variables].
-  virtual void evaluate(std::size_t group, std::span<const double> x, std::span<double> objectives,
+  virtual void evaluate(std::size_t group,
+                        std::span<const double> x,
+                        std::span<double> objectives,
                         std::span<double> utilisations) const = 0;
-  /// Bounds over boxes. The default takes them from the declared trends by evaluating the corners of
-  /// each piece, outward by `outward_ulps` units in the last place; an output with trend `neither`
-  /// gets no bound (lower -infinity, upper +infinity).
+  /// Bounds over boxes. The default takes them from the declared trends by evaluating the corners
+  /// of each piece, outward by `outward_ulps` units in the last place; an output with trend
+  /// `neither` gets no bound (lower -infinity, upper +infinity).
   virtual void bound(std::size_t group, const BoxBatch& boxes, BoundBatch bounds) const;
 };
 
-/// Outward rounding of bounds taken from trends. Covers the rounding of an evaluation of a few dozen
-/// operations, so that a computed corner still encloses computed interior values.
+/// Outward rounding of bounds taken from trends. Covers the rounding of an evaluation of a few
+/// dozen operations, so that a computed corner still encloses computed interior values.
 inline constexpr int outward_ulps = 64;
 
 /// The feasible, mutually non-dominated points of one group.
@@ -87,9 +92,9 @@ struct GroupSolution {
     std::vector<double> utilisations;  ///< [constraints]
   };
   std::vector<Point> points;  ///< Ordered by objectives, then x. Empty when nothing is feasible.
-  bool solved = true;         ///< False: a trend is `neither`, or there are several continuous variables.
-  /// Where nothing is feasible: a constraint that alone exceeds 1 everywhere (the first in order), and
-  /// the least value it can have ...
+  bool solved = true;  ///< False: a trend is `neither`, or there are several continuous variables.
+  /// Where nothing is feasible: a constraint that alone exceeds 1 everywhere (the first in order),
+  /// and the least value it can have ...
   std::size_t excluded_by = SIZE_MAX;
   double least_utilisation = 0.0;
   /// ... or, where each alone could be met, the two that clash first.
@@ -100,11 +105,11 @@ struct GroupSolution {
 
 /// Exact solution of a group whose variables are one continuous variable or one ordered set.
 ///
-/// Ordered set: every value is evaluated. Continuous: on each piece every objective must rise or stay
-/// and every utilisation must rise, fall or stay, so the feasible sizes are an interval and its lower
-/// end is the only non-dominated point: the root of the largest falling utilisation, found by bracketing
-/// to adjacent doubles or a relative width of 1e-12, on the feasible side. Pieces are kept apart and
-/// their points filtered.
+/// Ordered set: every value is evaluated. Continuous: on each piece every objective must rise or
+/// stay and every utilisation must rise, fall or stay, so the feasible sizes are an interval and
+/// its lower end is the only non-dominated point: the root of the largest falling utilisation,
+/// found by bracketing to adjacent doubles or a relative width of 1e-12, on the feasible side.
+/// Pieces are kept apart and their points filtered.
 ///
 /// @return solved == false when the group has another form (it needs a solver that bounds boxes).
 [[nodiscard]] BISMAR_API GroupSolution solve_exact(const BoxProblem& problem, std::size_t group);

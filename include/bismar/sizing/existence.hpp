@@ -13,8 +13,9 @@
 
 namespace bismar {
 
-/// Why a candidate cannot exist. Each rule is a line of the funnel; the order is that of the
-/// checks.
+/// Why a candidate cannot exist. Each rule is a line of the funnel, in the order of the checks, but
+/// for `treatment`: sizing tries the treatment that is needed, so only a question about one
+/// candidate can meet it.
 enum class Rule : std::uint8_t {
   not_asked_for,   ///< The job's own filters: classes, materials, forms, processes.
   structural_use,  ///< Rows marked "no" are never members; "on request" needs the job's leave.

@@ -141,7 +141,21 @@ class OneVariable {
     }
   }
 
+  /// The least value of a utilisation lies at an end of some piece.
+  void evaluate_ends() {
+    if (variable_.kind == Variable::Kind::ordered_set) {
+      return;
+    }
+    evaluate(variable_.lower);
+    for (const double breakpoint : variable_.breakpoints) {
+      evaluate(breakpoint);
+      evaluate(std::nextafter(breakpoint, infinity));
+    }
+    evaluate(variable_.upper);
+  }
+
   void explain() {
+    evaluate_ends();
     for (std::size_t i = 0; i < least_.size(); ++i) {
       if (least_[i] > 1.0) {
         solution_.excluded_by = i;

@@ -76,6 +76,17 @@ TEST_CASE(
   CHECK(says(answer, "375."));
 }
 
+TEST_CASE("a cap that smaller sizes would meet is not blamed alone, thickness steps or not") {
+  // C45 normalised has a strength step at 16 mm: at its end the lever is too heavy and still too
+  // weak.
+  Part part = test::small_lever();
+  part.body.shapes = {ellipse({.height_to_width = 1.25, .height_min = 8e-3, .height_max = 60e-3})};
+  part.limits.routes = {"hot-forging"};
+  part.limits.mass = 0.5;
+  const auto answer = why("c45-normalised", part, test::starter());
+  CHECK(answer.headline == "Infeasible: yield against mass cap.");
+}
+
 TEST_CASE("why names two limits that clash") {
   Part part = forged();
   part.limits.mass = 0.7;  // steel A needs 0.859 kg

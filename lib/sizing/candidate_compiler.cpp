@@ -273,10 +273,10 @@ std::vector<double> CandidateCompiler::wanted_sizes(double lower, double upper) 
     case Sizes::Kind::continuous:
       break;
     case Sizes::Kind::step: {
-      const double first = std::ceil(lower / sizes.step * (1.0 - 1e-12));
-      const double last = std::floor(upper / sizes.step * (1.0 + 1e-12));
-      for (double k = first; k <= last; k += 1.0) {
-        out.push_back(k * sizes.step);
+      const auto first = std::llround(std::ceil(lower / sizes.step * (1.0 - 1e-12)));
+      const auto last = std::llround(std::floor(upper / sizes.step * (1.0 + 1e-12)));
+      for (auto k = first; k <= last; ++k) {
+        out.push_back(static_cast<double>(k) * sizes.step);
       }
       break;
     }

@@ -132,9 +132,9 @@ void add_buyable(const SizingProblem& problem, std::size_t group, Design& design
   const auto& variable = problem.compiled(group).variable;
   std::vector<double> objectives(2);
   std::vector<double> utilisations(problem.constraints(group));
-  const double first = std::ceil(design.size / usual_size_step * (1.0 - 1e-12));
-  for (double steps = first; steps <= first + 1.0; steps += 1.0) {
-    const double size = steps * usual_size_step;
+  const auto first = std::llround(std::ceil(design.size / usual_size_step * (1.0 - 1e-12)));
+  for (auto steps = first; steps <= first + 1; ++steps) {
+    const double size = static_cast<double>(steps) * usual_size_step;
     if (size > variable.upper) {
       return;
     }

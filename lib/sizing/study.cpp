@@ -259,13 +259,14 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
     // The root lies on the feasible side of the scaled section; the plain path may differ by a
     // rounding.
     double step = 4.0 * std::numeric_limits<double>::epsilon();
-    for (int tries = 0; tries < 16; ++tries, step *= 2.0) {
+    for (int tries = 0; tries < 16; ++tries) {
       problem.evaluate_plain(group, x, objectives, utilisations);
       const double worst = *std::max_element(utilisations.begin(), utilisations.end());
       if (worst <= 1.0 || compiled.variable.kind == Variable::Kind::ordered_set) {
         break;
       }
       x *= 1.0 + step;
+      step *= 2.0;
     }
     if (*std::max_element(utilisations.begin(), utilisations.end()) <= 1.0) {
       out.points.push_back({x, objectives[0], objectives[1]});

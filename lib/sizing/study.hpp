@@ -49,6 +49,7 @@ struct CandidateNames {
   std::string route;
   std::string treatment;
   std::string finish;
+  // NOLINTNEXTLINE(modernize-use-nullptr): the 0 is the compiler's own
   friend auto operator<=>(const CandidateNames&, const CandidateNames&) = default;
 };
 [[nodiscard]] CandidateNames names(const Candidate& candidate,

@@ -293,14 +293,16 @@ class PartCheck {
               "Two load cases are called \"" + one.name + "\".");
       }
       for (const auto& [id, factor] : one.factors) {
+        std::string place = where;
+        place.append("/factors/").append(id);
         if (limit_state(id) == nullptr) {
           fault(Code::unknown_name,
-                where + "/factors/" + id,
+                place,
                 id,
                 "a limit state",
                 "There is no limit state \"" + id + "\"." + did_you_mean(id, ids));
         }
-        positive(factor, where + "/factors/" + id, "factor");
+        positive(factor, place, "factor");
       }
       if (!(one.duration >= 0.0) || !std::isfinite(one.duration)) {
         fault(Code::out_of_range,

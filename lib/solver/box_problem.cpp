@@ -129,8 +129,8 @@ void BoxProblem::bound(std::size_t group, const BoxBatch& boxes, BoundBatch boun
         double& lower = bounds.objective_lower[i * count + b];
         const bool known = least_corner(
             all.size(), [&](std::size_t v) { return objective_trend(group, i, v); }, corner);
-        lower =
-            std::min(lower, known ? outward(corners.at(corner).objectives[i], -1.0) : -infinity);
+        const double least = known ? outward(corners.at(corner).objectives[i], -1.0) : -infinity;
+        lower = std::min(lower, least);
       }
       for (std::size_t i = 0; i < constraints(group); ++i) {
         double& lower = bounds.utilisation_lower[i * count + b];

@@ -17,13 +17,14 @@ class FunctionRef;
 template <class Result, class... Arguments>
 class FunctionRef<Result(Arguments...)> {
  public:
+  /// Implicit, so that a lambda can stand where the argument is expected; it never hides the copy.
   template <class Callable>
   requires(!std::is_same_v<std::remove_cvref_t<Callable>, FunctionRef> &&
            !std::is_function_v<std::remove_reference_t<Callable>> &&
            std::is_invocable_r_v<Result, Callable&, Arguments...>)
-      // Implicit, so that a lambda can stand where the argument is expected.
+      // NOLINTNEXTLINE(google-explicit-constructor,bugprone-forwarding-reference-overload)
       FunctionRef(Callable&& callable)
-  noexcept  // NOLINT(google-explicit-constructor)
+  noexcept
       : object_(const_cast<void*>(static_cast<const void*>(std::addressof(callable)))),
         call_([](void* object, Arguments... arguments) -> Result {
           using Object = std::remove_reference_t<Callable>;

@@ -46,14 +46,6 @@ bool is_solid(SectionFamily family) {
          family == SectionFamily::solid_rectangle;
 }
 
-bool usable(const StockItem& item,
-            const MaterialInfo& material,
-            const Route& route,
-            const Settings& settings) {
-  return made_of(item, material) && shares_word(item.forms, route.takes) &&
-         (settings.doubtful_sizes || item.availability != Availability::doubtful);
-}
-
 /// Keeps, by rising largest size, those that no other beats in both room and weight.
 std::vector<Blank> lightest(std::vector<Blank> all) {
   std::sort(all.begin(), all.end(), [](const Blank& a, const Blank& b) {
@@ -100,6 +92,20 @@ std::optional<Purchase> buy_length(double area,
   return best;
 }
 
+bool suits(const StockItem& item, const MaterialInfo& material, const Route& route) {
+  return made_of(item, material) && shares_word(item.forms, route.takes);
+}
+
+bool any_suits(const StockList& list, const MaterialInfo& material, const Route& route) {
+  return std::any_of(list.items.begin(), list.items.end(), [&](const StockItem& item) {
+    return suits(item, material, route);
+  });
+}
+
+bool is_offered(const StockItem& item, const Settings& settings) {
+  return settings.doubtful_sizes || item.availability != Availability::doubtful;
+}
+
 std::vector<UsableItem> blank_stock(const MaterialInfo& material,
                                     const Route& route,
                                     const Catalogue& catalogue,
@@ -110,7 +116,7 @@ std::vector<UsableItem> blank_stock(const MaterialInfo& material,
       continue;
     }
     for (const auto& item : list.items) {
-      if (usable(item, material, route, settings)) {
+      if (suits(item, material, route) && is_offered(item, settings)) {
         out.push_back({&item, &list});
       }
     }

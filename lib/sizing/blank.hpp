@@ -34,6 +34,15 @@ struct Blank {
   bool plate = false;             ///< Cut from plate: the width bought follows the part.
 };
 
+/// Whether the item is made of the material, in a form that the route takes.
+[[nodiscard]] bool suits(const StockItem& item, const MaterialInfo& material, const Route& route);
+/// Whether at least one size of the list suits.
+[[nodiscard]] bool any_suits(const StockList& list,
+                             const MaterialInfo& material,
+                             const Route& route);
+/// Whether the study offers the size: doubtful ones only on request.
+[[nodiscard]] bool is_offered(const StockItem& item, const Settings& settings);
+
 /// A stock item that a material and a route can share, with its list.
 struct UsableItem {
   const StockItem* item = nullptr;

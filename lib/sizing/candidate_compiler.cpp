@@ -144,9 +144,7 @@ void CandidateCompiler::stock_pieces() {
   out_->variable.kind = Variable::Kind::ordered_set;
   for (std::size_t i = 0; i < list.items.size(); ++i) {
     const auto& item = list.items[i];
-    const bool offered =
-        problem_.settings().doubtful_sizes || item.availability != Availability::doubtful;
-    if (!offered || !made_of(item, material_) || !shares_word(item.forms, route_.takes)) {
+    if (!is_offered(item, problem_.settings()) || !suits(item, material_, route_)) {
       continue;
     }
     Piece piece;
@@ -255,9 +253,7 @@ std::vector<double> CandidateCompiler::sheet_sizes() const {
       continue;
     }
     for (const auto& item : list.items) {
-      const bool offered =
-          problem_.settings().doubtful_sizes || item.availability != Availability::doubtful;
-      if (offered && made_of(item, material_) && shares_word(item.forms, route_.takes)) {
+      if (is_offered(item, problem_.settings()) && suits(item, material_, route_)) {
         out.push_back(item.thickness * height_per_thickness);
       }
     }

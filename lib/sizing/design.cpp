@@ -22,20 +22,8 @@ std::string unverified(const SizingProblem& problem,
                        const StepState& step,
                        const CompiledCandidate& compiled,
                        const Piece& piece) {
-  std::vector<Property> used = {Property::density, Property::price};
-  for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
-    const auto& constraint = compiled.constraints[i];
-    if (piece.applies[i]) {
-      for (const Symbol symbol : constraint.state->needs(problem.effects()[constraint.load_case],
-                                                         step.cases[constraint.load_case].member)) {
-        used.push_back(property_of(symbol));
-      }
-    }
-  }
-  std::sort(used.begin(), used.end());
-  used.erase(std::unique(used.begin(), used.end()), used.end());
   std::vector<std::string> words;
-  for (const Property property : used) {
+  for (const Property property : properties_read(problem, compiled, piece)) {
     const auto& materials = problem.catalogue().materials;
     if (!materials.value(property, step.row)) {
       continue;
@@ -155,6 +143,23 @@ void add_buyable(const SizingProblem& problem, std::size_t group, Design& design
 }
 
 }  // namespace
+
+std::set<Property> properties_read(const SizingProblem& problem,
+                                   const CompiledCandidate& compiled,
+                                   const Piece& piece) {
+  std::set<Property> out = {Property::density, Property::price};
+  for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
+    const auto& constraint = compiled.constraints[i];
+    if (piece.applies[i]) {
+      for (const Symbol symbol :
+           constraint.state->needs(problem.effects()[constraint.load_case],
+                                   piece.step->cases[constraint.load_case].member)) {
+        out.insert(property_of(symbol));
+      }
+    }
+  }
+  return out;
+}
 
 std::string size_text(const SectionProperties& section) {
   switch (section.family) {

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include <bismar/sizing/existence.hpp>
 
+#include "sizing/blank.hpp"
 #include "sizing/strength.hpp"
 #include "sizing/words.hpp"
 
@@ -343,11 +344,7 @@ std::optional<Exclusion> first_broken_rule(const Candidate& candidate,
     }
   }
   if (from_stock) {
-    const auto& items = catalogue.stock[candidate.stock].items;
-    const bool any = std::any_of(items.begin(), items.end(), [&](const StockItem& item) {
-      return made_of(item, material) && shares_word(item.forms, route.takes);
-    });
-    if (!any) {
+    if (!any_suits(catalogue.stock[candidate.stock], material, route)) {
       return Exclusion{
           Rule::stock_family,
           "No size of \"" + catalogue.stock[candidate.stock].title + "\" is made of it."};

@@ -114,16 +114,8 @@ std::vector<std::string> provenance_lines(const SizingProblem& problem,
   const auto& compiled = problem.compiled(group);
   const auto detail = problem.detail(group, design.size);
   const auto& step = *detail.piece->step;
-  std::set<Property> used = {Property::density, Property::price, Property::elongation};
-  for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
-    const auto& constraint = compiled.constraints[i];
-    if (detail.piece->applies[i]) {
-      for (const Symbol symbol : constraint.state->needs(problem.effects()[constraint.load_case],
-                                                         step.cases[constraint.load_case].member)) {
-        used.insert(property_of(symbol));
-      }
-    }
-  }
+  auto used = properties_read(problem, compiled, *detail.piece);
+  used.insert(Property::elongation);  // it decided which strength rule holds
   std::vector<std::string> out;
   for (const Property property : used) {
     const auto range = problem.catalogue().materials.value(property, step.row);

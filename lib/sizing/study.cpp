@@ -119,7 +119,7 @@ class Enumeration {
         solved_.cannot_exist[Rule::output_form] += each;
       } else if (!from_stock && drawn_form_rules(info, route, part_.body.shapes[s].family)) {
         solved_.cannot_exist[Rule::input_form] += each;
-      } else if (from_stock && !has_stock(info, route, candidate.stock)) {
+      } else if (from_stock && !any_suits(catalogue_.stock[candidate.stock], info, route)) {
         solved_.cannot_exist[Rule::stock_family] += each;
       } else {
         for (const auto treatment : treatments) {
@@ -140,15 +140,6 @@ class Enumeration {
         take(candidate);
       }
     }
-  }
-
-  [[nodiscard]] bool has_stock(const MaterialInfo& info,
-                               const Route& route,
-                               std::uint32_t list) const {
-    const auto& items = catalogue_.stock[list].items;
-    return std::any_of(items.begin(), items.end(), [&](const StockItem& item) {
-      return made_of(item, info) && shares_word(item.forms, route.takes);
-    });
   }
 
   const Part& part_;

@@ -9,6 +9,7 @@
 
 #include <map>
 #include <memory>
+#include <set>
 #include <string>
 #include <vector>
 
@@ -76,6 +77,12 @@ struct CandidateNames {
 [[nodiscard]] Outcome solve_group(const SizingProblem& problem,
                                   std::size_t group,
                                   std::size_t& evaluations);
+
+/// Properties that the design's size, mass and cost rest on: density, price, and what the limit
+/// states that apply on the piece read.
+[[nodiscard]] std::set<Property> properties_read(const SizingProblem& problem,
+                                                 const CompiledCandidate& compiled,
+                                                 const Piece& piece);
 
 /// The design at a size, on the plain path.
 [[nodiscard]] Design make_design(const SizingProblem& problem, std::size_t group, double size);

@@ -158,7 +158,7 @@ Catalogue read_catalogue(const std::string& folder) {
     faults.add(Code::table_unreadable,
                folder,
                "there is no such folder of tables: name one with materials.csv, routes.csv, "
-               "finishes.csv, operations.csv and the folder stock.");
+               "finishes.csv, operations.csv, weld-zones.csv and the folder stock.");
     faults.throw_if_any();
   }
 
@@ -176,6 +176,9 @@ Catalogue read_catalogue(const std::string& folder) {
       catalogue.finishes, faults, [&] { return read_finishes((root / "finishes.csv").string()); });
   read_into(catalogue.operations, faults, [&] {
     return read_operations((root / "operations.csv").string());
+  });
+  read_into(catalogue.weld_zones, faults, [&] {
+    return read_weld_zones((root / "weld-zones.csv").string());
   });
   faults.throw_if_any();
 

@@ -103,6 +103,8 @@ constexpr std::array<PropertyInfo, property_count> infos = {{
      false,
      K::ratio},
     {P::orientation_factor, "orientation factor", "", E::low, false, K::ratio},
+    {P::weld_yield_factor, "weld zone yield factor", "", E::low, true, K::ratio},
+    {P::weld_tensile_factor, "weld zone tensile factor", "", E::low, true, K::ratio},
 }};
 
 constexpr double inf = std::numeric_limits<double>::infinity();
@@ -170,6 +172,8 @@ constexpr std::array<catalogue::PropertyLimits, property_count> all_limits = {{
     factor(P::creep_factor_10y),
     factor(P::long_term_strength_factor_10y),
     factor(P::orientation_factor),
+    factor(P::weld_yield_factor),
+    factor(P::weld_tensile_factor),
 }};
 
 constexpr bool in_order() {

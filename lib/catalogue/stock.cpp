@@ -10,6 +10,7 @@
 #include <bismar/catalogue/csv.hpp>
 #include <bismar/catalogue/table_reader.hpp>
 #include <bismar/error.hpp>
+#include <bismar/mechanics/section_builder.hpp>
 
 #include "catalogue/checked_cells.hpp"
 #include "catalogue/text.hpp"
@@ -33,7 +34,11 @@ constexpr std::array families = {SectionFamily::solid_round,
                                  SectionFamily::round_tube,
                                  SectionFamily::rectangular_tube,
                                  SectionFamily::i_section,
-                                 SectionFamily::channel};
+                                 SectionFamily::channel,
+                                 SectionFamily::solid_hexagon,
+                                 SectionFamily::elliptical_tube,
+                                 SectionFamily::tee,
+                                 SectionFamily::angle};
 
 bool contains(const std::vector<std::string>& words, std::string_view word) {
   return std::find(words.begin(), words.end(), word) != words.end();
@@ -44,52 +49,36 @@ bool contains(const std::vector<std::string>& words, std::string_view word) {
 class SectionCells {
  public:
   SectionCells(TableReader& table, SectionFamily family) : table_(table), family_(family) {
-    switch (family) {
-      case SectionFamily::solid_round:
-        require("diameter");
-        break;
-      case SectionFamily::solid_square:
-        require("side");
-        break;
-      case SectionFamily::solid_rectangle:
-      case SectionFamily::solid_ellipse:
-        require("height"), require("width");
-        break;
-      case SectionFamily::round_tube:
-        require("diameter"), require("wall");
-        break;
-      case SectionFamily::rectangular_tube:
-        require("height"), require("width"), require("wall");
-        outer_radius_ = table.number_column("outer radius", QuantityKind::length);
-        inner_radius_ = table.number_column("inner radius", QuantityKind::length);
-        break;
-      case SectionFamily::i_section:
-      case SectionFamily::channel:
-        require("height"), require("width"), require("web"), require("flange");
-        require("root radius");
-        break;
-    }
-    if (family == SectionFamily::channel) {
-      slope_ = table.number_column("flange slope", QuantityKind::ratio);
+    for (const SectionDimension& dimension : dimensions(family)) {
+      const bool optional = dimension.optional && !dimension.in_tables;
+      const auto kind = dimension.is_ratio ? QuantityKind::ratio : QuantityKind::length;
+      dimensions_.push_back(
+          {dimension.name,
+           table.number_column(
+               dimension.name, kind, optional ? Presence::optional : Presence::required),
+           optional});
     }
   }
 
   /// The section, or nothing where a cell has a fault or the dimensions make no section.
   std::optional<SectionProperties> read(std::size_t row, Forming forming) {
-    std::vector<double> d;
+    std::vector<std::optional<double>> d;
     for (const Dimension& dimension : dimensions_) {
+      if (dimension.optional) {
+        d.push_back(table_.value(row, dimension.column));
+        continue;
+      }
       if (!dimension.column.is_present()) {
         return std::nullopt;
       }
-      // No bounds here: the section refuses what it cannot have, and a sharp root is a radius of 0.
-      const std::optional<double> value = catalogue::needed_value(table_, row, dimension.column);
-      if (!value) {
+      // No bounds here: the section refuses what it cannot have.
+      d.push_back(catalogue::needed_value(table_, row, dimension.column));
+      if (!d.back()) {
         return std::nullopt;
       }
-      d.push_back(*value);
     }
     try {
-      SectionProperties section = make(row, d, forming);
+      SectionProperties section = make_section(family_, d, forming);
       section.forming = forming;
       return section;
     } catch (const Error& error) {
@@ -102,53 +91,8 @@ class SectionCells {
   struct Dimension {
     std::string_view name;
     catalogue::NumberColumn column;
+    bool optional = false;
   };
-
-  void require(std::string_view name) {
-    dimensions_.push_back(
-        {name, table_.number_column(name, QuantityKind::length, Presence::required)});
-  }
-
-  SectionProperties make(std::size_t row, const std::vector<double>& d, Forming forming) {
-    switch (family_) {
-      case SectionFamily::solid_round:
-        return solid_round(d[0]);
-      case SectionFamily::solid_square:
-        return solid_square(d[0]);
-      case SectionFamily::solid_rectangle:
-        return solid_rectangle(d[0], d[1]);
-      case SectionFamily::solid_ellipse:
-        return solid_ellipse(d[0], d[1]);
-      case SectionFamily::round_tube:
-        return round_tube(d[0], d[1], forming);
-      case SectionFamily::rectangular_tube:
-        return rectangular(row, d, forming);
-      case SectionFamily::i_section:
-        return i_section(d[0], d[1], d[2], d[3], d[4]);
-      case SectionFamily::channel:
-        return channel(d[0], d[1], d[2], d[3], d[4], table_.value(row, slope_).value_or(0.0));
-    }
-    throw InternalError("a section family that no list of sizes can have");
-  }
-
-  SectionProperties rectangular(std::size_t row, const std::vector<double>& d, Forming forming) {
-    const std::optional<double> outer = table_.value(row, outer_radius_);
-    const std::optional<double> inner = table_.value(row, inner_radius_);
-    if (outer.has_value() != inner.has_value()) {
-      const auto& given = outer ? outer_radius_ : inner_radius_;
-      table_.add_fault(row,
-                       given.index().value(),
-                       Code::missing,
-                       "outer and inner radius are given together or not at all.");
-    }
-    if (outer && inner) {
-      return rectangular_tube(d[0], d[1], d[2], *outer, *inner, forming);
-    }
-    const Corners corners = forming == Forming::hot_finished  ? Corners::en_10210
-                            : forming == Forming::cold_formed ? Corners::en_10219
-                                                              : Corners::sharp;
-    return rectangular_tube(d[0], d[1], d[2], corners, forming);
-  }
 
   /// What the section refuses, at the cell of the dimension that it names.
   void report(std::size_t row, const Error& error) {
@@ -157,7 +101,8 @@ class SectionCells {
           std::find_if(dimensions_.begin(), dimensions_.end(), [&](const Dimension& dimension) {
             return fault.where.find(dimension.name) != std::string::npos;
           });
-      const Dimension& at = named == dimensions_.end() ? dimensions_.front() : *named;
+      const bool has_cell = named != dimensions_.end() && named->column.is_present();
+      const Dimension& at = has_cell ? *named : dimensions_.front();
       table_.add_fault(row, at.column.index().value(), fault.code, fault.message);
     }
   }
@@ -165,7 +110,6 @@ class SectionCells {
   TableReader& table_;
   SectionFamily family_;
   std::vector<Dimension> dimensions_;
-  catalogue::NumberColumn outer_radius_, inner_radius_, slope_;
 };
 
 class StockReader {

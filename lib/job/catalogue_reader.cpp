@@ -53,7 +53,9 @@ std::string starter_folder() {
 std::vector<std::string> starter_files(const std::string& kind) {
   const fs::path folder = starter_folder();
   if (kind != "stock") {
-    return {(folder / (kind + ".csv")).string()};
+    std::string file = kind + ".csv";
+    std::replace(file.begin(), file.end(), '_', '-');  // "weld_zones" is weld-zones.csv
+    return {(folder / file).string()};
   }
   std::vector<std::string> files;
   std::error_code failure;
@@ -140,6 +142,7 @@ class CatalogueReader {
     read_list("routes", lists, job_.catalogue.routes, read_routes);
     read_list("finishes", lists, job_.catalogue.finishes, read_finishes);
     read_list("operations", lists, job_.catalogue.operations, read_operations);
+    read_list("weld_zones", lists, job_.catalogue.weld_zones, read_weld_zones);
     job_.catalogue.currency = job_.currency;
     job_.catalogue.warnings = unused_names(job_.catalogue);
   }

@@ -60,6 +60,9 @@ class JobReader {
   [[nodiscard]] std::optional<double> station(const JsonValue& load,
                                               std::string_view key,
                                               double length);
+  void read_own_mass(const JsonValue& value, LoadCase& load_case);
+  void read_details(const JsonValue& value, double length, MemberDetails& details);
+  [[nodiscard]] std::vector<SectionPoint> read_corners(const JsonValue& value);
   void read_limits(const JsonValue& value, Limits& limits);
   void read_property_limit(const JsonValue& value, Limits& limits);
   [[nodiscard]] std::optional<double> property_value(const JsonValue& value,

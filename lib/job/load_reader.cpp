@@ -13,8 +13,13 @@ namespace {
 using Kind = JsonValue::Kind;
 
 Support support_of(const std::string& word) {
-  return word == "pinned" ? Support::pinned_pinned : Support::cantilever;
+  return word == "pinned"         ? Support::pinned_pinned
+         : word == "fixed pinned" ? Support::fixed_pinned
+         : word == "fixed"        ? Support::fixed_fixed
+                                  : Support::cantilever;
 }
+
+constexpr double standard_gravity = 9.80665;  // [m/s^2], ISO 80000-3
 
 }  // namespace
 
@@ -30,7 +35,12 @@ void JobReader::read_load_case(const JsonValue& value, const Member& member, Loa
       load_case.support_y = support_of(text(*support, "y").value_or(""));
     }
   }
-  if (value.find("loads") == nullptr && value.find("direct") == nullptr) {
+  if (get(value, "second_support") != nullptr) {
+    load_case.second_support = station(value, "second_support", member.length);
+  }
+  read_own_mass(value, load_case);
+  const bool own_mass = load_case.acceleration_z > 0.0 || load_case.acceleration_y > 0.0;
+  if (value.find("loads") == nullptr && value.find("direct") == nullptr && !own_mass) {
     checker_.add(Code::missing,
                  value,
                  "",
@@ -68,9 +78,43 @@ void JobReader::read_load_case(const JsonValue& value, const Member& member, Loa
       }
     }
   }
+  set(load_case.eccentricity, value, "eccentricity", QuantityKind::length);
+  set(load_case.temperature_change,
+      value,
+      "temperature_change",
+      QuantityKind::temperature_difference);
+  set(load_case.restrained, value, "restrained");
+  if (const JsonValue* fatigue = get(value, "fatigue"); fatigue != nullptr) {
+    FatigueLoading loading;
+    set(loading.cycles, *fatigue, "cycles", QuantityKind::count);
+    set(loading.stress_ratio, *fatigue, "stress_ratio", QuantityKind::ratio);
+    load_case.fatigue = loading;
+  }
   set(load_case.duration, value, "duration", QuantityKind::time);
   set(load_case.hand_loaded, value, "hand_loaded");
   set(load_case.impact, value, "impact");
+}
+
+void JobReader::read_own_mass(const JsonValue& value, LoadCase& load_case) {
+  bool weight = false;
+  set(weight, value, "own_weight");
+  if (weight) {
+    load_case.acceleration_z = standard_gravity;
+  }
+  const JsonValue* acceleration = get(value, "acceleration");
+  if (acceleration == nullptr) {
+    return;
+  }
+  if (weight) {
+    checker_.add(Code::conflict,
+                 *acceleration,
+                 "",
+                 "own_weight or acceleration",
+                 "the own weight is an acceleration too. Give \"own_weight\", or one "
+                 "\"acceleration\" that has it in it.");
+  }
+  set(load_case.acceleration_z, *acceleration, "z", QuantityKind::acceleration);
+  set(load_case.acceleration_y, *acceleration, "y", QuantityKind::acceleration);
 }
 
 std::optional<double> JobReader::station(const JsonValue& load,

@@ -14,22 +14,6 @@ namespace {
 
 using Kind = JsonValue::Kind;
 
-/// A shape's tag in jobs, its family, and the words of its size and its wall ratio.
-struct ShapeWords {
-  std::string_view tag;
-  SectionFamily family;
-  std::string_view size;
-  std::string_view wall;
-};
-constexpr ShapeWords shape_words[] = {
-    {"round", SectionFamily::solid_round, "diameter", ""},
-    {"square", SectionFamily::solid_square, "side", ""},
-    {"rectangle", SectionFamily::solid_rectangle, "height", ""},
-    {"ellipse", SectionFamily::solid_ellipse, "height", ""},
-    {"round_tube", SectionFamily::round_tube, "diameter", "wall_to_diameter"},
-    {"rectangular_tube", SectionFamily::rectangular_tube, "height", "wall_to_height"},
-};
-
 std::vector<std::string_view> sorted(const std::set<std::string_view>& words) {
   return {words.begin(), words.end()};
 }
@@ -137,121 +121,23 @@ Part JobReader::read_part(const JsonValue& value) {
   return part;
 }
 
-void JobReader::read_member(const JsonValue& value, Member& member) {
-  set(member.length, value, "length", QuantityKind::length);
-  const JsonValue* shapes = get(value, "shapes");
-  const JsonValue* stock = get(value, "stock");
-  if (value.find("shapes") == nullptr && value.find("stock") == nullptr) {
-    checker_.add(Code::missing,
-                 value,
-                 "",
-                 "shapes or stock",
-                 "it is not said which sections to try. Give \"shapes\", \"stock\" or both.");
-  }
-  if (shapes != nullptr) {
-    for (const JsonValue& shape : shapes->items) {
-      read_shape(shape, member);
-    }
-  }
-  if (stock != nullptr) {
-    member.stock = stock->is(Kind::text) ? std::vector<std::string>{stock->text}
-                                         : names(value, "stock", "stock list", words_.stock);
-  }
-  if (const JsonValue* cases = get(value, "load_cases"); cases != nullptr) {
-    std::set<std::string> seen;
-    for (const JsonValue& item : cases->items) {
-      if (!item.is(Kind::object)) {
-        continue;
-      }
-      LoadCase load_case;
-      read_load_case(item, member, load_case);
-      if (!seen.insert(load_case.name).second) {
-        checker_.add(Code::duplicate,
-                     item,
-                     load_case.name,
-                     "a name of its own",
-                     "another load case is called \"" + load_case.name +
-                         "\" too. Give each its own \"name\".");
-      }
-      member.load_cases.push_back(std::move(load_case));
-    }
-  }
-}
-
-void JobReader::read_shape(const JsonValue& value, Member& member) {
-  if (!value.is(Kind::object) || !checker_.good(value)) {
-    return;
-  }
-  for (const ShapeWords& words : shape_words) {
-    const JsonValue* options = get(value, words.tag);
-    if (options == nullptr) {
-      continue;
-    }
-    Shape shape;
-    shape.family = words.family;
-    set(shape.height_to_width, *options, "height_to_width", QuantityKind::ratio);
-    if (!words.wall.empty()) {
-      set(shape.wall_to_height, *options, words.wall, QuantityKind::ratio);
-    }
-    if (const JsonValue* range = get(*options, words.size); range != nullptr) {
-      const QuantityRange read = parse_range(range->text, QuantityKind::length);
-      shape.height_min = read.low;
-      shape.height_max = read.high;
-    }
-    read_sizes(get(*options, "sizes"), shape, shape.sizes);
-    member.shapes.push_back(std::move(shape));
-  }
-}
-
-void JobReader::read_sizes(const JsonValue* value, const Shape& shape, Sizes& sizes) {
-  if (value == nullptr) {
-    return;
-  }
-  if (value->is(Kind::text)) {
-    sizes = value->text == "continuous" ? Sizes::any() : Sizes::preferred(value->text);
-  } else if (value->is(Kind::object)) {
-    if (const std::optional<double> step = quantity(*value, "step", QuantityKind::length)) {
-      sizes = Sizes::multiples_of(*step);
-    }
-  } else {
-    std::vector<double> list;
-    for (const JsonValue& item : value->items) {
-      const std::optional<double> size = quantity(item, QuantityKind::length);
-      if (!size.has_value()) {
-        continue;
-      }
-      if (*size < shape.height_min || *size > shape.height_max) {
-        checker_.add(Code::out_of_range,
-                     item,
-                     item.text,
-                     "a size within the bounds of the shape",
-                     item.text +
-                         " lies outside the bounds of the shape. Widen them or leave this "
-                         "size out.");
-      } else if (std::find(list.begin(), list.end(), *size) != list.end()) {
-        checker_.add(Code::duplicate,
-                     item,
-                     item.text,
-                     "each size once",
-                     "the size " + item.text + " stands twice in the list.");
-      } else {
-        list.push_back(*size);
-      }
-    }
-    sizes = Sizes::of(std::move(list));
-  }
-}
-
 void JobReader::read_limits(const JsonValue& value, Limits& limits) {
   set(limits.deflection, value, "deflection", QuantityKind::length);
+  set(limits.shear_deflection, value, "shear_deflection");
+  set(limits.rotation, value, "rotation", QuantityKind::angle);
   set(limits.twist, value, "twist", QuantityKind::angle);
+  set(limits.frequency, value, "frequency", QuantityKind::frequency);
+  set(limits.elongation, value, "elongation", QuantityKind::length);
   set(limits.height, value, "height", QuantityKind::length);
   set(limits.width, value, "width", QuantityKind::length);
   set(limits.wall, value, "wall", QuantityKind::length);
   set(limits.slenderness, value, "slenderness", QuantityKind::ratio);
-  if (text(value, "column_method") == "euler") {
-    limits.column_method = ColumnMethod::euler;
+  if (const std::optional<std::string> method = text(value, "column_method")) {
+    limits.column_method = *method == "euler"     ? ColumnMethod::euler
+                           : *method == "johnson" ? ColumnMethod::johnson
+                                                  : ColumnMethod::curves;
   }
+  set(limits.lateral_restraint, value, "lateral_restraint");
   set(limits.mass, value, "mass", QuantityKind::mass);
   set(limits.cost, value, "cost", QuantityKind::money);
   limits.routes = names(value, "routes", "primary route", words_.routes);

@@ -209,6 +209,9 @@ class ResultReader {
     for (const JsonValue& plate : list(value, "plates")) {
       section.plates.push_back({word(plate, "kind", detail::plate_words), number(plate, "ratio")});
     }
+    for (const JsonValue& fibre : list(value, "fibres")) {
+      section.fibres.push_back({number(fibre, "y"), number(fibre, "z")});
+    }
     return section;
   }
 

@@ -69,7 +69,7 @@ struct SectionNumber {
   std::string_view name;
   double SectionProperties::*field;
 };
-inline constexpr std::array<SectionNumber, 19> section_numbers{{
+inline constexpr std::array<SectionNumber, 26> section_numbers{{
     {"height", &SectionProperties::height},
     {"width", &SectionProperties::width},
     {"wall", &SectionProperties::wall},
@@ -79,14 +79,21 @@ inline constexpr std::array<SectionNumber, 19> section_numbers{{
     {"area", &SectionProperties::area},
     {"I_y", &SectionProperties::I_y},
     {"I_z", &SectionProperties::I_z},
+    {"I_yz", &SectionProperties::I_yz},
     {"W_el_y", &SectionProperties::W_el_y},
     {"W_el_z", &SectionProperties::W_el_z},
     {"W_pl_y", &SectionProperties::W_pl_y},
     {"W_pl_z", &SectionProperties::W_pl_z},
     {"I_t", &SectionProperties::I_t},
     {"W_t", &SectionProperties::W_t},
+    {"I_w", &SectionProperties::I_w},
+    {"y_shear", &SectionProperties::y_shear},
+    {"z_shear", &SectionProperties::z_shear},
     {"A_v_y", &SectionProperties::A_v_y},
     {"A_v_z", &SectionProperties::A_v_z},
+    {"A_s_y", &SectionProperties::A_s_y},
+    {"A_s_z", &SectionProperties::A_s_z},
+    {"A_v_flange", &SectionProperties::A_v_flange},
     {"junction_ratio", &SectionProperties::junction_ratio},
     {"A_v_junction", &SectionProperties::A_v_junction},
 }};

@@ -53,6 +53,10 @@ Json section_json(const SectionProperties& section) {
     json["plates"].push_back({{"kind", std::string(word_of(detail::plate_words, plate.kind))},
                               {"ratio", number(plate.ratio)}});
   }
+  json["fibres"] = Json::array();
+  for (const SectionPoint& fibre : section.fibres) {
+    json["fibres"].push_back({{"y", number(fibre.y)}, {"z", number(fibre.z)}});
+  }
   return json;
 }
 

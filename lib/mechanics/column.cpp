@@ -96,14 +96,20 @@ BucklingCurve buckling_curve(const SectionProperties& section, BendingAxis axis)
       return section.forming == Forming::hot_finished ? rolled_i_curve(section, axis)
                                                       : BucklingCurve::c;
     case SectionFamily::round_tube:
+    case SectionFamily::elliptical_tube:
     case SectionFamily::rectangular_tube:
       return section.forming == Forming::hot_finished ? BucklingCurve::a : BucklingCurve::c;
     case SectionFamily::solid_round:
     case SectionFamily::solid_square:
     case SectionFamily::solid_rectangle:
     case SectionFamily::solid_ellipse:
+    case SectionFamily::solid_hexagon:
     case SectionFamily::channel:
+    case SectionFamily::tee:
+    case SectionFamily::polygon:
       return BucklingCurve::c;
+    case SectionFamily::angle:
+      return BucklingCurve::b;
   }
   throw InternalError("section family without a buckling curve");
 }

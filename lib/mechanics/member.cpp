@@ -74,20 +74,32 @@ double lever_force_from_preload(double torque_factor, double preload, double dia
   return torque_factor * preload * diameter / arm;
 }
 
-LoadCase cantilever(std::vector<Load> loads, std::string name) {
+namespace {
+
+LoadCase held_alike(Support support, std::vector<Load> loads, std::string name) {
   LoadCase load_case;
   load_case.name = std::move(name);
-  load_case.support_z = load_case.support_y = Support::cantilever;
+  load_case.support_z = load_case.support_y = support;
   load_case.loads = std::move(loads);
   return load_case;
 }
 
+}  // namespace
+
+LoadCase cantilever(std::vector<Load> loads, std::string name) {
+  return held_alike(Support::cantilever, std::move(loads), std::move(name));
+}
+
 LoadCase pinned_pinned(std::vector<Load> loads, std::string name) {
-  LoadCase load_case;
-  load_case.name = std::move(name);
-  load_case.support_z = load_case.support_y = Support::pinned_pinned;
-  load_case.loads = std::move(loads);
-  return load_case;
+  return held_alike(Support::pinned_pinned, std::move(loads), std::move(name));
+}
+
+LoadCase fixed_pinned(std::vector<Load> loads, std::string name) {
+  return held_alike(Support::fixed_pinned, std::move(loads), std::move(name));
+}
+
+LoadCase fixed_fixed(std::vector<Load> loads, std::string name) {
+  return held_alike(Support::fixed_fixed, std::move(loads), std::move(name));
 }
 
 }  // namespace bismar

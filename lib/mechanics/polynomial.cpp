@@ -2,6 +2,7 @@
 #include "mechanics/polynomial.hpp"
 
 #include <algorithm>
+#include <cmath>
 #include <cstddef>
 #include <vector>
 
@@ -68,6 +69,14 @@ std::vector<double> sign_changes(const Polynomial& p, double length) {
     left = right;
   }
   return found;
+}
+
+double largest(const Polynomial& p, double length) {
+  double value = std::max(std::abs(p(0.0)), std::abs(p(length)));
+  for (const double x : sign_changes(p.derivative(), length)) {
+    value = std::max(value, std::abs(p(x)));
+  }
+  return value;
 }
 
 }  // namespace bismar::mechanics

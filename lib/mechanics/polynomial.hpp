@@ -25,4 +25,7 @@ struct BISMAR_API Polynomial {
 /// at which p touches zero without a change of sign are not returned.
 [[nodiscard]] BISMAR_API std::vector<double> sign_changes(const Polynomial& p, double length);
 
+/// Largest |p| on [0, length].
+[[nodiscard]] BISMAR_API double largest(const Polynomial& p, double length);
+
 }  // namespace bismar::mechanics

@@ -13,19 +13,37 @@ namespace bismar {
 
 namespace {
 
-constexpr std::array<std::string_view, 8> family_names = {"solid round",
-                                                          "solid square",
-                                                          "solid rectangle",
-                                                          "solid ellipse",
-                                                          "round tube",
-                                                          "rectangular tube",
-                                                          "I section",
-                                                          "channel"};
+constexpr std::array<std::string_view, 13> family_names = {"solid round",
+                                                           "solid square",
+                                                           "solid rectangle",
+                                                           "solid ellipse",
+                                                           "round tube",
+                                                           "rectangular tube",
+                                                           "I section",
+                                                           "channel",
+                                                           "solid hexagon",
+                                                           "elliptical tube",
+                                                           "T section",
+                                                           "angle",
+                                                           "polygon"};
 
 }  // namespace
 
 double SectionProperties::i_y() const { return std::sqrt(I_y / area); }
 double SectionProperties::i_z() const { return std::sqrt(I_z / area); }
+
+double SectionProperties::I_u() const {
+  return (I_y + I_z) / 2.0 + std::hypot((I_y - I_z) / 2.0, I_yz);
+}
+
+double SectionProperties::I_v() const {
+  // I_u I_v = I_y I_z - I_yz^2; the difference of near equals is avoided.
+  return (I_y * I_z - I_yz * I_yz) / I_u();
+}
+
+double SectionProperties::principal_angle() const {
+  return std::atan2(-2.0 * I_yz, I_y - I_z) / 2.0;
+}
 
 std::string_view name(SectionFamily family) {
   const auto index = static_cast<std::size_t>(family);

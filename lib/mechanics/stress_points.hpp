@@ -13,14 +13,23 @@ namespace bismar::mechanics {
 
 /// Elastic stresses that one station's forces cause, each at its own worst point [Pa].
 struct StationStresses {
-  double axial = 0.0;      ///< N/A, tension positive.
-  double bending_y = 0.0;  ///< |M_y| / W_el,y
-  double bending_z = 0.0;  ///< |M_z| / W_el,z
-  double bending = 0.0;    ///< Both, summed or as the root of the sum of squares by the outline.
-  double shear_y = 0.0;    ///< |V_y| / A_v,y
-  double shear_z = 0.0;    ///< |V_z| / A_v,z
-  double torsion = 0.0;    ///< |T| / W_t
+  double axial = 0.0;          ///< N/A, tension positive.
+  double bending_y = 0.0;      ///< |M_y| / W_el,y, or |M_y|'s largest at any fibre.
+  double bending_z = 0.0;      ///< |M_z| / W_el,z, or |M_z|'s largest at any fibre.
+  double bending = 0.0;        ///< Both together at their worst point.
+  double shear_y = 0.0;        ///< |V_y| / A_v,y
+  double shear_z = 0.0;        ///< |V_z| / A_v,z
+  double torsion = 0.0;        ///< |T| / W_t
+  double flange_shear = 0.0;   ///< |V_z| / A_v,flange: along a flange, beside the web.
+  double web_bending_z = 0.0;  ///< Channel: |M_z|'s stress at the back of the web.
 };
+
+/// The stresses of one station.
+///
+/// Bending of both axes: where the section lists fibres, the askew bending stress
+///     sigma = [M_y (I_z z - I_yz y) + M_z (I_y y - I_yz z)] / (I_y I_z - I_yz^2)
+/// at each of them, the moments taken with the signs that are worst there; of a smooth outline the
+/// root of the sum of squares; otherwise the sum.
 [[nodiscard]] BISMAR_API StationStresses station_stresses(const SectionProperties& section,
                                                           const InternalForces& forces);
 
@@ -35,7 +44,8 @@ struct StressPoint {
 };
 using StressPoints = std::array<StressPoint, 5>;
 
-/// The points that bound the section: extreme fibre, both neutral axes, centre, junction.
+/// The points that bound the section: extreme fibre, both neutral axes, centre, junction. A section
+/// uses as many of them as it needs; the others stay zero.
 ///
 /// The peak torsion stress is taken everywhere, which is exact for round sections and on the safe
 /// side for the rest (a rectangle has no torsion stress in its corners).
@@ -48,6 +58,22 @@ using StressPoints = std::array<StressPoint, 5>;
 /// and largest at an end. In the wall of a round tube the shear stress is v c with c^2 + s^2 = 1;
 /// the bound is then a parabola in c whose crest, where it lies inside, adds `extra` at the extreme
 /// fibre.
+///
+/// Where that argument needs more than the peak stresses:
+/// - I, channel, T: the flow along a flange, largest beside the web and taken everywhere in it,
+/// joins
+///   the full bending stress.
+/// - T: the shear stress in the stem is a parabola over the distance from the neutral axis to the
+///   tip, up to the flange; so no junction is needed.
+/// - Channel: a y load's flow turns into the web and is largest at its ends; it is taken all along
+///   the web, with the bending stress that M_z has there.
+/// - Angle in one plane of loads: in each leg sigma is linear and tau = k (sigma_tip^2 - sigma^2),
+///   so that the bound is convex in sigma^2 and largest at a tip, at a neutral axis, or at the
+///   heel, which lies on the curve of the leg that the neutral axis cuts. In two planes the peaks
+///   may meet.
+/// - Hexagon: z loads have tau <= v and <= v (1 - s^2) / (1 - w), w = 0.3007, with v the peak, so
+///   that the bound is largest at s^2 = w or at the end.
+/// - Elliptical tube, polygon: peak shear, summed over both planes, with full bending.
 [[nodiscard]] BISMAR_API StressPoints stress_points(const SectionProperties& section,
                                                     const StationStresses& stresses);
 

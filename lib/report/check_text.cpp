@@ -38,12 +38,29 @@ std::string shape_text(const Shape& shape) {
   std::string out(name(shape.family));
   if (shape.height_to_width) out += ", height/width " + report::exact(*shape.height_to_width);
   if (shape.wall_to_height) out += ", wall/height " + report::exact(*shape.wall_to_height);
+  if (shape.web_to_height) out += ", web/height " + report::exact(*shape.web_to_height);
+  if (shape.flange_to_height) out += ", flange/height " + report::exact(*shape.flange_to_height);
+  if (shape.root_radius_to_height) {
+    out += ", root radius/height " + report::exact(*shape.root_radius_to_height);
+  }
+  if (!shape.outline.empty()) out += " of " + report::count(shape.outline.size()) + " corners";
+  if (!shape.holes.empty()) out += " with " + report::count(shape.holes.size()) + " holes";
   return out + ", height " + number(shape.height_min * 1e3) + " to " + mm(shape.height_max) + ", " +
          sizes_text(shape.sizes);
 }
 
 std::string_view support_text(Support support) {
-  return support == Support::cantilever ? "cantilever, fixed at x = 0" : "pinned at both ends";
+  switch (support) {
+    case Support::cantilever:
+      return "cantilever, fixed at x = 0";
+    case Support::pinned_pinned:
+      return "pinned at both ends";
+    case Support::fixed_pinned:
+      return "fixed at x = 0, pinned at the end";
+    case Support::fixed_fixed:
+      return "fixed at both ends";
+  }
+  return {};
 }
 
 std::string load_text(const Load& load) {
@@ -74,12 +91,32 @@ std::vector<std::string> load_case_lines(const LoadCase& load_case) {
     support += " for loads along y";
   }
   lines.push_back(std::move(support));
+  if (load_case.second_support) {
+    lines.push_back("second support at " + mm(*load_case.second_support) + ", overhang beyond");
+  }
   for (const Load& load : load_case.loads) lines.push_back(load_text(load));
+  if (load_case.acceleration_z > 0.0) {
+    lines.push_back("own mass, " + number(load_case.acceleration_z) + " m/s2 along z");
+  }
+  if (load_case.acceleration_y > 0.0) {
+    lines.push_back("own mass, " + number(load_case.acceleration_y) + " m/s2 along y");
+  }
   if (load_case.direct) {
     const InternalForces& f = *load_case.direct;
     lines.push_back("direct N " + number(f.N) + " N, V_y " + number(f.V_y) + " N, V_z " +
                     number(f.V_z) + " N, M_y " + number(f.M_y) + " N.m, M_z " + number(f.M_z) +
                     " N.m, T " + number(f.T) + " N.m");
+  }
+  if (load_case.eccentricity) {
+    lines.push_back("compression off centre by " + mm(*load_case.eccentricity));
+  }
+  if (load_case.temperature_change != 0.0) {
+    lines.push_back("temperature change " + number(load_case.temperature_change) + " K" +
+                    (load_case.restrained ? ", ends restrained" : ""));
+  }
+  if (load_case.fatigue) {
+    lines.push_back(number(load_case.fatigue->cycles) + " cycles at stress ratio " +
+                    number(load_case.fatigue->stress_ratio));
   }
   for (const auto& [limit, factor] : load_case.factors) {
     lines.push_back("factor " + report::exact(factor) + " on " + limit);
@@ -115,16 +152,52 @@ class Facts {
       {{"what", report::Align::left, false}, {"as read", report::Align::left, true}}};
 };
 
+void add_details(Facts& facts, const MemberDetails& details) {
+  const MemberDetails plain;
+  const auto factor = [&](const std::string& what, double value, double usual) {
+    if (value != usual) facts.add(what, report::exact(value));
+  };
+  factor("net area", details.net_area, plain.net_area);
+  factor("net modulus", details.net_modulus, plain.net_modulus);
+  factor("stress concentration, axial", details.k_t_axial, plain.k_t_axial);
+  factor("stress concentration, bending", details.k_t_bending, plain.k_t_bending);
+  factor("stress concentration, torsion", details.k_t_torsion, plain.k_t_torsion);
+  facts.add_length("notch radius", details.notch_radius);
+  if (details.welded) facts.add("weld", "across the member where it is most stressed");
+  if (details.detail_category) {
+    facts.add("detail category", number(*details.detail_category * 1e-6) + " MPa");
+  }
+  if (details.crack) {
+    const Crack& crack = *details.crack;
+    facts.add("crack",
+              crack.kind == Crack::Kind::edge
+                  ? "edge, " + mm(crack.depth) + " deep"
+                  : "surface, " + mm(crack.depth) + " deep, " + mm(2.0 * crack.half_length) +
+                        " long");
+  }
+  for (const AttachedMass& mass : details.masses) {
+    facts.add("carried mass", number(mass.mass) + " kg at " + mm(mass.at));
+  }
+}
+
 void add_limits(Facts& facts, const Limits& limits, const std::string& currency) {
-  facts.add_length("deflection at most", limits.deflection);
+  facts.add_length(
+      limits.shear_deflection ? "deflection with shear at most" : "deflection at most",
+      limits.deflection);
+  if (limits.rotation) facts.add("rotation at most", number(*limits.rotation) + " rad");
   if (limits.twist) facts.add("twist at most", number(*limits.twist) + " rad");
+  if (limits.frequency) facts.add("natural frequency at least", number(*limits.frequency) + " Hz");
+  facts.add_length("elongation at most", limits.elongation);
   facts.add_length("height at most", limits.height);
   facts.add_length("width at most", limits.width);
   facts.add_length("wall at least", limits.wall);
   facts.add("slenderness at most", report::exact(limits.slenderness) + " (members in compression)");
   if (limits.column_method == ColumnMethod::euler) {
     facts.add("columns", "Euler load alone, as asked: no imperfection, no yielding");
+  } else if (limits.column_method == ColumnMethod::johnson) {
+    facts.add("columns", "Johnson's parabola and Euler's curve, as asked: no imperfection");
   }
+  if (limits.lateral_restraint) facts.add("held across", "no lateral-torsional buckling");
   if (limits.mass) facts.add("mass at most", number(*limits.mass) + " kg");
   if (limits.cost) facts.add("cost at most", report::money(*limits.cost) + " " + currency);
   facts.add_list("only routes", limits.routes);
@@ -175,6 +248,7 @@ std::string check_text(const Part& part, const Catalogue& catalogue, const TextO
     }
     facts.add("load case " + load_case.name, std::move(lines));
   }
+  add_details(facts, part.body.details);
   add_limits(facts, part.limits, catalogue.currency);
   facts.add_list("finishes to try", part.finishes);
   for (const OperationUse& use : part.operations) {

@@ -3,6 +3,8 @@
 #include <array>
 #include <cmath>
 #include <numbers>
+#include <span>
+#include <vector>
 
 #include <bismar/error.hpp>
 #include <bismar/report/table.hpp>
@@ -28,11 +30,14 @@ const Pen outline{.colour = theme::ink, .width = 1.6, .round = true};
 std::string mm(double metres) { return report::tick_text(metres * 1e3) + " mm"; }
 
 bool is_hollow(const SectionProperties& s) {
-  return s.family == SectionFamily::round_tube || s.family == SectionFamily::rectangular_tube;
+  return s.family == SectionFamily::round_tube || s.family == SectionFamily::rectangular_tube ||
+         s.family == SectionFamily::elliptical_tube;
 }
 
+// Drawn from its thicknesses, without radii.
 bool is_profile(const SectionProperties& s) {
-  return s.family == SectionFamily::i_section || s.family == SectionFamily::channel;
+  return s.family == SectionFamily::i_section || s.family == SectionFamily::channel ||
+         s.family == SectionFamily::tee || s.family == SectionFamily::angle;
 }
 
 // A rounded rectangle has the perimeter 2 (h + b) - (8 - 2 pi) r.
@@ -57,51 +62,85 @@ std::string rounded_path(const Box& box, double radius) {
   return path + "Z";
 }
 
-// Flange thickness that gives the area, without root radii: A = 2 b t + (h - 2 t) w.
+// Flange thickness that gives the area, without root radii: A = n b t + (h - n t) w.
 double flange_thickness(const SectionProperties& s) {
-  const double spread = 2.0 * (s.width - s.wall);
+  const double flanges = s.family == SectionFamily::tee ? 1.0 : 2.0;
+  const double spread = flanges * (s.width - s.wall);
   if (!(spread > 0.0)) return s.wall;
   return std::clamp((s.area - s.height * s.wall) / spread, s.wall * 0.5, 0.45 * s.height);
 }
 
-// Distance of the centroid from the left edge [m]; only a channel is not symmetric about z.
-double centroid_from_left(const SectionProperties& s) {
-  if (s.family != SectionFamily::channel) return 0.5 * s.width;
-  const double flange = flange_thickness(s);
-  const double flanges = 2.0 * s.width * flange;
-  const double web = (s.height - 2.0 * flange) * s.wall;
-  return (flanges * 0.5 * s.width + web * 0.5 * s.wall) / (flanges + web);
+// Corners of a profile in fractions of a metre, from the lower left corner of its envelope.
+std::vector<SectionPoint> profile_corners(const SectionProperties& s) {
+  const double b = s.width;
+  const double h = s.height;
+  const double w = s.wall;
+  const double t = flange_thickness(s);
+  const double left = 0.5 * (b - w);
+  const double right = 0.5 * (b + w);
+  switch (s.family) {
+    case SectionFamily::channel:
+      return {{0, 0}, {b, 0}, {b, t}, {w, t}, {w, h - t}, {b, h - t}, {b, h}, {0, h}};
+    case SectionFamily::tee:
+      return {{left, 0},
+              {right, 0},
+              {right, h - t},
+              {b, h - t},
+              {b, h},
+              {0, h},
+              {0, h - t},
+              {left, h - t}};
+    case SectionFamily::angle:
+      return {{0, 0}, {b, 0}, {b, w}, {w, w}, {w, h}, {0, h}};
+    default:
+      return {{0, 0},
+              {b, 0},
+              {b, t},
+              {right, t},
+              {right, h - t},
+              {b, h - t},
+              {b, h},
+              {0, h},
+              {0, h - t},
+              {left, h - t},
+              {left, t},
+              {0, t}};
+  }
 }
 
-void draw_profile(Svg& svg, const SectionProperties& s, const Box& box, double scale) {
-  const double flange = flange_thickness(s) * scale;
-  const double web = s.wall * scale;
-  const double mid = box.centre().x;
-  if (s.family == SectionFamily::channel) {
-    const std::array<Point, 8> points = {{{box.x, box.y},
-                                          {box.right(), box.y},
-                                          {box.right(), box.y + flange},
-                                          {box.x + web, box.y + flange},
-                                          {box.x + web, box.bottom() - flange},
-                                          {box.right(), box.bottom() - flange},
-                                          {box.right(), box.bottom()},
-                                          {box.x, box.bottom()}}};
-    svg.polygon(points, theme::tint, outline);
-    return;
+// Centroid from the lower left corner of the envelope [m]: its lowest and leftmost fibre tell it.
+SectionPoint centroid_of(const SectionProperties& s) {
+  SectionPoint centroid{0.5 * s.width, 0.5 * s.height};
+  if (s.fibres.empty()) return centroid;
+  centroid = {0.0, 0.0};
+  for (const SectionPoint& fibre : s.fibres) {
+    centroid.y = std::max(centroid.y, -fibre.y);
+    centroid.z = std::max(centroid.z, -fibre.z);
   }
-  const std::array<Point, 12> points = {{{box.x, box.y},
-                                         {box.right(), box.y},
-                                         {box.right(), box.y + flange},
-                                         {mid + 0.5 * web, box.y + flange},
-                                         {mid + 0.5 * web, box.bottom() - flange},
-                                         {box.right(), box.bottom() - flange},
-                                         {box.right(), box.bottom()},
-                                         {box.x, box.bottom()},
-                                         {box.x, box.bottom() - flange},
-                                         {mid - 0.5 * web, box.bottom() - flange},
-                                         {mid - 0.5 * web, box.y + flange},
-                                         {box.x, box.y + flange}}};
+  return centroid;
+}
+
+void draw_corners(Svg& svg, std::span<const SectionPoint> corners, const Box& box, double scale) {
+  std::vector<Point> points;
+  for (const SectionPoint& corner : corners) {
+    points.push_back({box.x + corner.y * scale, box.bottom() - corner.z * scale});
+  }
   svg.polygon(points, theme::tint, outline);
+}
+
+// A regular hexagon with its flats level, and the convex outline of a polygon.
+std::vector<SectionPoint> solid_corners(const SectionProperties& s) {
+  if (s.family == SectionFamily::solid_hexagon) {
+    const double b = s.width;
+    const double h = s.height;
+    return {{0.25 * b, 0}, {0.75 * b, 0}, {b, 0.5 * h}, {0.75 * b, h}, {0.25 * b, h}, {0, 0.5 * h}};
+  }
+  const SectionPoint centroid = centroid_of(s);
+  std::vector<SectionPoint> corners;
+  for (const SectionPoint& fibre : s.fibres) {
+    corners.push_back({fibre.y + centroid.y, fibre.z + centroid.z});
+  }
+  return corners;
 }
 
 void draw_outline(Svg& svg, const SectionProperties& s, const Box& box, double scale) {
@@ -117,6 +156,7 @@ void draw_outline(Svg& svg, const SectionProperties& s, const Box& box, double s
       svg.rectangle(box, theme::tint, outline);
       return;
     case SectionFamily::round_tube:
+    case SectionFamily::elliptical_tube:
       svg.ellipse(centre, 0.5 * box.width, 0.5 * box.height, theme::tint, outline);
       svg.ellipse(centre, 0.5 * box.width - t, 0.5 * box.height - t, theme::paper, outline);
       return;
@@ -130,7 +170,13 @@ void draw_outline(Svg& svg, const SectionProperties& s, const Box& box, double s
     }
     case SectionFamily::i_section:
     case SectionFamily::channel:
-      draw_profile(svg, s, box, scale);
+    case SectionFamily::tee:
+    case SectionFamily::angle:
+      draw_corners(svg, profile_corners(s), box, scale);
+      return;
+    case SectionFamily::solid_hexagon:
+    case SectionFamily::polygon:
+      draw_corners(svg, solid_corners(s), box, scale);
       return;
   }
 }
@@ -228,16 +274,20 @@ std::string section_svg(const SectionProperties& s, const SectionPictureOptions&
   draw_dimension(svg, {box.x, below}, {box.right(), below}, mm(s.width), false);
 
   draw_outline(svg, s, box, scale);
-  const Point centroid{box.x + centroid_from_left(s) * scale, box.centre().y};
+  const SectionPoint offset = centroid_of(s);
+  const Point centroid{box.x + offset.y * scale, box.bottom() - offset.z * scale};
   draw_axes(svg, box, centroid, options);
   if (is_hollow(s) || is_profile(s)) {
-    const std::string text = (is_hollow(s) ? "wall " : "web ") + mm(s.wall);
+    const std::string text =
+        (is_hollow(s) || s.family == SectionFamily::angle ? "wall " : "web ") + mm(s.wall);
     const double t = s.wall * scale;
     const double level = box.centre().y + 0.16 * h;
     Point on{box.right() - 0.5 * t, level};
     if (s.family == SectionFamily::i_section) on.x = box.centre().x;
+    if (s.family == SectionFamily::tee) on.x = box.centre().x;
     if (s.family == SectionFamily::channel) on.x = box.x + 0.5 * t;
-    if (s.family == SectionFamily::round_tube) {
+    if (s.family == SectionFamily::angle) on = {box.right() - 0.3 * w, box.bottom() - 0.5 * t};
+    if (s.family == SectionFamily::round_tube || s.family == SectionFamily::elliptical_tube) {
       // On the middle of the wall at that level.
       const double rise = 0.16 * h / (0.5 * h - 0.5 * t);
       on.x = box.centre().x + (0.5 * w - 0.5 * t) * std::sqrt(std::max(0.0, 1.0 - rise * rise));
@@ -257,7 +307,11 @@ std::string section_svg(const SectionProperties& s, const SectionPictureOptions&
   };
   std::string facts = std::string("to scale; x points at the reader");
   if (is_profile(s)) {
-    facts += "; flange drawn so that the area is right, root radii left out";
+    facts += s.family == SectionFamily::angle
+                 ? "; radii left out"
+                 : "; flange drawn so that the area is right, root radii left out";
+  } else if (s.family == SectionFamily::polygon) {
+    facts += "; convex outline, recesses and holes left out";
   }
   note(facts, 10.5);
   y += 3.0;

@@ -364,8 +364,8 @@ std::string front_text(const Result& result,
     if (!factors.empty()) out += paragraph(factors, options.width, 2);
     // Said every time: a limit that nobody checked looks like one that is met.
     out += paragraph(
-        "Not checked by this version: self-weight, lateral-torsional and torsional buckling, "
-        "fatigue, fracture, vibration, joints, and whatever the job does not name.",
+        "Not checked: joints, wear, resonance beyond the first frequency, and whatever the job does "
+        "not name (own weight, fatigue, cracks, heat and vibration are checked where it names them).",
         options.width,
         2);
   }

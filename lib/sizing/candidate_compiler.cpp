@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/candidate_compiler.hpp"
 
+#include "sizing/derating.hpp"
 #include "sizing/words.hpp"
 
 #include <bismar/error.hpp>
@@ -49,45 +50,6 @@ double limited_end(const PropertyReader& reader,
   }
   return at_least ? range.low : range.high;
 }
-
-SectionProperties section_of(const Shape& shape, const Route& route, double height) {
-  const double width = height / shape.height_to_width.value_or(1.0);
-  const double wall = height * shape.wall_to_height.value_or(0.0);
-  const bool rolled = contains_word(route.leaves, "welded tube");
-  const bool drawn = contains_word(route.leaves, "tube");
-  const Forming forming = rolled  ? Forming::cold_formed
-                          : drawn ? Forming::extruded
-                                  : Forming::unknown;
-  switch (shape.family) {
-    case SectionFamily::solid_round:
-      return solid_round(height);
-    case SectionFamily::solid_square:
-      return solid_square(height);
-    case SectionFamily::solid_rectangle:
-      return solid_rectangle(height, width);
-    case SectionFamily::solid_ellipse:
-      return solid_ellipse(height, width);
-    case SectionFamily::round_tube:
-      return round_tube(height, wall, forming);
-    case SectionFamily::rectangular_tube:
-      return rectangular_tube(
-          height, width, wall, rolled ? Corners::en_10219 : Corners::sharp, forming);
-    case SectionFamily::i_section:
-    case SectionFamily::channel:
-      break;
-  }
-  throw InternalError("section_of: a shape without one free size passed the checks");
-}
-
-namespace {
-
-/// The section at height 1 m with sharp corners: its ratios, whatever corners the real wall allows.
-SectionProperties proportions(const Shape& shape) {
-  Route any;
-  return section_of(shape, any, 1.0);
-}
-
-}  // namespace
 
 CandidateCompiler::CandidateCompiler(SizingProblem& problem, const Candidate& candidate)
     : problem_(problem),
@@ -165,7 +127,8 @@ void CandidateCompiler::shape_pieces() {
   const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
   const double lower = shape.height_min;
   const double upper = shape.height_max;
-  const auto unit = proportions(shape);
+  // Its ratios, with sharp corners: whatever corners the real wall allows.
+  const auto unit = problem_.section_of(out_->candidate.shape, Route{}, 1.0);
   const double thickness_per_height = strength_thickness(unit);
   const bool machined = machines_blank(route_);
 
@@ -210,7 +173,7 @@ void CandidateCompiler::shape_pieces() {
     piece.upper = to;
     piece.size = to;
     try {
-      piece.section = section_of(shape, route_, to);
+      piece.section = problem_.section_of(out_->candidate.shape, route_, to);
     } catch (const Error&) {
       // The corner radii that the standard gives this wall leave no flat side: all sizes of the
       // piece have the same ratios, so none of them exists.
@@ -244,9 +207,9 @@ std::vector<double> CandidateCompiler::sheet_sizes() const {
   const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
   // The wall of a rolled tube, or the smaller dimension of a flat part, is the thickness of the
   // sheet.
-  const double height_per_thickness = shape.wall_to_height
-                                          ? 1.0 / *shape.wall_to_height
-                                          : std::max(shape.height_to_width.value_or(1.0), 1.0);
+  const auto& wall = shape.wall_to_height ? shape.wall_to_height : shape.web_to_height;
+  const double height_per_thickness =
+      wall ? 1.0 / *wall : std::max(shape.height_to_width.value_or(1.0), 1.0);
   std::vector<double> out;
   for (const auto& list : problem_.catalogue().stock) {
     if (!list.sheet) {
@@ -408,7 +371,10 @@ void CandidateCompiler::add_limit_states() {
       constraint.load_case = c;
       constraint.trend = state->trend_with_scale();
       constraint.label = std::string(state->id());
-      const auto own = cases[c].factors.find(constraint.label);
+      auto own = cases[c].factors.find(constraint.label);
+      if (own == cases[c].factors.end() && constraint.label == "deflection with shear") {
+        own = cases[c].factors.find("deflection");  // the same limit, its shear part included
+      }
       constraint.factor = own != cases[c].factors.end()
                               ? own->second
                               : state->default_factor(first->step->cases[c].member);
@@ -432,12 +398,26 @@ std::vector<std::string> CandidateCompiler::open_limits(const StepState& step) c
     // Timber in or at water is service class 3 of EN 1995-1-1, for which the table has no factors.
     out.emplace_back("k_mod in service class 3");
   }
-  if (limits.temperature && !highest_temperature(problem_.reader(), material_, step.row)) {
-    out.emplace_back("maximum loaded temperature");
+  const MemberDetails& details = problem_.part().body.details;
+  const auto& cases = problem_.part().body.load_cases;
+  const bool weld_tires = (details.welded || details.detail_category) &&
+                          std::any_of(cases.begin(), cases.end(), [](const LoadCase& one) {
+                            return one.fatigue.has_value();
+                          });
+  if (weld_tires && !is_steel(material_)) {
+    out.emplace_back("fatigue strength of a weld");  // EN 1993-1-9 is for steel
   }
-  if (limits.temperature && *limits.temperature > 373.15 && is_metal(material_.material_class) &&
-      !problem_.reader().value(Property::loaded_temperature_max, step.row)) {
-    out.emplace_back("strength above 100 C");
+  if (limits.temperature) {
+    const auto highest = highest_temperature(problem_.reader(),
+                                             material_,
+                                             step.row,
+                                             *limits.temperature,
+                                             problem_.part().body.load_cases);
+    if (!highest) {
+      out.emplace_back("maximum loaded temperature");
+    } else if (*limits.temperature > *highest && *highest == room_values_up_to) {
+      out.emplace_back("strength above 100 C");
+    }
   }
   return out;
 }

@@ -74,6 +74,26 @@ void add_utilisations(const SizingProblem& problem,
   }
 }
 
+/// Slender, bent about the strong axis, free to move across, and of a family that the limit state
+/// of lateral-torsional buckling has no formula for.
+bool may_buckle_unchecked(const SizingProblem& problem,
+                          const CompiledCandidate& compiled,
+                          const Piece& piece,
+                          const SectionProperties& section) {
+  const bool slender = section.I_y > 4.0 * section.I_z || section.I_z > 4.0 * section.I_y;
+  if (!slender || section.inner_perimeter > 0.0 || problem.member_limits().lateral_restraint) {
+    return false;
+  }
+  for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
+    if (piece.applies[i] && compiled.constraints[i].label == "lateral-torsional buckling") {
+      return false;
+    }
+  }
+  return std::any_of(problem.effects().begin(),
+                     problem.effects().end(),
+                     [](const LoadEffects& effects) { return effects.bends; });
+}
+
 void add_notes(const SizingProblem& problem,
                const CompiledCandidate& compiled,
                const Piece& piece,
@@ -91,17 +111,10 @@ void add_notes(const SizingProblem& problem,
     design.notes.emplace_back(
         "sized by the beginning of a thickness step or blank: no smaller size has its strength");
   }
-  const bool open_or_slender = design.section.family == SectionFamily::i_section ||
-                               design.section.family == SectionFamily::channel ||
-                               design.section.I_y > 4.0 * design.section.I_z;
-  const bool bends = std::any_of(problem.effects().begin(),
-                                 problem.effects().end(),
-                                 [](const LoadEffects& effects) { return effects.bends; });
-  if (open_or_slender && bends) {
+  if (may_buckle_unchecked(problem, compiled, piece, design.section)) {
     design.notes.emplace_back(
         "NOT CHECKED: lateral-torsional buckling of a slender section bent about its strong axis; "
-        "hold its "
-        "compression side or check it");
+        "hold its compression side or check it");
   }
   if (piece.item != nullptr && piece.item->availability == Availability::unconfirmed) {
     design.notes.emplace_back("size unconfirmed as a stock size");
@@ -167,9 +180,13 @@ std::string size_text(const SectionProperties& section) {
       return "diameter " + millimetres(section.height) + " mm";
     case SectionFamily::solid_square:
       return "side " + millimetres(section.height) + " mm";
+    case SectionFamily::solid_hexagon:
+      return millimetres(section.height) + " mm across flats";
     case SectionFamily::round_tube:
       return millimetres(section.height) + " x " + millimetres(section.wall) + " mm";
     case SectionFamily::rectangular_tube:
+    case SectionFamily::elliptical_tube:
+    case SectionFamily::angle:
       return millimetres(section.height) + " x " + millimetres(section.width) + " x " +
              millimetres(section.wall) + " mm";
     default:

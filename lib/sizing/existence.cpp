@@ -21,6 +21,13 @@ bool is_extrusion(const Route& route) { return contains_word(route.process_words
 
 bool rolls_tube(const Route& route) { return contains_word(route.leaves, "welded tube"); }
 
+/// Makes an open section by bending sheet of one thickness.
+bool bends_sheet(const Route& route) {
+  return contains_word(route.leaves, "open section") &&
+         shares_word(route.process_words,
+                     std::array<std::string, 3>{"cold forming", "press forming", "hot forming"});
+}
+
 /// A temper whose letter and digits stand as a word of its own, as "T3" in "T3, bar".
 bool has_temper(std::string_view condition, std::string_view prefix) {
   for (std::size_t at = 0; at + prefix.size() < condition.size() + 1; ++at) {
@@ -101,8 +108,18 @@ bool keeps_stock(const Route& route) { return contains_word(route.leaves, "stock
 bool machines_blank(const Route& route) { return contains_word(route.process_words, "machining"); }
 
 bool takes_sheet_thickness(const Route& route) {
-  return (contains_word(route.leaves, "flat") || rolls_tube(route)) &&
+  return (contains_word(route.leaves, "flat") || rolls_tube(route) || bends_sheet(route)) &&
          shares_word(route.takes, std::array<std::string, 2>{"sheet", "plate"});
+}
+
+bool is_tube(SectionFamily family) {
+  return family == SectionFamily::round_tube || family == SectionFamily::rectangular_tube ||
+         family == SectionFamily::elliptical_tube;
+}
+
+bool is_open_section(SectionFamily family) {
+  return family == SectionFamily::i_section || family == SectionFamily::channel ||
+         family == SectionFamily::tee || family == SectionFamily::angle;
 }
 
 bool forms_hot(const Route& route) {
@@ -118,6 +135,7 @@ bool can_leave(const Route& route, SectionFamily family) {
   switch (family) {
     case SectionFamily::solid_round:
     case SectionFamily::solid_ellipse:
+    case SectionFamily::solid_hexagon:
       return leaves("solid");
     case SectionFamily::solid_square:
       return leaves("solid") || leaves("rectangle");
@@ -129,9 +147,18 @@ bool can_leave(const Route& route, SectionFamily family) {
       const bool wound = contains_word(route.process_words, "filament winding");
       return (leaves("tube") && !wound) || leaves("cored tube") || leaves("welded tube");
     }
-    case SectionFamily::i_section:
+    case SectionFamily::elliptical_tube:
+      return leaves("tube") || leaves("cored tube");
     case SectionFamily::channel:
-      return false;
+    case SectionFamily::angle:
+      return leaves("open section");
+    case SectionFamily::i_section:
+    case SectionFamily::tee:
+      // Bending a sheet makes one thickness without a branch.
+      return leaves("open section") && !bends_sheet(route);
+    case SectionFamily::polygon:
+      return leaves("solid") || leaves("tube") || leaves("cored tube") ||
+             (leaves("open section") && !bends_sheet(route));
   }
   return false;
 }
@@ -250,19 +277,44 @@ std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material,
   if (!drawn || from_granulate) {
     return std::nullopt;
   }
-  const bool tube =
-      family == SectionFamily::round_tube || family == SectionFamily::rectangular_tube;
-  const bool listed = tube ? contains_word(material.forms, "tube")
-                           : contains_word(material.forms, "bar") ||
-                                 (contains_word(material.forms, "section") &&
-                                  !found_in(material.condition, "open profile"));
+  const bool tube = is_tube(family);
+  const bool open = is_open_section(family);
+  const bool section = contains_word(material.forms, "section");
+  const bool listed = tube   ? contains_word(material.forms, "tube")
+                      : open ? section
+                             : contains_word(material.forms, "bar") ||
+                                   (section && !found_in(material.condition, "open profile"));
   if (listed) {
     return std::nullopt;
   }
   return Exclusion{Rule::input_form,
                    std::string("The values of this row hold for ") +
-                       joined(material.forms, " and ") + ", not for a " +
-                       (tube ? "tube." : "solid bar.")};
+                       joined(material.forms, " and ") + ", not for a" +
+                       (tube   ? " tube."
+                        : open ? "n open section."
+                               : " solid bar.")};
+}
+
+std::optional<Exclusion> proportion_rules(const Route& route, const Shape& shape) {
+  if (bends_sheet(route) && shape.web_to_height != shape.flange_to_height) {
+    return Exclusion{Rule::output_form,
+                     "The route \"" + route.title +
+                         "\" bends sheet of one thickness; web and flange of this " +
+                         std::string(name(shape.family)) + " differ."};
+  }
+  if (shape.family == SectionFamily::polygon) {
+    const bool hollow = !shape.holes.empty();
+    const bool leaves =
+        hollow
+            ? contains_word(route.leaves, "tube") || contains_word(route.leaves, "cored tube")
+            : contains_word(route.leaves, "solid") || contains_word(route.leaves, "open section");
+    if (!leaves) {
+      return Exclusion{Rule::output_form,
+                       "The route \"" + route.title + "\" leaves " + joined(route.leaves) +
+                           (hollow ? ", not a polygon with holes." : ", not a polygon.")};
+    }
+  }
+  return std::nullopt;
 }
 
 std::optional<Exclusion> shape_rules(const Route& route, SectionFamily family, bool from_stock) {
@@ -339,6 +391,9 @@ std::optional<Exclusion> first_broken_rule(const Candidate& candidate,
     return broken;
   }
   if (!from_stock) {
+    if (auto broken = proportion_rules(route, part.body.shapes[candidate.shape])) {
+      return broken;
+    }
     if (auto broken = drawn_form_rules(material, route, family)) {
       return broken;
     }

@@ -17,15 +17,21 @@ namespace {
 
 constexpr double infinity = std::numeric_limits<double>::infinity();
 
-MemberLimits limits_of_member(const Limits& limits) {
+MemberLimits limits_of_member(const Limits& limits, const MemberDetails& details) {
   MemberLimits out;
   out.deflection = limits.deflection;
+  out.shear_deflection = limits.shear_deflection;
+  out.rotation = limits.rotation;
   out.twist = limits.twist;
+  out.frequency = limits.frequency;
+  out.elongation = limits.elongation;
   out.height = limits.height;
   out.width = limits.width;
   out.wall = limits.wall;
   out.slenderness = limits.slenderness;
   out.column_method = limits.column_method;
+  out.lateral_restraint = limits.lateral_restraint;
+  out.details = details;
   return out;
 }
 
@@ -48,7 +54,8 @@ SizingProblem::SizingProblem(const Part& part, const Catalogue& catalogue, const
       catalogue_(catalogue),
       settings_(settings),
       reader_(catalogue, settings),
-      member_limits_(limits_of_member(part.limits)) {
+      member_limits_(limits_of_member(part.limits, part.body.details)),
+      sections_(part.body.shapes) {
   for (const auto& load_case : part.body.load_cases) {
     effects_.push_back(reduce(load_case, part.body.length));
   }
@@ -123,7 +130,8 @@ ResolvedMaterial SizingProblem::resolve_case(std::size_t material,
                                              std::size_t load_case) const {
   const auto& loads = part_.body.load_cases[load_case];
   std::set<Symbol> filled;
-  auto resolved = resolve(reader_, material, row, loads, part_.service_class);
+  const Service service{part_.service_class, part_.limits.temperature};
+  auto resolved = resolve(reader_, material, row, loads, service);
   if (settings_.missing != Missing::class_median) {
     return resolved;
   }
@@ -145,7 +153,7 @@ ResolvedMaterial SizingProblem::resolve_case(std::size_t material,
       break;
     }
     filled.merge(wanted);
-    resolved = resolve(reader_, material, row, loads, part_.service_class, filled);
+    resolved = resolve(reader_, material, row, loads, service, filled);
   }
   return resolved;
 }
@@ -220,7 +228,8 @@ double SizingProblem::material_utilisation(const CompiledCandidate& group,
   if (constraint.kind == Constraint::Kind::temperature) {
     const double service = *part_.limits.temperature;
     const auto lowest = reader_.value(Property::service_temperature_min, step.row);
-    const auto highest = highest_temperature(reader_, info, step.row);
+    const auto highest =
+        highest_temperature(reader_, info, step.row, service, part_.body.load_cases);
     const bool finish_stands = finish == nullptr || !finish->service_temperature_max ||
                                service <= *finish->service_temperature_max;
     return pass((!lowest || service >= *lowest) && (!highest || service <= *highest) &&
@@ -357,11 +366,10 @@ SizingProblem::Detail SizingProblem::detail(std::size_t group, double x) const {
   const auto& compiled = *groups_[group];
   Detail out;
   out.piece = &piece_at(compiled, x);
-  out.section = out.piece->item != nullptr || out.piece->impossible
-                    ? out.piece->section
-                    : section_of(part_.body.shapes[compiled.candidate.shape],
-                                 catalogue_.routes[compiled.candidate.route],
-                                 x);
+  out.section =
+      out.piece->item != nullptr || out.piece->impossible
+          ? out.piece->section
+          : section_of(compiled.candidate.shape, catalogue_.routes[compiled.candidate.route], x);
   if (out.piece->step != nullptr) {
     out.net_mass = out.piece->step->density * out.section.area * part_.body.length;
     out.purchase = purchase(compiled, *out.piece, out.section, out.net_mass);

@@ -3,6 +3,7 @@
 
 #include "sizing/blank.hpp"
 #include "sizing/candidate_cost.hpp"
+#include "sizing/shape_section.hpp"
 #include "sizing/strength.hpp"
 
 #include <bismar/export.hpp>
@@ -137,6 +138,12 @@ class BISMAR_API SizingProblem : public BoxProblem {
   [[nodiscard]] const PropertyReader& reader() const { return reader_; }
   [[nodiscard]] std::span<const LoadEffects> effects() const { return effects_; }
   [[nodiscard]] const MemberLimits& member_limits() const { return member_limits_; }
+  /// Section of a free shape at one height, by its own formulas.
+  [[nodiscard]] SectionProperties section_of(std::size_t shape,
+                                             const Route& route,
+                                             double height) const {
+    return sections_.at(shape, route, height);
+  }
 
  private:
   friend class CandidateCompiler;
@@ -172,13 +179,11 @@ class BISMAR_API SizingProblem : public BoxProblem {
   const Settings& settings_;
   PropertyReader reader_;
   MemberLimits member_limits_;
+  ShapeSections sections_;
   std::vector<LoadEffects> effects_;
   std::map<std::size_t, std::vector<StepState>> states_;
   std::map<std::pair<std::uint32_t, std::uint32_t>, std::vector<UsableItem>> blank_stock_;
   std::vector<std::unique_ptr<CompiledCandidate>> groups_;
 };
-
-/// Section of a parametric shape at one height, by its own formulas.
-[[nodiscard]] SectionProperties section_of(const Shape& shape, const Route& route, double height);
 
 }  // namespace bismar

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/strength.hpp"
 
+#include "sizing/derating.hpp"
 #include "sizing/words.hpp"
 
 #include <bismar/error.hpp>
@@ -52,19 +53,70 @@ Property k_mod(double seconds) {
   return seconds <= 10.0 * year ? Property::k_mod_long : Property::k_mod_permanent;
 }
 
+/// Where a symbol that limit states read comes from and where it is kept.
+struct SymbolEntry {
+  Symbol symbol;
+  Property property;
+  std::optional<double> MemberMaterial::*value;
+};
+constexpr SymbolEntry symbol_table[] = {
+    {Symbol::rho, Property::density, &MemberMaterial::rho},
+    {Symbol::E, Property::youngs_modulus, &MemberMaterial::E},
+    {Symbol::E_05, Property::youngs_modulus_05, &MemberMaterial::E_05},
+    {Symbol::G, Property::shear_modulus, &MemberMaterial::G},
+    {Symbol::sigma_y, Property::yield_strength, &MemberMaterial::sigma_y},
+    {Symbol::tensile, Property::tensile_strength, &MemberMaterial::tensile},
+    {Symbol::compressive, Property::compressive_strength, &MemberMaterial::compressive},
+    {Symbol::flexural, Property::flexural_strength, &MemberMaterial::flexural},
+    {Symbol::shear, Property::shear_strength, &MemberMaterial::shear},
+    {Symbol::alpha, Property::thermal_expansion, &MemberMaterial::alpha},
+    {Symbol::K_Ic, Property::fracture_toughness, &MemberMaterial::K_Ic},
+    {Symbol::sigma_e, Property::endurance_limit, &MemberMaterial::sigma_e},
+    {Symbol::weld_yield, Property::weld_yield_factor, &MemberMaterial::weld_yield_factor},
+    {Symbol::weld_tensile, Property::weld_tensile_factor, &MemberMaterial::weld_tensile_factor},
+};
+
+const SymbolEntry& entry(Symbol symbol) {
+  for (const SymbolEntry& one : symbol_table) {
+    if (one.symbol == symbol) {
+      return one;
+    }
+  }
+  throw InternalError("a symbol without a property");
+}
+
+bool is_weldable(const MaterialInfo& material) {
+  return contains_word(material.processes, "welding (good)") ||
+         contains_word(material.processes, "welding (fair)");
+}
+
+double upper_thickness(const MaterialTable& materials, std::size_t material, std::size_t row) {
+  for (const ThicknessStep& step : materials.steps(material)) {
+    if (step.row == row && std::isfinite(step.up_to)) {
+      return step.up_to;
+    }
+  }
+  return 0.0;
+}
+
+/// Cycles that the tables' endurance limits hold for: the knee of steels, about 1e7 elsewhere
+/// (data/README.md).
+double endurance_cycles(const MaterialInfo& material) { return is_steel(material) ? 1e6 : 1e7; }
+
 class Resolver {
  public:
   Resolver(const PropertyReader& reader,
            std::size_t material,
            std::size_t row,
            const LoadCase& load_case,
-           ServiceClass service_class,
+           const Service& service,
            const std::set<Symbol>& filled)
       : reader_(reader),
         info_(reader.catalogue().materials.info(material)),
         row_(row),
+        thickness_(upper_thickness(reader.catalogue().materials, material, row)),
         load_case_(load_case),
-        service_class_(service_class),
+        service_(service),
         filled_(filled) {}
 
   ResolvedMaterial run() {
@@ -77,6 +129,7 @@ class Resolver {
     } else if (info_.material_class == "polymer" || info_.material_class == "composite") {
       lasting_load();
     }
+    heat();
     column_law();
     return std::move(out_);
   }
@@ -98,9 +151,9 @@ class Resolver {
   }
 
   /// The strengths, whichever of them are there.
-  std::array<std::optional<double>*, 5> strengths() {
+  std::array<std::optional<double>*, 6> strengths() {
     auto& m = out_.member;
-    return {&m.sigma_y, &m.tensile, &m.compressive, &m.flexural, &m.shear};
+    return {&m.sigma_y, &m.tensile, &m.compressive, &m.flexural, &m.shear, &m.sigma_e};
   }
 
   void multiply_strengths(double factor) {
@@ -113,21 +166,35 @@ class Resolver {
 
   void read_values() {
     auto& m = out_.member;
-    m.rho = read(Property::density);
-    m.E = read(Property::youngs_modulus);
+    for (const SymbolEntry& one : symbol_table) {
+      m.*one.value = read(one.property);
+    }
     m.E_axial = read(Property::youngs_modulus_axial);
-    m.E_05 = read(Property::youngs_modulus_05);
-    m.G = read(Property::shear_modulus);
-    m.sigma_y = read(Property::yield_strength);
-    m.tensile = read(Property::tensile_strength);
-    m.compressive = read(Property::compressive_strength);
-    m.flexural = read(Property::flexural_strength);
-    m.shear = read(Property::shear_strength);
     m.ceramic = info_.material_class == "ceramic" || info_.material_class == "glass";
+    m.steel = is_steel(info_);
+    m.cast_iron = info_.material_class == "cast iron";
+    m.endurance_cycles = endurance_cycles(info_);
+    weld_zone();
     for (const Symbol symbol : filled_) {
       if (auto& value = value_of(m, symbol); !value) {
         value = need(property_of(symbol));
       }
+    }
+  }
+
+  /// Factors of the row itself; else, of aluminium, those of its alloy and temper in the table of
+  /// weld zones; steels that are not hardened keep their strength beside a weld with matching
+  /// filler (EN 1993-1-8:2005 4.7.1).
+  void weld_zone() {
+    auto& m = out_.member;
+    if (m.weld_yield_factor && m.weld_tensile_factor) {
+      return;
+    }
+    if (const WeldZone* zone = find_weld_zone(reader_.catalogue().weld_zones, info_, thickness_)) {
+      m.weld_yield_factor = zone->yield_factor;
+      m.weld_tensile_factor = zone->tensile_factor;
+    } else if (is_steel(info_) && !is_hardened(info_.condition) && is_weldable(info_)) {
+      m.weld_yield_factor = m.weld_tensile_factor = 1.0;
     }
   }
 
@@ -173,7 +240,7 @@ class Resolver {
   void timber() {
     // The table's k_mod hold for service classes 1 and 2 in solid and glued timber, for 1 in
     // boards.
-    if (service_class_ == ServiceClass::two && has(info_.group, "panel")) {
+    if (service_.timber_class == ServiceClass::two && has(info_.group, "panel")) {
       out_.missing.insert(k_mod(load_case_.duration));
       return;
     }
@@ -191,7 +258,7 @@ class Resolver {
     }
     if (load_case_.duration > hour && m.E) {
       const auto k_def =
-          need(service_class_ == ServiceClass::one ? Property::k_def_1 : Property::k_def_2);
+          need(service_.timber_class == ServiceClass::one ? Property::k_def_1 : Property::k_def_2);
       if (k_def) {
         *m.E *= at_time(load_case_.duration, std::nullopt, 1.0 / (1.0 + *k_def));
       }
@@ -226,6 +293,24 @@ class Resolver {
     out_.notes.emplace_back("lasting load: creep and long-term strength factors of the row");
   }
 
+  void heat() {
+    if (!service_.temperature || *service_.temperature <= room_values_up_to ||
+        read(Property::loaded_temperature_max)) {
+      return;
+    }
+    const auto left = derating(info_, *service_.temperature, load_case_.duration);
+    if (!left) {
+      return;  // no curve: the candidate is undecided by its temperature
+    }
+    multiply_strengths(left->strength);
+    for (auto* modulus : {&out_.member.E, &out_.member.E_axial, &out_.member.G}) {
+      if (*modulus) {
+        **modulus *= left->modulus;
+      }
+    }
+    out_.notes.push_back(left->note);
+  }
+
   void column_law() {
     auto& m = out_.member;
     if (info_.material_class == "aluminium") {
@@ -240,13 +325,18 @@ class Resolver {
   const PropertyReader& reader_;
   const MaterialInfo& info_;
   std::size_t row_;
+  double thickness_;  ///< The thickest piece that the row holds for; 0 where it is not limited.
   const LoadCase& load_case_;
-  ServiceClass service_class_;
+  const Service& service_;
   const std::set<Symbol>& filled_;
   ResolvedMaterial out_;
 };
 
 }  // namespace
+
+bool is_steel(const MaterialInfo& material) {
+  return material.material_class == "steel" || material.material_class == "stainless steel";
+}
 
 bool is_metal(std::string_view material_class) {
   static constexpr std::array<std::string_view, 5> others = {
@@ -257,81 +347,45 @@ bool is_metal(std::string_view material_class) {
 bool is_bath(const Finish& finish) { return contains_word(finish.process_words, "galvanising"); }
 
 bool is_hardened_bar_grade(const MaterialInfo& material) {
-  return contains_word(material.forms, "bar") &&
-         (has(material.condition, "quenched") || has(material.condition, "hardened") ||
-          has(material.condition, "tempered"));
+  return contains_word(material.forms, "bar") && is_hardened(material.condition);
+}
+
+bool is_hardened(std::string_view condition) {
+  return has(condition, "quenched") || has(condition, "hardened") || has(condition, "tempered");
 }
 
 bool is_cast(const MaterialInfo& material) {
   return material.forms.size() == 1 && material.forms[0] == "casting";
 }
 
-Property property_of(Symbol symbol) {
-  switch (symbol) {
-    case Symbol::rho:
-      return Property::density;
-    case Symbol::E:
-      return Property::youngs_modulus;
-    case Symbol::E_05:
-      return Property::youngs_modulus_05;
-    case Symbol::G:
-      return Property::shear_modulus;
-    case Symbol::sigma_y:
-      return Property::yield_strength;
-    case Symbol::tensile:
-      return Property::tensile_strength;
-    case Symbol::compressive:
-      return Property::compressive_strength;
-    case Symbol::flexural:
-      return Property::flexural_strength;
-    case Symbol::shear:
-      return Property::shear_strength;
-  }
-  throw InternalError("property_of: unknown symbol");
-}
+Property property_of(Symbol symbol) { return entry(symbol).property; }
 
 std::optional<double> highest_temperature(const PropertyReader& reader,
                                           const MaterialInfo& material,
-                                          std::size_t row) {
+                                          std::size_t row,
+                                          double temperature,
+                                          std::span<const LoadCase> load_cases) {
   if (const auto loaded = reader.value(Property::loaded_temperature_max, row)) {
     return loaded;
   }
   if (!is_metal(material.material_class)) {
     return std::nullopt;  // the service maximum of a polymer is an ageing limit
   }
-  // Room-temperature strength of metals: full up to 100 C in EN 1993-1-2, table 3.1, and EN
-  // 1999-1-2 (from memory); above, the strength at temperature would be needed.
-  constexpr double room_strength_up_to = 373.15;
+  const bool has_curve =
+      std::all_of(load_cases.begin(), load_cases.end(), [&](const LoadCase& load_case) {
+        return derating(material, temperature, load_case.duration).has_value();
+      });
+  const double values_known = has_curve ? temperature : room_values_up_to;
   const auto service = reader.value(Property::service_temperature_max, row);
-  return service ? std::min(*service, room_strength_up_to) : room_strength_up_to;
+  return service ? std::min(*service, values_known) : values_known;
 }
 
 const std::optional<double>& value_of(const MemberMaterial& material, Symbol symbol) {
-  switch (symbol) {
-    case Symbol::rho:
-      return material.rho;
-    case Symbol::E:
-      return material.E;
-    case Symbol::E_05:
-      return material.E_05;
-    case Symbol::G:
-      return material.G;
-    case Symbol::sigma_y:
-      return material.sigma_y;
-    case Symbol::tensile:
-      return material.tensile;
-    case Symbol::compressive:
-      return material.compressive;
-    case Symbol::flexural:
-      return material.flexural;
-    case Symbol::shear:
-      return material.shear;
-  }
-  throw InternalError("value_of: unknown symbol");
+  return material.*entry(symbol).value;
 }
 
 std::optional<double>& value_of(MemberMaterial& material, Symbol symbol) {
-  return const_cast<std::optional<double>&>(value_of(std::as_const(material), symbol));
+  return material.*entry(symbol).value;
 }
 
 RangeEnd PropertyReader::end(Property property) const {
@@ -377,9 +431,9 @@ ResolvedMaterial resolve(const PropertyReader& reader,
                          std::size_t material,
                          std::size_t row,
                          const LoadCase& load_case,
-                         ServiceClass service_class,
+                         const Service& service,
                          const std::set<Symbol>& filled) {
-  return Resolver(reader, material, row, load_case, service_class, filled).run();
+  return Resolver(reader, material, row, load_case, service, filled).run();
 }
 
 MemberMaterial ResolvedMaterial::at_depth(double depth) const {

@@ -8,6 +8,7 @@
 #include <map>
 #include <optional>
 #include <set>
+#include <span>
 #include <string>
 #include <utility>
 #include <vector>
@@ -15,9 +16,13 @@
 namespace bismar {
 
 [[nodiscard]] bool is_metal(std::string_view material_class);
+/// Steel, stainless steel.
+[[nodiscard]] bool is_steel(const MaterialInfo& material);
 [[nodiscard]] bool is_cast(const MaterialInfo& material);
 /// Whether a finish is a bath that reaches the bore of a tube.
 [[nodiscard]] bool is_bath(const Finish& finish);
+/// Whether the condition owes its strength to hardening or tempering.
+[[nodiscard]] bool is_hardened(std::string_view condition);
 /// Whether its strength comes from hardening and tempering, in a grade sold as bar.
 [[nodiscard]] bool is_hardened_bar_grade(const MaterialInfo& material);
 /// The mark of a value that was filled in: every use is flagged.
@@ -49,12 +54,14 @@ class PropertyReader {
   mutable std::map<std::pair<std::string, Property>, std::optional<double>> medians_;
 };
 
-/// Highest temperature [K] at which the tabulated strength may be used: the loaded maximum of the
-/// row; for a metal without one 100 C, or its service maximum where that is lower. Nothing: not
-/// known.
+/// Highest temperature [K] at which the strength is known: the loaded maximum of the row; for a
+/// metal without one 100 C, or `temperature` itself where a curve tells what heat leaves in every
+/// load case, or its service maximum where that is lower. Nothing: not known.
 [[nodiscard]] std::optional<double> highest_temperature(const PropertyReader& reader,
                                                         const MaterialInfo& material,
-                                                        std::size_t row);
+                                                        std::size_t row,
+                                                        double temperature,
+                                                        std::span<const LoadCase> load_cases);
 
 /// A material as the limit states see it, in one load case.
 struct ResolvedMaterial {
@@ -67,6 +74,12 @@ struct ResolvedMaterial {
 
   /// The member at a depth: LVL weakened above its reference depth.
   [[nodiscard]] MemberMaterial at_depth(double depth) const;
+};
+
+/// Where and how warm the part serves.
+struct Service {
+  ServiceClass timber_class = ServiceClass::one;
+  std::optional<double> temperature = {};  ///< [K]; absent: room temperature.
 };
 
 /// Which strength counts, by rule:
@@ -82,7 +95,7 @@ struct ResolvedMaterial {
                                                   std::size_t material,
                                                   std::size_t row,
                                                   const LoadCase& load_case,
-                                                  ServiceClass service_class,
+                                                  const Service& service,
                                                   const std::set<Symbol>& filled = {});
 
 }  // namespace bismar

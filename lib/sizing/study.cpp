@@ -71,7 +71,8 @@ class Enumeration {
     for (const auto route : routes_) {
       std::vector<bool> can;
       for (const auto& shape : part.body.shapes) {
-        can.push_back(!shape_rules(catalogue.routes[route], shape.family, false));
+        can.push_back(!shape_rules(catalogue.routes[route], shape.family, false) &&
+                      !proportion_rules(catalogue.routes[route], shape));
       }
       for (const auto list : lists_) {
         can.push_back(!shape_rules(catalogue.routes[route], catalogue.stock[list].family, true));

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include <bismar/sizing/part.hpp>
 
+#include "sizing/part_faults.hpp"
 #include "sizing/words.hpp"
 
 #include <bismar/error.hpp>
@@ -22,9 +23,9 @@ class PartCheck {
 
   void run() {
     numbers();
-    shapes();
+    validate_shapes(part_, faults_);
     stock();
-    load_cases();
+    validate_loads(part_, faults_);
     limits();
     names();
     settings();
@@ -32,32 +33,6 @@ class PartCheck {
   }
 
  private:
-  void fault(
-      Code code, std::string where, std::string found, std::string allowed, std::string message) {
-    faults_.add({code, std::move(where), std::move(found), std::move(allowed), std::move(message)});
-  }
-
-  /// A finite positive number, or a fault.
-  bool positive(double value, const std::string& where, const std::string& what) {
-    if (std::isfinite(value) && value > 0.0) {
-      return true;
-    }
-    fault(std::isfinite(value) ? Code::out_of_range : Code::not_finite,
-          where,
-          plain(value),
-          "a positive number",
-          "The " + what + " must be finite and above zero; it is " + plain(value) + ".");
-    return false;
-  }
-
-  void optional_positive(const std::optional<double>& value,
-                         const std::string& where,
-                         const std::string& what) {
-    if (value) {
-      positive(*value, where, what);
-    }
-  }
-
   /// Every word must be one of `known`.
   void known_words(const std::vector<std::string>& words,
                    const std::set<std::string>& known,
@@ -66,12 +41,12 @@ class PartCheck {
     const std::vector<std::string_view> list(known.begin(), known.end());
     for (std::size_t i = 0; i < words.size(); ++i) {
       if (!known.contains(words[i])) {
-        fault(Code::unknown_name,
-              where + "/" + std::to_string(i),
-              words[i],
-              "a " + what + " of the catalogue",
-              "There is no " + what + " \"" + words[i] + "\" in the catalogue." +
-                  did_you_mean(words[i], list));
+        faults_.fault(Code::unknown_name,
+                      where + "/" + std::to_string(i),
+                      words[i],
+                      "a " + what + " of the catalogue",
+                      "There is no " + what + " \"" + words[i] + "\" in the catalogue." +
+                          did_you_mean(words[i], list));
       }
     }
   }
@@ -83,179 +58,32 @@ class PartCheck {
     std::set<std::string> seen;
     for (std::size_t i = 0; i < words.size(); ++i) {
       if (!seen.insert(words[i]).second) {
-        fault(Code::duplicate,
-              where + "/" + std::to_string(i),
-              words[i],
-              "each once",
-              "The " + what + " \"" + words[i] + "\" stands twice; leave one of them out.");
+        faults_.fault(Code::duplicate,
+                      where + "/" + std::to_string(i),
+                      words[i],
+                      "each once",
+                      "The " + what + " \"" + words[i] + "\" stands twice; leave one of them out.");
       }
     }
   }
 
   void numbers() {
-    positive(part_.body.length, "/member/length", "length");
+    faults_.positive(part_.body.length, "/member/length", "length");
     if (!(part_.quantity >= 1.0) || !std::isfinite(part_.quantity)) {
-      fault(Code::out_of_range,
-            "/quantity",
-            plain(part_.quantity),
-            "at least 1",
-            "The quantity must be at least one part; it is " + plain(part_.quantity) + ".");
+      faults_.fault(Code::out_of_range,
+                    "/quantity",
+                    plain(part_.quantity),
+                    "at least 1",
+                    "The quantity must be at least one part; it is " + plain(part_.quantity) + ".");
     }
     if (part_.batch && (!(*part_.batch >= 1.0) || *part_.batch > part_.quantity)) {
-      fault(Code::out_of_range,
-            "/batch",
-            plain(*part_.batch),
-            "from 1 to the quantity",
-            "A batch holds from one part to the whole quantity of " + plain(part_.quantity) +
-                "; it is " + plain(*part_.batch) + ".");
+      faults_.fault(Code::out_of_range,
+                    "/batch",
+                    plain(*part_.batch),
+                    "from 1 to the quantity",
+                    "A batch holds from one part to the whole quantity of " +
+                        plain(part_.quantity) + "; it is " + plain(*part_.batch) + ".");
     }
-  }
-
-  void shapes() {
-    if (part_.body.shapes.empty() && part_.body.stock.empty()) {
-      fault(Code::empty,
-            "/member/shapes",
-            "",
-            "shapes or stock lists",
-            "The member has neither a shape nor a stock list to try. Name at least one, or "
-            "\"stock\": \"all\".");
-    }
-    for (std::size_t i = 0; i < part_.body.shapes.size(); ++i) {
-      const std::string where = "/member/shapes/" + std::to_string(i);
-      shape(part_.body.shapes[i], where);
-      for (std::size_t j = 0; j < i; ++j) {
-        if (part_.body.shapes[j] == part_.body.shapes[i]) {
-          fault(Code::duplicate,
-                where,
-                std::string(name(part_.body.shapes[i].family)),
-                "each once",
-                "This shape stands twice with the same ratios and sizes; leave one of them out.");
-        }
-      }
-    }
-  }
-
-  void shape(const Shape& shape, const std::string& where) {
-    const std::string word(name(shape.family));
-    const bool tube = shape.family == SectionFamily::round_tube ||
-                      shape.family == SectionFamily::rectangular_tube;
-    const bool flat = shape.family == SectionFamily::solid_rectangle ||
-                      shape.family == SectionFamily::solid_ellipse ||
-                      shape.family == SectionFamily::rectangular_tube;
-    if (shape.family == SectionFamily::i_section || shape.family == SectionFamily::channel) {
-      fault(Code::unsupported,
-            where,
-            word,
-            "solids and tubes, or a stock list",
-            "A free " + word +
-                " has four free sizes; this version sizes shapes with one. Use a stock list.");
-      return;
-    }
-    ratio(shape.height_to_width, flat, where, "height_to_width", word);
-    ratio(shape.wall_to_height, tube, where, "wall_to_height", word);
-    if (tube && shape.wall_to_height && *shape.wall_to_height > 0.0) {
-      const double room = 0.5 * std::min(1.0, 1.0 / shape.height_to_width.value_or(1.0));
-      if (*shape.wall_to_height >= room) {
-        fault(Code::out_of_range,
-              where + "/wall_to_height",
-              plain(*shape.wall_to_height),
-              "below " + plain(room, 4),
-              "The wall leaves no bore: wall_to_height must be below " + plain(room, 4) + ".");
-      }
-    }
-    const bool bounds = positive(shape.height_min, where + "/height", "least height") &&
-                        positive(shape.height_max, where + "/height", "largest height");
-    if (bounds && shape.height_min >= shape.height_max) {
-      fault(Code::conflict,
-            where + "/height",
-            "",
-            "least below largest",
-            "The least height must be below the largest one.");
-    }
-    if (bounds) {
-      sizes(shape, where + "/sizes");
-    }
-  }
-
-  void ratio(const std::optional<double>& value,
-             bool has_one,
-             const std::string& where,
-             const std::string& key,
-             const std::string& word) {
-    if (value && !has_one) {
-      fault(Code::conflict,
-            where + "/" + key,
-            plain(*value),
-            "nothing",
-            "A " + word + " has no " + key + ".");
-    } else if (value) {
-      positive(*value, where + "/" + key, key);
-    } else if (has_one) {
-      fault(Code::unsupported,
-            where,
-            "",
-            "a fixed " + key,
-            "A " + word + " without " + key +
-                " has two or more free sizes, which needs a solver that proves its bounds; this "
-                "version does "
-                "not have it. Fix the ratio \"" +
-                key + "\", or give several shapes with different ratios.");
-    }
-  }
-
-  void sizes(const Shape& shape, const std::string& where) {
-    const auto& sizes = shape.sizes;
-    switch (sizes.kind) {
-      case Sizes::Kind::continuous:
-        return;
-      case Sizes::Kind::step:
-        if (positive(sizes.step, where + "/step", "size step") &&
-            (shape.height_max - shape.height_min) / sizes.step > 1e5) {
-          fault(Code::out_of_range,
-                where + "/step",
-                plain(sizes.step),
-                "a coarser step",
-                "The step makes more than 100,000 sizes; take a coarser one or a smaller range.");
-        } else if (sizes.step > 0.0 &&
-                   std::floor(shape.height_max / sizes.step) * sizes.step < shape.height_min) {
-          no_size(where);
-        }
-        return;
-      case Sizes::Kind::series:
-        try {
-          if (preferred_numbers(sizes.series, shape.height_min, shape.height_max).empty()) {
-            no_size(where);
-          }
-        } catch (const Error& error) {
-          faults_.append(error, where);
-        }
-        return;
-      case Sizes::Kind::list: {
-        if (sizes.values.empty()) {
-          fault(Code::empty, where, "", "at least one size", "The list of sizes is empty.");
-          return;
-        }
-        bool any = false;
-        for (std::size_t i = 0; i < sizes.values.size(); ++i) {
-          if (positive(sizes.values[i], where + "/" + std::to_string(i), "size")) {
-            any =
-                any || (sizes.values[i] >= shape.height_min && sizes.values[i] <= shape.height_max);
-          }
-        }
-        if (!any) {
-          no_size(where);
-        }
-        return;
-      }
-    }
-  }
-
-  void no_size(const std::string& where) {
-    fault(Code::conflict,
-          where,
-          "",
-          "a size inside the range of heights",
-          "None of the sizes lies in the range of heights.");
   }
 
   void stock() {
@@ -269,80 +97,21 @@ class PartCheck {
     no_repeats(part_.body.stock, "/member/stock", "stock list");
   }
 
-  void load_cases() {
-    if (part_.body.load_cases.empty()) {
-      fault(Code::empty,
-            "/member/load_cases",
-            "",
-            "at least one load case",
-            "The member has no load case: nothing would size it.");
-    }
-    std::set<std::string> seen;
-    std::vector<std::string_view> ids;
-    for (const LimitState* state : limit_states()) {
-      ids.push_back(state->id());
-    }
-    for (std::size_t i = 0; i < part_.body.load_cases.size(); ++i) {
-      const auto& one = part_.body.load_cases[i];
-      const std::string where = "/member/load_cases/" + std::to_string(i);
-      if (!seen.insert(one.name).second) {
-        fault(Code::duplicate,
-              where + "/name",
-              one.name,
-              "a name of its own",
-              "Two load cases are called \"" + one.name + "\".");
-      }
-      for (const auto& [id, factor] : one.factors) {
-        std::string place = where;
-        place.append("/factors/").append(id);
-        if (limit_state(id) == nullptr) {
-          fault(Code::unknown_name,
-                place,
-                id,
-                "a limit state",
-                "There is no limit state \"" + id + "\"." + did_you_mean(id, ids));
-        }
-        positive(factor, place, "factor");
-      }
-      if (!(one.duration >= 0.0) || !std::isfinite(one.duration)) {
-        fault(Code::out_of_range,
-              where + "/duration",
-              plain(one.duration),
-              "zero or more",
-              "The duration of a load cannot be negative.");
-      }
-      if (one.loads.empty() && one.direct && (part_.limits.deflection || part_.limits.twist)) {
-        fault(Code::conflict,
-              where + "/direct",
-              "",
-              "loads at their stations",
-              "The limits on deflection and twist need to know where the loads act; the load case "
-              "\"" +
-                  one.name +
-                  "\" gives internal forces only. Give loads with stations, or leave those limits "
-                  "out.");
-      }
-      if (std::isfinite(part_.body.length) && part_.body.length > 0.0) {
-        try {
-          static_cast<void>(reduce(one, part_.body.length));
-        } catch (const Error& error) {
-          faults_.append(error, where + "/");
-        }
-      }
-    }
-  }
-
   void limits() {
     const auto& limits = part_.limits;
-    optional_positive(limits.deflection, "/limits/deflection", "deflection limit");
-    optional_positive(limits.twist, "/limits/twist", "twist limit");
-    optional_positive(limits.height, "/limits/height", "height of the envelope");
-    optional_positive(limits.width, "/limits/width", "width of the envelope");
-    optional_positive(limits.wall, "/limits/wall", "least wall");
-    optional_positive(limits.mass, "/limits/mass", "mass cap");
-    optional_positive(limits.cost, "/limits/cost", "cost cap");
-    optional_positive(limits.temperature, "/limits/temperature", "service temperature in kelvin");
-    positive(limits.slenderness, "/limits/slenderness", "slenderness cap");
+    faults_.optional_positive(limits.deflection, "/limits/deflection", "deflection limit");
+    faults_.optional_positive(limits.rotation, "/limits/rotation", "rotation limit");
+    faults_.optional_positive(limits.frequency, "/limits/frequency", "least natural frequency");
+    faults_.optional_positive(limits.elongation, "/limits/elongation", "limit of elongation");
+    faults_.optional_positive(limits.twist, "/limits/twist", "twist limit");
+    faults_.optional_positive(limits.height, "/limits/height", "height of the envelope");
+    faults_.optional_positive(limits.width, "/limits/width", "width of the envelope");
+    faults_.optional_positive(limits.wall, "/limits/wall", "least wall");
+    faults_.optional_positive(limits.mass, "/limits/mass", "mass cap");
+    faults_.optional_positive(limits.cost, "/limits/cost", "cost cap");
+    faults_.optional_positive(
+        limits.temperature, "/limits/temperature", "service temperature in kelvin");
+    faults_.positive(limits.slenderness, "/limits/slenderness", "slenderness cap");
     for (std::size_t i = 0; i < limits.properties.size(); ++i) {
       property_limit(limits.properties[i], "/limits/properties/" + std::to_string(i));
     }
@@ -356,7 +125,7 @@ class PartCheck {
         words.push_back(one.name);
       }
       words.insert(words.end(), extras.begin(), extras.end());
-      fault(
+      faults_.fault(
           Code::unknown_name,
           where + "/property",
           limit.property,
@@ -364,27 +133,27 @@ class PartCheck {
           "There is no property \"" + limit.property + "\"." + did_you_mean(limit.property, words));
     }
     if (!limit.at_least && !limit.at_most) {
-      fault(Code::missing,
-            where,
-            "",
-            "at_least or at_most",
-            "The limit on " + limit.property + " needs \"at_least\" or \"at_most\".");
+      faults_.fault(Code::missing,
+                    where,
+                    "",
+                    "at_least or at_most",
+                    "The limit on " + limit.property + " needs \"at_least\" or \"at_most\".");
     }
     for (const auto& value : {limit.at_least, limit.at_most}) {
       if (value && !std::isfinite(*value)) {
-        fault(Code::not_finite,
-              where,
-              plain(*value),
-              "a finite number",
-              "The limit on " + limit.property + " is not finite.");
+        faults_.fault(Code::not_finite,
+                      where,
+                      plain(*value),
+                      "a finite number",
+                      "The limit on " + limit.property + " is not finite.");
       }
     }
     if (limit.at_least && limit.at_most && *limit.at_least > *limit.at_most) {
-      fault(Code::conflict,
-            where,
-            "",
-            "at_least not above at_most",
-            "The limit on " + limit.property + " asks for at least more than at most.");
+      faults_.fault(Code::conflict,
+                    where,
+                    "",
+                    "at_least not above at_most",
+                    "The limit on " + limit.property + " asks for at least more than at most.");
     }
   }
 
@@ -434,40 +203,40 @@ class PartCheck {
     no_repeats(part_.finishes, "/finishes", "finish");
     no_repeats(limits.routes, "/limits/routes", "route");
     if (part_.finishes.empty()) {
-      fault(Code::empty,
-            "/finishes",
-            "",
-            "at least \"none\"",
-            "The list of finishes is empty; write \"none\" for no finish.");
+      faults_.fault(Code::empty,
+                    "/finishes",
+                    "",
+                    "at least \"none\"",
+                    "The list of finishes is empty; write \"none\" for no finish.");
     }
     if (limits.medium && !media.contains(*limits.medium)) {
       const std::vector<std::string_view> words(media.begin(), media.end());
-      fault(Code::unknown_name,
-            "/limits/medium",
-            *limits.medium,
-            "a medium of the material table",
-            "No material has a rating in \"" + *limits.medium + "\"." +
-                did_you_mean(*limits.medium, words));
+      faults_.fault(Code::unknown_name,
+                    "/limits/medium",
+                    *limits.medium,
+                    "a medium of the material table",
+                    "No material has a rating in \"" + *limits.medium + "\"." +
+                        did_you_mean(*limits.medium, words));
     }
     for (std::size_t i = 0; i < part_.operations.size(); ++i) {
       const auto& use = part_.operations[i];
       const std::string where = "/operations/" + std::to_string(i);
       known_words({use.operation}, operations, where, "operation");
-      positive(use.units, where, "number of units");
+      faults_.positive(use.units, where, "number of units");
     }
     if (catalogue_.materials.size() == 0) {
-      fault(Code::empty, "", "", "at least one material", "The catalogue has no material.");
+      faults_.fault(Code::empty, "", "", "at least one material", "The catalogue has no material.");
     }
   }
 
   void settings() {
     const auto share = [&](double value, const std::string& where, const std::string& what) {
       if (!(value >= 0.0 && value <= 1.0)) {
-        fault(Code::out_of_range,
-              where,
-              plain(value),
-              "from 0 to 1",
-              "The " + what + " must lie between 0 and 1; it is " + plain(value) + ".");
+        faults_.fault(Code::out_of_range,
+                      where,
+                      plain(value),
+                      "from 0 to 1",
+                      "The " + what + " must lie between 0 and 1; it is " + plain(value) + ".");
       }
     };
     share(settings_.near, "/settings/near", "margin of near designs");
@@ -475,11 +244,11 @@ class PartCheck {
     share(settings_.scrap_credit, "/settings/scrap_credit", "scrap credit");
     const auto length = [&](double value, const std::string& where, const std::string& what) {
       if (!(value >= 0.0) || !std::isfinite(value)) {
-        fault(Code::out_of_range,
-              where,
-              plain(value),
-              "zero or more",
-              "The " + what + " cannot be negative.");
+        faults_.fault(Code::out_of_range,
+                      where,
+                      plain(value),
+                      "zero or more",
+                      "The " + what + " cannot be negative.");
       }
     };
     length(settings_.kerf, "/settings/kerf", "saw cut");
@@ -489,7 +258,7 @@ class PartCheck {
   const Part& part_;
   const Catalogue& catalogue_;
   const Settings& settings_;
-  FaultList faults_;
+  PartFaults faults_;
 };
 
 }  // namespace

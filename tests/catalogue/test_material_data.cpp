@@ -73,6 +73,8 @@ const std::vector<Total> totals = {
     {"price", 549, 549, 2891.85, 5641.4},
     {"embodied CO2", 549, 549, 2295.4, 4258.4},
     {"recycled fraction", 479, 0, 188.55, 188.55},
+    {"weld zone yield factor", 0, 0, 0, 0},
+    {"weld zone tensile factor", 0, 0, 0, 0},
     {"gamma_M", 27, 0, 34.4, 34.4},
     {"k_mod permanent", 27, 0, 15.2, 15.2},
     {"k_mod long", 27, 0, 18.1, 18.1},

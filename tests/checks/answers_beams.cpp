@@ -1,136 +1,120 @@
 // SPDX-License-Identifier: MIT
 #include "checks/mechanics_answers.hpp"
 
-#include "mechanics/bending_plane.hpp"
-
+#include <bismar/mechanics/beam.hpp>
+#include <bismar/mechanics/limit_state.hpp>
 #include <bismar/mechanics/load_effects.hpp>
 #include <bismar/mechanics/section.hpp>
 
 #include <algorithm>
 #include <cmath>
-#include <sstream>
+#include <optional>
+#include <string>
+#include <utility>
 #include <vector>
 
 namespace bismar::checks {
 
 namespace {
 
-using mechanics::PlaneSegment;
+bool mentions(const Check& check, const char* text) {
+  return check.title.find(text) != std::string::npos;
+}
 
-/// One plane of a beam with E I = 1 times its stiffness, and the public reduction beside it.
+/// A beam with its loads downwards, which are positive here: reactions upwards, moments that hollow
+/// the upper side (sagging) and deflections downwards are then reported as the tables do.
 class Beam {
  public:
-  Beam(Support support, std::vector<Load> loads, double length, double stiffness)
-      : stiffness_(stiffness) {
-    std::vector<double> stations = {0.0, length};
-    for (const Load& load : loads) {
-      stations.push_back(load.at);
-      if (load.kind == Load::Kind::distributed) {
-        stations.push_back(load.to);
-      }
-    }
-    std::sort(stations.begin(), stations.end());
-    stations.erase(std::unique(stations.begin(), stations.end()), stations.end());
-    plane_ = mechanics::bending_plane(loads, Along::z, support, stations);
-    LoadCase load_case;
-    load_case.support_z = support;
-    load_case.loads = std::move(loads);
-    effects_ = reduce(load_case, length);
-  }
+  Beam(const LoadCase& load_case, double length, const BeamStiffness& stiffness)
+      : response_(load_case, Along::z, length, stiffness),
+        effects_(reduce(load_case, length)),
+        stiffness_(stiffness),
+        length_(length) {}
 
-  [[nodiscard]] double w(double x) const {
-    const PlaneSegment& s = segment(x);
-    return s.deflection(x - s.start) / stiffness_;
+  [[nodiscard]] const BeamResponse& response() const { return response_; }
+  [[nodiscard]] double w(double x) const { return response_.deflection(x); }
+  [[nodiscard]] double rotation(double x) const { return response_.rotation(x); }
+  [[nodiscard]] double moment(double x) const { return -response_.moment(x); }
+  [[nodiscard]] double R(std::size_t i) const { return -response_.reactions().at(i).force; }
+  /// Counter-clockwise.
+  [[nodiscard]] double M_react(std::size_t i) const { return -response_.reactions().at(i).moment; }
+  /// Through the reduction that sizing uses; with shear, the parts added.
+  [[nodiscard]] double w_max() const {
+    return effects_.deflection_z / stiffness_.bending +
+           (stiffness_.shear ? effects_.shear_deflection_z / *stiffness_.shear : 0.0);
   }
-  [[nodiscard]] double slope(double x) const {
-    const PlaneSegment& s = segment(x);
-    return s.slope(x - s.start) / stiffness_;
-  }
-  [[nodiscard]] double moment(double x) const {
-    const PlaneSegment& s = segment(x);
-    return s.moment(x - s.start);
-  }
-  [[nodiscard]] double w_max() const { return effects_.deflection_z / stiffness_; }
-  [[nodiscard]] double M_max() const { return largest_station().forces.M_y; }
-  [[nodiscard]] double x_of_M_max() const { return largest_station().x; }
-  [[nodiscard]] double V_max() const {
-    double largest = 0.0;
-    for (const Station& s : effects_.stations) {
-      largest = std::max(largest, std::abs(s.forces.V_z));
-    }
-    return largest;
-  }
-  /// Reactions, upwards for loads downwards.
-  [[nodiscard]] double R_left() const { return plane_.front().shear(0.0); }
-  [[nodiscard]] double R_right() const { return -plane_.back().shear(plane_.back().length); }
-  [[nodiscard]] double x_of_w_max() const {
-    double best = 0.0;
-    double at = 0.0;
-    for (const PlaneSegment& s : plane_) {
-      for (const double xi : mechanics::sign_changes(s.slope, s.length)) {
-        if (std::abs(s.deflection(xi)) > best) {
-          best = std::abs(s.deflection(xi));
-          at = s.start + xi;
-        }
-      }
-    }
-    return at;
-  }
+  [[nodiscard]] double rotation_max() const { return effects_.rotation_z / stiffness_.bending; }
+  [[nodiscard]] double M_max() const { return effects_.moment_y.largest; }
+  [[nodiscard]] double V_max() const { return std::abs(response_.shears().largest().value); }
+  [[nodiscard]] double length() const { return length_; }
 
  private:
-  [[nodiscard]] const PlaneSegment& segment(double x) const {
-    for (const PlaneSegment& s : plane_) {
-      if (x <= s.start + s.length) {
-        return s;
-      }
-    }
-    return plane_.back();
-  }
-  [[nodiscard]] const Station& largest_station() const {
-    return *std::max_element(
-        effects_.stations.begin(), effects_.stations.end(), [](const Station& a, const Station& b) {
-          return std::abs(a.forces.M_y) < std::abs(b.forces.M_y);
-        });
-  }
-
-  double stiffness_;
-  std::vector<PlaneSegment> plane_;
+  BeamResponse response_;
   LoadEffects effects_;
+  BeamStiffness stiffness_;
+  double length_;
 };
 
-/// Cantilevers and simply supported beams of the beam tables.
+Support support_of(const Check& check) {
+  if (starts_with(check.title, "cantilever") || mentions(check, "Timoshenko: cantilever")) {
+    return Support::cantilever;
+  }
+  if (mentions(check, "fixed-fixed")) {
+    return Support::fixed_fixed;
+  }
+  if (mentions(check, "fixed-pinned") || mentions(check, "propped cantilever")) {
+    return Support::fixed_pinned;
+  }
+  return Support::pinned_pinned;
+}
+
+LoadCase held(Support support, std::vector<Load> loads) {
+  LoadCase load_case;
+  load_case.support_z = load_case.support_y = support;
+  load_case.loads = std::move(loads);
+  return load_case;
+}
+
+/// The beam tables with dimensions.
 Answers table_beam(const Check& check) {
   const double L = check["L"];
-  const double EI = check["E"] * check["I"];
-  const bool fixed = starts_with(check.title, "cantilever");
-  const Support support = fixed ? Support::cantilever : Support::pinned_pinned;
-  const double a = check.inputs.count("a") != 0 ? check["a"] : L;
+  const double a = check.inputs.count("a") != 0             ? check["a"]
+                   : starts_with(check.title, "cantilever") ? L
+                                                            : L / 2.0;
   std::vector<Load> loads;
-  if (check.title.find("rising") != std::string::npos) {
+  if (mentions(check, "rising")) {
     loads = {distributed(0.0, check["q"], 0.0, L)};
-  } else if (check.title.find("UDL") != std::string::npos) {
+  } else if (mentions(check, "UDL")) {
     loads = {distributed(check["q"], check["q"], 0.0, L)};
-  } else if (check.title.find("two equal loads") != std::string::npos) {
+  } else if (mentions(check, "two equal loads")) {
     loads = {force(check["P"], a), force(check["P"], L - a)};
   } else {
     loads = {force(check["P"], a)};
   }
-  const Beam beam(support, loads, L, EI);
-  return {{"w_tip", beam.w(L)},
-          {"theta_tip", beam.slope(L)},
-          {"M_max", std::abs(beam.M_max())},
-          {"w_load", beam.w(a)},
-          {"w_mid", beam.w(L / 2.0)},
-          {"theta_end", beam.slope(0.0)},
-          {"theta_A", beam.slope(0.0)},
-          {"theta_B", -beam.slope(L)},
-          {"M_load", std::abs(beam.moment(a))}};
+  const Beam beam(held(support_of(check), loads), L, {.bending = check["E"] * check["I"]});
+  Answers answers = {{"w_tip", beam.w(L)},
+                     {"theta_tip", beam.rotation_max()},
+                     {"M_max", beam.M_max()},
+                     {"w_load", beam.w(a)},
+                     {"w_mid", beam.w(L / 2.0)},
+                     {"theta_end", beam.rotation_max()},
+                     {"theta_A", beam.rotation(0.0)},
+                     {"theta_B", -beam.rotation(L)},
+                     {"M_load", beam.moment(a)},
+                     {"M_mid", beam.moment(L / 2.0)},
+                     {"M_fixed", beam.M_react(0)}};
+  if (support_of(check) != Support::cantilever) {
+    answers["R_prop"] = beam.R(1);
+  }
+  return answers;
 }
 
 Answers joist(const Check& check) {
   const double L = check["L"];
-  const Beam beam(Support::pinned_pinned, {distributed(check["q"], check["q"], 0.0, L)}, L, 1.0);
-  const double moment = std::abs(beam.M_max());
+  const Beam beam(held(Support::pinned_pinned, {distributed(check["q"], check["q"], 0.0, L)}),
+                  L,
+                  {.bending = 1.0});
+  const double moment = beam.M_max();
   const double side = where_falls_to(check["sigma_allow"], 0.01, 1.0, [moment](double a) {
     return moment / solid_square(a).W_el_y;
   });
@@ -140,92 +124,173 @@ Answers joist(const Check& check) {
           {"tau_max_at_a", beam.V_max() / solid_square(side).A_v_z}};
 }
 
-/// "P 0.2 1.0/q 0.4 0.9 1.0 3.0/M 0.6 0.1": forces downwards, moments counter-clockwise, so that a
-/// moment's sign turns (ours moves what lies beyond it along the loads).
-std::vector<Load> listed_loads(const std::string& text) {
+/// The diameter of a round rod at which one limit state is just met.
+double diameter(const char* id, const Check& check, const MemberLimits& limits) {
+  const LimitState& state = *limit_state(id);
+  const double length = check["L"];
+  const LoadEffects effects = reduce(cantilever({axial(check["F"])}), length);
+  MemberMaterial material;
+  material.E = check["E"];
+  material.sigma_y = check["sigma_allow"];
+  return where_falls_to(1.0, 1e-3, 1.0, [&](double d) {
+    return state.utilisation({solid_round(d), material, effects, limits, length, 1.0});
+  });
+}
+
+Answers tie_rod(const Check& check) {
+  if (limit_state("elongation") == nullptr) {
+    return {};  // every output is then reported as unanswered
+  }
+  MemberLimits limits;
+  limits.elongation = check["delta_max"];
+  const double by_strength = diameter("yield", check, limits);
+  const double by_stiffness = diameter("elongation", check, limits);
+  const double d = std::max(by_strength, by_stiffness);
+  return {{"A_strength", solid_round(by_strength).area},
+          {"A_stiffness", solid_round(by_stiffness).area},
+          {"A_min", solid_round(d).area},
+          {"d_min", d}};
+}
+
+/// loads_1_1=P; loads_1_2=place; loads_1_3=size; q from, to, at from, at to; M place, size. Forces
+/// downwards, moments counter-clockwise, so that a moment's sign turns.
+std::vector<Load> listed_loads(const Check& check) {
   std::vector<Load> loads;
-  std::istringstream items(text);
-  std::string item;
-  while (std::getline(items, item, '/')) {
-    std::vector<double> numbers;
-    const std::string kind = item.substr(0, 1);
-    std::size_t at = 2;
-    while (at < item.size()) {
-      const std::size_t end = std::min(item.find(' ', at), item.size());
-      numbers.push_back(parse_printed(item.substr(at, end - at)).si);
-      at = end + 1;
-    }
+  for (int i = 1; check.words.count("loads_" + std::to_string(i) + "_1") != 0; ++i) {
+    const std::string row = "loads_" + std::to_string(i) + "_";
+    const std::string& kind = check.words.at(row + "1");
     if (kind == "P") {
-      loads.push_back(force(numbers.at(1), numbers.at(0)));
+      loads.push_back(force(check[row + "3"], check[row + "2"]));
     } else if (kind == "q") {
-      loads.push_back(distributed(numbers.at(2), numbers.at(3), numbers.at(0), numbers.at(1)));
+      loads.push_back(
+          distributed(check[row + "4"], check[row + "5"], check[row + "2"], check[row + "3"]));
     } else {
-      loads.push_back(moment(-numbers.at(1), numbers.at(0)));
+      loads.push_back(moment(-check[row + "3"], check[row + "2"]));
     }
   }
   return loads;
 }
 
-Answers unit_beam(const Check& check) {
-  const bool fixed = starts_with(check.title, "cantilever");
-  double at = 0.0;
-  std::vector<Load> loads;
-  if (check.words.count("loads") != 0) {
-    loads = listed_loads(check.words.at("loads"));
-  } else if (check.title.find("0.4 L from the left") != std::string::npos) {
-    at = 0.4;
-    loads = {distributed(1.0, 1.0, 0.0, 0.4)};
-  } else if (check.title.find("0.6 L from the root") != std::string::npos) {
-    loads = {distributed(1.0, 1.0, 0.0, 0.6)};
-  } else if (check.title.find("triangular") != std::string::npos) {
-    loads = {distributed(0.0, 1.0, 0.0, 0.5), distributed(1.0, 0.0, 0.5, 1.0)};
-  } else if (check.title.find("moment at the right end") != std::string::npos) {
-    loads = {moment(1.0, 1.0)};
-  } else {
-    const std::size_t place = check.title.find("at 0.") + 3;
-    at = parse_printed(check.title.substr(place, 4)).si;
-    loads = {force(1.0, at)};
+/// The number after "at 0." in a title, 0 without one.
+double place_in_title(const Check& check) {
+  const std::size_t place = check.title.find("at 0.");
+  const std::size_t assigned = check.title.find("at a=0.");
+  const std::size_t start = place != std::string::npos      ? place + 3
+                            : assigned != std::string::npos ? assigned + 5
+                                                            : std::string::npos;
+  return start == std::string::npos ? 0.0 : parse_printed(check.title.substr(start, 4)).si;
+}
+
+std::vector<Load> loads_of_title(const Check& check) {
+  if (check.words.count("loads_1_1") != 0) {
+    return listed_loads(check);
   }
-  const Beam beam(fixed ? Support::cantilever : Support::pinned_pinned, loads, 1.0, 1.0);
-  return {{"R1", beam.R_left()},
-          {"R2", beam.R_right()},
-          {"R_0", beam.R_left()},
-          {"R_1", beam.R_right()},
-          {"R_abs", std::abs(beam.R_left())},
-          {"M_max", std::abs(beam.M_max())},
-          {"M_abs_max", std::abs(beam.M_max())},
-          {"x_M", beam.x_of_M_max()},
-          {"y_max", beam.w_max()},
-          {"x", beam.x_of_w_max()},
-          {"x_y", beam.x_of_w_max()},
-          {"y_at_a", beam.w(at)},
-          {"y_under_load", beam.w(at)},
-          {"y_tip", beam.w(1.0)},
-          {"rot_tip", beam.slope(1.0)},
-          {"rot_far", std::abs(beam.slope(0.0))},
-          {"rot_near", std::abs(beam.slope(1.0))}};
+  const double q = check["load"];
+  const double at = place_in_title(check);
+  if (mentions(check, "over 0.4 L from the left")) {
+    return {distributed(q, q, 0.0, 0.4)};
+  }
+  if (mentions(check, "over 0.6 L from the root")) {
+    return {distributed(q, q, 0.0, 0.6)};
+  }
+  if (mentions(check, "peak at mid-span")) {
+    return {distributed(0.0, q, 0.0, 0.5), distributed(q, 0.0, 0.5, 1.0)};
+  }
+  if (mentions(check, "triangular load")) {
+    return {distributed(0.0, q, 0.0, 1.0)};
+  }
+  if (mentions(check, "on the overhang")) {
+    return {distributed(q, q, 1.0, 1.3)};
+  }
+  if (mentions(check, "UDL over everything")) {
+    return {distributed(q, q, 0.0, 1.3)};
+  }
+  if (mentions(check, "half next to the pin")) {
+    return {distributed(q, q, 0.5, 1.0)};
+  }
+  if (mentions(check, "UDL")) {
+    return {distributed(q, q, 0.0, 1.0)};
+  }
+  if (mentions(check, "moment at the")) {
+    return {moment(q, 1.0)};
+  }
+  if (mentions(check, "moment at a=")) {
+    return {moment(q, at)};
+  }
+  if (mentions(check, "tip load")) {
+    return {force(q, 1.0)};
+  }
+  return {force(q, mentions(check, "central load") ? 0.5 : at)};
+}
+
+/// Beams with L = EI = 1; the overhang reaches to 1.3.
+Answers unit_beam(const Check& check) {
+  const bool overhangs = mentions(check, "overhang");
+  LoadCase load_case = held(support_of(check), loads_of_title(check));
+  if (overhangs) {
+    load_case.second_support = 1.0;
+  }
+  const double length = overhangs ? 1.3 : 1.0;
+  BeamStiffness stiffness = {.bending = check["EI"]};
+  if (check.inputs.count("kappa_GA") != 0) {
+    stiffness.shear = check["kappa_GA"];
+  }
+  const Beam beam(load_case, length, stiffness);
+  const BeamRange deflections = beam.response().deflections();
+  const BeamRange moments = beam.response().moments();
+  const double at = mentions(check, "over 0.4 L") ? 0.4 : place_in_title(check);
+  // The reduction leaves reactions as they are without shear, so that it does not know the largest
+  // deflection of a statically indeterminate beam with it to first order only.
+  const double largest = stiffness.shear ? deflections.largest().value : beam.w_max();
+  Answers answers = {{"R1", beam.R(0)},
+                     {"R_0", beam.R(0)},
+                     {"R_abs", std::abs(beam.R(0))},
+                     {"R", std::abs(beam.R(0))},
+                     {"R_fix", beam.R(0)},
+                     {"R_left", beam.R(0)},
+                     {"M_fix", beam.M_react(0)},
+                     {"M_fix_abs", std::abs(beam.M_react(0))},
+                     {"M_left", beam.M_react(0)},
+                     {"M_A", std::abs(beam.M_react(0))},
+                     {"M_react_0", beam.M_react(0)},
+                     {"M_max", beam.M_max()},
+                     {"M_abs_max", beam.M_max()},
+                     {"M_span", -moments.least.value},
+                     {"M_support", beam.moment(1.0)},
+                     {"x_M", moments.largest().x},
+                     {"y", largest},
+                     {"y_max", largest},
+                     {"y_up", -deflections.least.value},
+                     {"x", deflections.largest().x},
+                     {"x_y", deflections.largest().x},
+                     {"x_from_pin", length - deflections.largest().x},
+                     {"y_at_a", beam.w(at)},
+                     {"y_under_load", beam.w(at)},
+                     {"y_tip", beam.w(length)},
+                     {"rot_tip", beam.rotation(length)},
+                     {"rot_far", std::abs(beam.rotation(0.0))},
+                     {"rot_near", beam.rotation_max()},
+                     {"rot_pin", beam.rotation_max()}};
+  if (load_case.support_z != Support::cantilever) {
+    answers["R2"] = answers["R_1"] = answers["R_pin"] = answers["R_right"] = beam.R(1);
+    answers["M_right"] = -beam.M_react(1);
+    answers["M_B"] = std::abs(beam.M_react(1));
+    answers["M_react_1"] = beam.M_react(1);
+  }
+  return answers;
 }
 
 }  // namespace
 
 std::optional<Answers> beam_answers(const Check& check) {
   if (starts_with(check.id, "BEAM")) {
+    if (check.inputs.count("delta_max") != 0) {
+      return tie_rod(check);
+    }
     return check.inputs.count("sigma_allow") != 0 ? joist(check) : table_beam(check);
   }
   if (starts_with(check.id, "BMX")) {
     return unit_beam(check);
-  }
-  if (check.id == "TIM-032") {
-    // A floor joist: deflection under the instantaneous load, stress under the design load.
-    const double L = check["L"];
-    const SectionProperties s = solid_rectangle(check["h"], check["b"]);
-    const double q = check["q_instantaneous"];
-    const Beam service(
-        Support::pinned_pinned, {distributed(q, q, 0.0, L)}, L, check["E_mean"] * s.I_y);
-    const double q_design = (1.35 * check["G_k"] + 1.5 * check["Q_k"]) * check["spacing"];
-    const Beam design(Support::pinned_pinned, {distributed(q_design, q_design, 0.0, L)}, L, 1.0);
-    return Answers{{"w_bending", service.w_max()},
-                   {"sigma_m", std::abs(design.M_max()) / s.W_el_y}};
   }
   return std::nullopt;
 }

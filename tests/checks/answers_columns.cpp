@@ -2,6 +2,7 @@
 #include "checks/mechanics_answers.hpp"
 
 #include <bismar/mechanics/column.hpp>
+#include <bismar/mechanics/load_effects.hpp>
 #include <bismar/mechanics/section.hpp>
 
 #include <algorithm>
@@ -33,7 +34,8 @@ Answers euler_tubes(const Check& check) {
   const SectionProperties s = round_tube(outer, (outer - check["d_i"]) / 2.0, Forming::unknown);
   // The checks use K = 1, 2 and 0.5, and 0.7 (COL-008) or the root of tan x = x (COL-001) for
   // fixed-pinned.
-  const double fixed_pinned = check.inputs.count("Sy") != 0 ? 0.7 : 0.6991557;
+  const double fixed_pinned =
+      check.inputs.count("Sy") != 0 ? 0.7 : effective_length_factor(Support::fixed_pinned);
   const auto load = [&](double K) {
     if (check.inputs.count("Sy") != 0) {
       return johnson_critical_load(s.area, check["Sy"], check["E"], K * check["L"] / s.i_y());
@@ -105,15 +107,13 @@ Answers american(const Check& check) {
   const auto get = [&](const char* name, double otherwise) {
     return check.inputs.count(name) != 0 ? check[name] : otherwise;
   };
-  constexpr double ksi = 6894757.293168361;
-  const double E = get("E", 29000.0 * ksi);
-  const double Fy = get("Fy", 50.0 * ksi);  // STL-029 names both in its title only
-  const double area = get("Ag", get("A", 1.0));
+  const double E = check["E"];
+  const double Fy = check["Fy"];
+  const double area = get("Ag", 1.0);
   double slenderness = get("KL_r", 0.0);
   Answers answers;
-  if (check.inputs.count("ry") != 0 || check.inputs.count("r_y") != 0) {
-    const double r_y = get("ry", get("r_y", 0.0));
-    const double about_y = get("KLy", get("KL", 14.0 * 12.0 * 0.0254)) / r_y;
+  if (check.inputs.count("ry") != 0) {
+    const double about_y = get("KLy", get("KL", 0.0)) / check["ry"];
     const double about_x = check.inputs.count("rx") != 0 ? check["KLx"] / check["rx"] : 0.0;
     answers["KLx_rx"] = about_x;
     answers["KLy_ry"] = about_y;
@@ -137,73 +137,6 @@ Answers american(const Check& check) {
   return answers;
 }
 
-Answers aluminium_column(const Check& check) {
-  const bool class_a = starts_with(check.words.at("buckling_class"), "A");
-  const SectionProperties s =
-      rectangular_tube(check["b"], check["b"], check["t"], Corners::sharp, Forming::extruded);
-  const double critical = euler_critical_load(check["E"], s.I_y, check["L_cr"]);
-  const double lambda = relative_slenderness(s.area, check["f_o"], critical);
-  const double factor = reduction_factor(aluminium_curve(class_a), lambda);
-  return {{"A", s.area},
-          {"I", s.I_y},
-          {"N_cr", critical},
-          {"lambda_bar", lambda},
-          {"chi", factor},
-          {"N_b_Rd", factor * s.area * check["f_o"] / check["gamma_M1"]}};
-}
-
-Answers timber_column(const Check& check) {
-  if (check.inputs.count("slenderness") != 0) {
-    // A = 1, I = i^2 = 1: the effective length is the slenderness.
-    const auto relative = [&](double slenderness) {
-      return relative_slenderness(
-          1.0, check["f_c_0_k"], euler_critical_load(check["E_0_05"], 1.0, slenderness));
-    };
-    const double at_100 = relative(check["slenderness"]);
-    return {{"lambda_rel_100", at_100},
-            {"lambda_for_0.3", 0.3 / (at_100 / check["slenderness"])},
-            {"kc_100", reduction_factor(timber_curve(false), at_100)}};
-  }
-  const SectionProperties s = solid_rectangle(check["h"], check["b"]);
-  const double N = check["gamma_G"] * check["G_k"] + check["gamma_Q"] * check["Q_k"];
-  const double L = check["L"];
-  const auto relative = [&](double I) {
-    return relative_slenderness(
-        s.area, check["f_c_0_k"], euler_critical_load(check["E_0_05"], I, L));
-  };
-  return {{"lambda_y", L / s.i_y()},
-          {"lambda_z", L / s.i_z()},
-          {"lambda_rel_y", relative(s.I_y)},
-          {"lambda_rel_z", relative(s.I_z)},
-          {"kc_y", reduction_factor(timber_curve(false), relative(s.I_y))},
-          {"kc_z", reduction_factor(timber_curve(false), relative(s.I_z))},
-          {"sigma_c", N / s.area},
-          {"sigma_m_y", N * check["e_z (moment about y-y)"] / s.W_el_y},
-          {"sigma_m_z", N * check["e_y (moment about z-z)"] / s.W_el_z}};
-}
-
-Answers beam_column_factors(const Check& check) {
-  const double A = check["A"];
-  const double L = check["L"];
-  const double f = check["f_y"];
-  const auto relative = [&](double I) {
-    return relative_slenderness(A, f, euler_critical_load(210e9, I, L));
-  };
-  if (check.id == "STL-020") {
-    const SectionProperties s = i_section(0.200, 0.200, 0.009, 0.015, 0.018);  // HEB 200
-    const double lambda_y = relative(check["I_y"]);
-    const double lambda_z = relative(check["I_z"]);
-    return {{"lambda_y", lambda_y},
-            {"lambda_z", lambda_z},
-            {"chi_y", chi(buckling_curve(s, BendingAxis::y), lambda_y)},
-            {"chi_z", chi(buckling_curve(s, BendingAxis::z), lambda_z)}};
-  }
-  const SectionProperties s =
-      rectangular_tube(0.100, 0.100, 0.005, Corners::en_10210, Forming::hot_finished);
-  const double lambda = relative(check["I"]);
-  return {{"lambda_bar", lambda}, {"chi", chi(buckling_curve(s, BendingAxis::y), lambda)}};
-}
-
 }  // namespace
 
 double where_falls_to(double target,
@@ -224,16 +157,15 @@ std::optional<Answers> column_answers(const Check& check) {
                    {"chi_a", chi(BucklingCurve::a, lambda)},
                    {"chi_b", chi(BucklingCurve::b, lambda)},
                    {"chi_c", chi(BucklingCurve::c, lambda)},
-                   {"chi_d", chi(BucklingCurve::d, lambda)},
-                   {"chi_A", reduction_factor(aluminium_curve(true), lambda)},
-                   {"chi_B", reduction_factor(aluminium_curve(false), lambda)}};
+                   {"chi_d", chi(BucklingCurve::d, lambda)}};
   }
-  if (check.inputs.count("lambda_rel") != 0) {
-    const double lambda = check["lambda_rel"];
-    return Answers{{"kc_solid", reduction_factor(timber_curve(false), lambda)},
-                   {"kc_glulam", reduction_factor(timber_curve(true), lambda)}};
+  const auto ends = check.words.find("ends");
+  if (ends != check.words.end()) {
+    const Support support =
+        ends->second == "fixed-fixed" ? Support::fixed_fixed : Support::fixed_pinned;
+    return Answers{{"K", effective_length_factor(support)}};
   }
-  if (check.title.find("AISC") != std::string::npos || check.id == "STL-029") {
+  if (check.title.find("AISC") != std::string::npos) {
     return american(check);
   }
   if (check.id == "COL-010") {
@@ -257,15 +189,6 @@ std::optional<Answers> column_answers(const Check& check) {
   if (starts_with(check.id, "COL")) {
     const bool tube = check.inputs.count("d_o") != 0 || check.inputs.count("r_o") != 0;
     return tube ? euler_tubes(check) : round_sizing(check);
-  }
-  if (starts_with(check.id, "ALU")) {
-    return aluminium_column(check);
-  }
-  if (starts_with(check.id, "TIM") && check.id != "TIM-032") {
-    return timber_column(check);
-  }
-  if (check.id == "STL-020" || check.id == "STL-022") {
-    return beam_column_factors(check);
   }
   return std::nullopt;
 }

@@ -4,18 +4,16 @@
 #include <bismar/mechanics/limit_state.hpp>
 #include <bismar/mechanics/member.hpp>
 #include <bismar/mechanics/section.hpp>
+#include <bismar/mechanics/shaft.hpp>
 #include <bismar/mechanics/stress.hpp>
 #include <bismar/mechanics/torsion.hpp>
 #include <bismar/mechanics/wall.hpp>
 
-#include <cmath>
-#include <numbers>
+#include <optional>
 
 namespace bismar::checks {
 
 namespace {
-
-constexpr double pi = std::numbers::pi;
 
 /// u of one limit state at one section with the given internal forces.
 double utilisation(const char* id,
@@ -75,61 +73,97 @@ Answers walls(const Check& check) {
 
 Answers thin_tubes(const Check& check) {
   if (check.id == "SHF-001") {
-    // The check's sides are those of the outline.
-    const double b = check["b"] - check["t"];
-    const double h = check["h"] - check["t"];
-    const double t = check["t"];
-    const double torque = check["tau_allow"] / bredt_shear_stress(1.0, b * h, t);
-    const double J = bredt_torsion_constant(b * h, t, 2.0 * (b + h));
-    return {{"T", torque}, {"theta", torque * check["L"] / (check["G"] * J)}};
+    const MidLine line = rectangular_mid_line(check["h"], check["b"], check["t"]);
+    const double torque =
+        check["tau_allow"] / bredt_shear_stress(1.0, line.enclosed_area, check["t"]);
+    const double J = bredt_torsion_constant(line.enclosed_area, check["t"], line.length);
+    const double theta = torque * check["L"] / (check["G"] * J);
+    return {{"A_m", line.enclosed_area},
+            {"L_m", line.length},
+            {"T", torque},
+            {"theta", theta},
+            {"theta_deg", theta}};
   }
   if (check.id == "SHF-002") {
-    const double enclosed = pi * check["r"] * check["r"] + 2.0 * check["r"] * check["b"];
-    const double mid_line = 2.0 * pi * check["r"] + 2.0 * check["b"];
-    return {{"J", bredt_torsion_constant(enclosed, check["t"], mid_line)},
-            {"tau", bredt_shear_stress(check["T"], enclosed, check["t"])}};
+    const MidLine line = flat_oval_mid_line(check["r"], check["b"]);
+    const double J = bredt_torsion_constant(line.enclosed_area, check["t"], line.length);
+    return {{"A_m", line.enclosed_area},
+            {"L_m", line.length},
+            {"J", J},
+            {"tau", bredt_shear_stress(check["T"], line.enclosed_area, check["t"])},
+            {"theta_deg", check["T"] * check["L"] / (check["G"] * J)}};
   }
   if (check.id == "SHF-004") {
     const double r = (check["d_inner"] + check["t"]) / 2.0;
     const SectionProperties s =
         round_tube(check["d_inner"] + 2.0 * check["t"], check["t"], Forming::unknown);
-    return {{"tau_thin", bredt_shear_stress(check["T"], pi * r * r, check["t"])},
+    const MidLine line = flat_oval_mid_line(r, 0.0);
+    return {{"tau_thin", bredt_shear_stress(check["T"], line.enclosed_area, check["t"])},
             {"tau_exact", check["T"] / s.W_t}};
   }
-  const double enclosed = (check["h"] - check["t"]) * (check["b"] - check["t"]);
-  const auto stress = [&](double t) { return bredt_shear_stress(check["T"], enclosed, t); };
+  const MidLine line = rectangular_mid_line(check["h"], check["b"], check["t"]);
+  const auto stress = [&](double t) {
+    return bredt_shear_stress(check["T"], line.enclosed_area, t);
+  };
   constexpr double inch = 0.0254;
-  return {{"tau", stress(check["t"])},
+  return {{"A_m", line.enclosed_area},
+          {"q", stress(check["t"]) * check["t"]},
+          {"tau", stress(check["t"])},
           {"tau_at_t_0.120", stress(0.120 * inch)},
           {"tau_at_t_0.200", stress(0.200 * inch)}};
 }
 
+Answers strip(const Check& check) {
+  const double tau = check["tau_allow"];
+  const double b = check["b"];
+  const double c = check["c"];
+  return {{"T_thin", thin_strip_torque(tau, b, c)},
+          {"T_rect_formula", rectangle_torque_estimate(tau, b, c)},
+          {"T_series", tau * rectangle_torsion(b / c).k1 * b * c * c}};
+}
+
+/// A shaft under bending and torsion by three criteria.
+Answers three_theories(const Check& check) {
+  MemberMaterial ductile;
+  ductile.sigma_y = check["fy"];
+  MemberMaterial brittle;
+  brittle.rule = StressRule::principal;
+  brittle.tensile = brittle.flexural = brittle.compressive = check["fy"];
+  const InternalForces forces{.M_y = check["M"], .T = check["T"]};
+  const auto tube = [&](double D) {
+    return round_tube(D, D * (1.0 - check["d_over_D"]) / 2.0, Forming::unknown);
+  };
+  const auto diameter = [&](const char* id, const MemberMaterial& material) {
+    return where_falls_to(1.0, 5e-3, 0.5, [&](double D) {
+      return utilisation(id, tube(D), material, forces, check["n"]);
+    });
+  };
+  const double by_shear =
+      where_falls_to(check["fy"] / (2.0 * check["n"]), 5e-3, 0.5, [&](double D) {
+        const SectionProperties s = tube(D);
+        return largest_shear_stress(check["M"] / s.W_el_y, check["T"] / s.W_t);
+      });
+  return {{"D_von_mises", diameter("yield", ductile)},
+          {"D_max_principal", diameter("brittle fracture", brittle)},
+          {"D_max_shear", by_shear}};
+}
+
 Answers shafts(const Check& check) {
   if (check.id == "SHF-007") {
-    const double b = check["b"];
-    const double c = check["c"];
-    return {{"T_series", check["tau_allow"] * rectangle_torsion(b / c).k1 * b * c * c}};
+    return strip(check);
   }
   if (check.id == "SHF-008") {
     const double equivalent = von_mises(check["sigma"], check["tau"]);
     return {{"sigma_vm", equivalent}, {"n_y", check["Sy"] / equivalent}};
   }
   if (check.id == "SHF-010") {
-    MemberMaterial ductile;
-    ductile.sigma_y = check["fy"];
-    MemberMaterial brittle;
-    brittle.rule = StressRule::principal;
-    brittle.tensile = brittle.flexural = brittle.compressive = check["fy"];
-    const InternalForces forces{.M_y = check["M"], .T = check["T"]};
-    const auto diameter = [&](const char* id, const MemberMaterial& material) {
-      return where_falls_to(1.0, 5e-3, 0.5, [&](double D) {
-        const double wall = D * (1.0 - check["d_over_D"]) / 2.0;
-        const SectionProperties tube = round_tube(D, wall, Forming::unknown);
-        return utilisation(id, tube, material, forces, check["n"]);
-      });
-    };
-    return {{"D_von_mises", diameter("yield", ductile)},
-            {"D_max_principal", diameter("brittle fracture", brittle)}};
+    return three_theories(check);
+  }
+  if (check.id == "SHF-011") {
+    return {{"d", where_falls_to(check["tau_allow"], 5e-3, 0.5, [&](double d) {
+               const SectionProperties s = solid_round(d);
+               return largest_shear_stress(check["M"] / s.W_el_y, check["T"] / s.W_t);
+             })}};
   }
   const double torque = check["T"];
   const double q = check["d_over_D"];
@@ -141,18 +175,6 @@ Answers shafts(const Check& check) {
   return {{"d_solid", solid},
           {"D_hollow", hollow},
           {"mass_ratio_hollow_solid", tube(hollow).area / solid_round(solid).area}};
-}
-
-Answers bolts(const Check& check) {
-  const double K = check["K"];
-  const double d = check["d"];
-  if (check.inputs.count("T") != 0) {
-    return {{"F", check["T"] / torque_from_preload(K, 1.0, d)}};
-  }
-  if (check.inputs.count("Fi") != 0) {
-    return {{"T_K", torque_from_preload(K, check["Fi"], d)}};
-  }
-  return {{"T", torque_from_preload(K, check["fraction"] * check["As"] * check["Sp"], d)}};
 }
 
 Answers interaction(const Check& check) {
@@ -178,9 +200,6 @@ std::optional<Answers> stress_answers(const Check& check) {
   }
   if (starts_with(check.id, "SHF")) {
     return shafts(check);
-  }
-  if (starts_with(check.id, "BLT")) {
-    return bolts(check);
   }
   if (check.id == "STL-023") {
     return interaction(check);

@@ -55,7 +55,23 @@ double unit_in_si(const std::string& unit) {
                                                       {"lbf.in", lbf * inch},
                                                       {"psi", lbf / (inch * inch)},
                                                       {"ksi", 1e3 * lbf / (inch * inch)},
-                                                      {"Mlbf/in", 1e6 * lbf / inch}};
+                                                      {"Mlbf/in", 1e6 * lbf / inch},
+                                                      {"kip/in", 1e3 * lbf / inch},
+                                                      {"in4", inch * inch * inch * inch},
+                                                      {"dm6", 1e-6},
+                                                      {"1e9.mm6", 1e-9},
+                                                      {"um", 1e-6},
+                                                      {"mm^0.5", 0.031622776601683794},
+                                                      {"in^0.5", 0.15937377450509228},
+                                                      {"Hz", 1.0},
+                                                      {"V", 1.0},
+                                                      {"C", 1.0},
+                                                      {"kg", 1.0},
+                                                      {"kg/m3", 1.0},
+                                                      {"Mg/m3", 1e3},
+                                                      {"MPa.m^0.5", 1e6},
+                                                      {"MPa^(2/3).m3/Mg", 10.0},
+                                                      {"b tf/(h tw)", 1.0}};
   const auto found = units.find(unit);
   if (found == units.end()) {
     throw std::runtime_error("unit \"" + unit + "\" is not in the table of check units");
@@ -141,7 +157,9 @@ Check make_check(const std::map<std::string, std::string>& row) {
   check.title = row.at("title");
   for (auto& [name, value] : split_pairs(row.at("inputs"))) {
     std::string_view rest;
-    if (number_in(value, &rest)) {
+    // A list such as "8.8, 10.9" or a formula such as "1.77-1.04psi" is a word, not a number with a
+    // unit.
+    if (number_in(value, &rest) && rest.substr(0, 1) != "," && rest.substr(0, 1) != "-") {
       check.inputs[name] = parse_printed(value);
     } else {
       check.words[name] = value;

@@ -54,6 +54,12 @@ SectionProperties section_of(const Row& row) {
                      mm("flange"),
                      mm("root radius"),
                      parse_printed(row.at("flange slope")).si);
+    case SectionFamily::solid_hexagon:
+    case SectionFamily::elliptical_tube:
+    case SectionFamily::tee:
+    case SectionFamily::angle:
+    case SectionFamily::polygon:
+      break;  // no list of the starter tables has them
   }
   throw std::runtime_error("unknown shape");
 }

@@ -18,7 +18,8 @@ inline const std::string full_job = R"json({
     "stock": ["starter"],
     "routes": ["starter"],
     "finishes": ["starter"],
-    "operations": ["starter"]
+    "operations": ["starter"],
+    "weld_zones": ["starter"]
   },
   "settings": {
     "missing": "exclude",
@@ -90,6 +91,55 @@ inline const std::string full_job = R"json({
       "finishes": ["none", "galvanising"],
       "operations": [{ "operation": "saw-cut", "units": 2 }],
       "service_class": 2
+    },
+    {
+      "name": "every member",
+      "member": {
+        "length": "2 m",
+        "shapes": [
+          { "hexagon": { "width_across_flats": "10 mm..60 mm" } },
+          { "elliptical_tube": { "height_to_width": 2, "wall_to_height": 0.06 } },
+          { "i_section": { "height_to_width": 2, "web_to_height": 0.05, "flange_to_height": 0.08,
+                           "root_radius_to_height": 0.03 } },
+          { "channel": { "height_to_width": 2, "web_to_height": 0.06, "flange_to_height": 0.06 } },
+          { "t_section": { "height_to_width": 1, "web_to_height": 0.1, "flange_to_height": 0.1 } },
+          { "angle": { "height_to_width": 1.5, "wall_to_height": 0.1 } },
+          { "polygon": { "outline": [["0 mm", "0 mm"], ["40 mm", "0 mm"], ["40 mm", "50 mm"],
+                                     ["0 mm", "50 mm"]],
+                         "holes": [[["10 mm", "10 mm"], ["30 mm", "10 mm"], ["30 mm", "40 mm"]]],
+                         "height": "20 mm..90 mm" } }
+        ],
+        "load_cases": [
+          {
+            "name": "built in",
+            "support": { "z": "fixed pinned", "y": "fixed" },
+            "own_weight": true,
+            "loads": [{ "force": "-1 kN", "at": "middle" }],
+            "eccentricity": "3 mm",
+            "temperature_change": "-30 K",
+            "restrained": true,
+            "fatigue": { "cycles": 200000, "stress_ratio": 0 }
+          },
+          {
+            "name": "overhanging",
+            "support": "pinned",
+            "second_support": "1.5 m",
+            "acceleration": { "z": "15 m/s2", "y": "2 m/s2" }
+          }
+        ],
+        "details": {
+          "net_area": "90 %", "net_modulus": 0.8, "k_t_axial": 2, "k_t_bending": 1.8,
+          "k_t_torsion": 1.5, "notch_radius": "2 mm", "surface": "as forged",
+          "reliability": "99.9 %", "criterion": "gerber", "detail_category": "80 MPa",
+          "welded": true,
+          "crack": { "kind": "surface", "depth": "1 mm", "half_length": "3 mm" },
+          "masses": [{ "mass": "4 kg", "at": "end" }]
+        }
+      },
+      "limits": {
+        "deflection": "10 mm", "shear_deflection": true, "rotation": "1 deg", "frequency": "8 Hz",
+        "elongation": "1 mm", "lateral_restraint": true
+      }
     }
   ],
   "exchange": { "mass": "0.5 EUR/kg..500 EUR/kg" }

@@ -131,7 +131,7 @@ TEST_CASE("a table with semicolons and decimal commas is read by option") {
       folder.path());
   CHECK(job.catalogue.materials.size() == 1);
   CHECK(job.catalogue.materials.value(Property::price, 0)->low == 1.25);
-  REQUIRE(job.sources.size() == 5);
+  REQUIRE(job.sources.size() == 6);
   CHECK(job.sources[0].kind == "materials");
   CHECK(job.sources[0].file == "own.csv");
 }

@@ -18,7 +18,7 @@ TEST_CASE("a small job takes the documented defaults") {
   CHECK(job.currency == "EUR");
   CHECK(job.catalogue.currency == "EUR");
   CHECK(job.catalogue.materials.size() > 100);
-  CHECK(job.sources.size() == 5);
+  CHECK(job.sources.size() == 6);
   CHECK_FALSE(job.exchange.has_value());
   REQUIRE(job.parts.size() == 1);
   CHECK(job.places.at("/parts/0") == "small.json:4:5");
@@ -243,4 +243,68 @@ TEST_CASE("a part is found by its name, and a misspelt name is helped") {
     CHECK(error.faults()[0].message ==
           "the job has no part \"baar\". Did you mean \"bar\"? Its parts: \"bar\".");
   }
+}
+
+TEST_CASE("whole members of a job are read in SI units") {
+  const Part part = load_job_text(full_job, "full.json").parts.at(1);
+  const Member& member = part.body;
+  REQUIRE(member.shapes.size() == 7);
+  CHECK(member.shapes[0].family == SectionFamily::solid_hexagon);
+  CHECK(member.shapes[0].height_max == 0.06);
+  CHECK(member.shapes[1].family == SectionFamily::elliptical_tube);
+  CHECK(member.shapes[1].wall_to_height == 0.06);
+  CHECK(member.shapes[2].family == SectionFamily::i_section);
+  CHECK(member.shapes[2].web_to_height == 0.05);
+  CHECK(member.shapes[2].flange_to_height == 0.08);
+  CHECK(member.shapes[2].root_radius_to_height == 0.03);
+  CHECK(member.shapes[4].family == SectionFamily::tee);
+  CHECK(member.shapes[5].family == SectionFamily::angle);
+  CHECK(member.shapes[5].wall_to_height == 0.1);
+  const Shape& polygon = member.shapes[6];
+  REQUIRE(polygon.outline.size() == 4);
+  CHECK(polygon.outline[2] == SectionPoint{0.04, 0.05});
+  REQUIRE(polygon.holes.size() == 1);
+  CHECK(polygon.holes[0][2] == SectionPoint{0.03, 0.04});
+  CHECK(polygon.height_min == 0.02);
+
+  const LoadCase& built_in = member.load_cases[0];
+  CHECK(built_in.support_z == Support::fixed_pinned);
+  CHECK(built_in.support_y == Support::fixed_fixed);
+  CHECK(built_in.acceleration_z == 9.80665);
+  CHECK(built_in.acceleration_y == 0.0);
+  CHECK(built_in.eccentricity == 0.003);
+  CHECK(built_in.temperature_change == -30.0);
+  CHECK(built_in.restrained);
+  REQUIRE(built_in.fatigue.has_value());
+  CHECK(built_in.fatigue->cycles == 200000.0);
+  CHECK(built_in.fatigue->stress_ratio == 0.0);
+  const LoadCase& overhanging = member.load_cases[1];
+  CHECK(overhanging.second_support == 1.5);
+  CHECK(overhanging.acceleration_z == 15.0);
+  CHECK(overhanging.acceleration_y == 2.0);
+  CHECK(overhanging.loads.empty());
+
+  const MemberDetails& details = member.details;
+  CHECK(details.net_area == 0.9);
+  CHECK(details.net_modulus == 0.8);
+  CHECK(details.k_t_axial == 2.0);
+  CHECK(details.k_t_bending == 1.8);
+  CHECK(details.k_t_torsion == 1.5);
+  CHECK(details.notch_radius == 0.002);
+  CHECK(details.surface == SurfaceFinish::as_forged);
+  CHECK(details.reliability == 0.999);
+  CHECK(details.criterion == FatigueCriterion::gerber);
+  CHECK(details.detail_category == 80e6);
+  CHECK(details.welded);
+  REQUIRE(details.crack.has_value());
+  CHECK(details.crack->kind == Crack::Kind::surface);
+  CHECK(details.crack->half_length == 0.003);
+  REQUIRE(details.masses.size() == 1);
+  CHECK(details.masses[0].at == 2.0);
+
+  CHECK(part.limits.shear_deflection);
+  CHECK(part.limits.rotation == Approx(0.017453292519943295));
+  CHECK(part.limits.frequency == 8.0);
+  CHECK(part.limits.elongation == 0.001);
+  CHECK(part.limits.lateral_restraint);
 }

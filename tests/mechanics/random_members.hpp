@@ -24,11 +24,12 @@ class RandomSection {
   Forming forming_ = Forming::unknown;
 };
 
-/// Loads of every kind on a member of the given length, sometimes direct forces alone.
+/// Loads of every kind on a member of the given length held in any way, sometimes direct forces
+/// alone; now and then with own mass, eccentricity, heat or fatigue.
 LoadCase random_load_case(std::mt19937& random, double length);
 /// A material of any rule and column law with all values present.
 MemberMaterial random_material(std::mt19937& random);
-/// Every limit set.
-MemberLimits random_limits(std::mt19937& random);
+/// Every limit set, details of the making now and then.
+MemberLimits random_limits(std::mt19937& random, double length);
 
 }  // namespace bismar::test

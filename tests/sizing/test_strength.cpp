@@ -15,11 +15,11 @@ constexpr double hour = 3600.0;
 ResolvedMaterial resolved(const char* id,
                           const LoadCase& load_case = {},
                           const Settings& settings = {},
-                          ServiceClass service = ServiceClass::one) {
+                          ServiceClass service = {ServiceClass::one}) {
   const auto& catalogue = test::starter();
   const auto material = catalogue.materials.find(id).value();
   const PropertyReader reader(catalogue, settings);
-  return resolve(reader, material, catalogue.materials.steps(material)[0].row, load_case, service);
+  return resolve(reader, material, catalogue.materials.steps(material)[0].row, load_case, {service});
 }
 
 LoadCase lasting(double seconds) {
@@ -58,7 +58,7 @@ TEST_CASE(
       }
       ++stated;
       const PropertyReader reader(test::starter(), settings);
-      const auto rule = resolve(reader, m, step.row, {}, ServiceClass::one).member.rule;
+      const auto rule = resolve(reader, m, step.row, {}, {ServiceClass::one}).member.rule;
       INFO(table.info(m).id << ": " << text);
       CHECK((rule == StressRule::von_mises_yield) == (text == "von Mises against yield"));
       CHECK((rule == StressRule::principal) == (text == "largest principal stress"));
@@ -95,7 +95,7 @@ TEST_CASE("graded timber takes k_mod and gamma_M from its row by the duration of
   const auto modulus = [&](ServiceClass service) {
     return *resolved(c24, lasting(20.0 * 8760.0 * hour), {}, service).member.E;
   };
-  CHECK(modulus(ServiceClass::one) == Approx(11e9 / 1.6));
+  CHECK(modulus({ServiceClass::one}) == Approx(11e9 / 1.6));
   CHECK(modulus(ServiceClass::two) == Approx(11e9 / 1.8));
   // Stability with the 5 % value of the row.
   CHECK(*resolved(c24).member.E_05 == Approx(7.4e9));
@@ -143,7 +143,7 @@ TEST_CASE("an unknown elongation leaves a hand-loaded part undecided, unless the
   const auto run = [&](const LoadCase& load_case, const Settings& settings) {
     const PropertyReader reader(catalogue, settings);
     const auto m = catalogue.materials.find("unknown").value();
-    return resolve(reader, m, catalogue.materials.steps(m)[0].row, load_case, ServiceClass::one);
+    return resolve(reader, m, catalogue.materials.steps(m)[0].row, load_case, {ServiceClass::one});
   };
   CHECK(run(by_hand, {}).missing.contains(Property::elongation));
   CHECK(run({}, {}).missing.empty());
@@ -168,7 +168,7 @@ TEST_CASE("short-fibre mouldings are weakened by their orientation factor") {
     }
     ++found;
     const PropertyReader reader(test::starter(), settings);
-    const auto material = resolve(reader, m, row, {}, ServiceClass::one).member;
+    const auto material = resolve(reader, m, row, {}, {ServiceClass::one}).member;
     CHECK(*material.E == Approx(table.value(Property::youngs_modulus, row)->low * factor->low));
   }
   CHECK(found > 5);

@@ -4,6 +4,7 @@
 #include <bismar/catalogue/materials.hpp>
 #include <bismar/catalogue/routes.hpp>
 #include <bismar/catalogue/stock.hpp>
+#include <bismar/catalogue/weld_zones.hpp>
 #include <bismar/export.hpp>
 
 #include <string>
@@ -21,6 +22,7 @@ struct Catalogue {
   std::vector<Route> routes;  ///< Primary ways, treatments and joining.
   std::vector<Finish> finishes;
   std::vector<Operation> operations;
+  std::vector<WeldZone> weld_zones;  ///< Aluminium beside a weld.
   std::string currency = "EUR";
   /// What is odd but no fault, one sentence each: the warnings of the materials, and every class,
   /// group, standard, form or id that another table names and no material has (`unused_names`).
@@ -38,8 +40,9 @@ struct Catalogue {
 [[nodiscard]] BISMAR_API std::vector<std::string> unused_names(const Catalogue& catalogue);
 
 /// Reads the starter tables from a folder laid out like data/ (materials.csv, stock/*.csv,
-/// routes.csv, finishes.csv, operations.csv; lists of sizes in the order of their file names).
-/// Starter values are indicative where marked and unverified where marked: see data/SOURCES.md.
+/// routes.csv, finishes.csv, operations.csv, weld-zones.csv; lists of sizes in the order of their
+/// file names). Starter values are indicative where marked and unverified where marked: see
+/// data/SOURCES.md.
 /// @throws bismar::Error  every fault of every table; table_unreadable also for a missing folder;
 ///   empty for a stock folder without a list.
 [[nodiscard]] BISMAR_API Catalogue read_catalogue(const std::string& folder);

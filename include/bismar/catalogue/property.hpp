@@ -64,9 +64,11 @@ enum class Property : std::uint8_t {
   creep_factor_10y,
   long_term_strength_factor_10y,
   orientation_factor,
+  weld_yield_factor,    ///< Yield strength in the heat-affected zone of a weld over the parent's.
+  weld_tensile_factor,  ///< Likewise tensile strength.
 };
 // NOLINTEND(readability-identifier-naming)
-inline constexpr std::size_t property_count = 47;
+inline constexpr std::size_t property_count = 49;
 
 /// What the library knows of a property.
 ///

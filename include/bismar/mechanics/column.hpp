@@ -70,8 +70,8 @@ enum class BendingAxis : std::uint8_t { y, z };
 ///
 /// Rolled I or H, h/b > 1.2: flange up to 40 mm y a, z b; up to 100 mm y b, z c. h/b <= 1.2: flange
 /// up to 100 mm y b, z c; above 100 mm both d (also for h/b > 1.2, which the table does not list).
-/// Hollow: hot finished a, cold formed c. Solid, channel: c. Anything whose forming is not known:
-/// c. Source: EN 1993-1-1:2005 Table 6.2.
+/// Hollow: hot finished a, cold formed c. Solid, channel, T: c. Angle: b. Anything whose forming is
+/// not known: c. Source: EN 1993-1-1:2005 Table 6.2.
 [[nodiscard]] BISMAR_API BucklingCurve buckling_curve(const SectionProperties& section,
                                                       BendingAxis axis);
 

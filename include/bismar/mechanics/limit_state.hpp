@@ -33,8 +33,9 @@ enum class ColumnLaw : std::uint8_t {
 
 /// How column buckling is computed.
 enum class ColumnMethod : std::uint8_t {
-  curves,  ///< The law of the material (default).
-  euler,   ///< N_cr alone, on request: no imperfection, no yielding; always with a warning.
+  curves,   ///< The law of the material (default).
+  euler,    ///< N_cr alone, on request: no imperfection, no yielding; always with a warning.
+  johnson,  ///< Johnson's parabola, Euler's curve beyond it, on request: no imperfection.
 };
 
 /// The material values that limit states read. Absent means: not in the table.
@@ -48,6 +49,11 @@ enum class Symbol : std::uint8_t {
   compressive,
   flexural,
   shear,
+  alpha,
+  K_Ic,
+  sigma_e,
+  weld_yield,
+  weld_tensile,
 };
 [[nodiscard]] BISMAR_API std::string_view name(Symbol symbol);
 
@@ -67,22 +73,78 @@ struct MemberMaterial {
   std::optional<double> compressive;  ///< Compressive strength [Pa].
   std::optional<double> flexural;     ///< Bending strength [Pa].
   std::optional<double> shear;        ///< Shear strength [Pa].
-  double k_cr = 1.0;                  ///< Timber: shear in bending acts on k_cr of the width.
+  std::optional<double> alpha;        ///< Thermal expansion [1/K].
+  std::optional<double> K_Ic;         ///< Plane-strain fracture toughness [Pa m^0.5].
+  std::optional<double> sigma_e;      ///< Fatigue strength of polished specimens, reversed [Pa].
+  double endurance_cycles = 1e6;      ///< The cycles that sigma_e was measured at.
+  bool steel = false;                 ///< Wrought or cast steel: its sigma_e may be 0.5 sigma_u.
+  bool cast_iron = false;             ///< Notch sensitivity 0.2.
+  /// Strength in the heat-affected zone of a weld over that of the parent: yield and tensile.
+  std::optional<double> weld_yield_factor;
+  std::optional<double> weld_tensile_factor;
+  double k_cr = 1.0;  ///< Timber: shear in bending acts on k_cr of the width.
   /// Timber: k_mod / gamma_M as it is in the strengths already. The relative slenderness of a
   /// column is made of characteristic values (EN 1995-1-1 6.21), so that it divides by this. 1
   /// elsewhere.
   double strength_factor = 1.0;
 };
 
+/// A mass that the member carries where it vibrates, not a load.
+struct AttachedMass {
+  double mass = 0.0;  ///< [kg], > 0.
+  double at = 0.0;    ///< Station [m].
+};
+
+/// How the surface was left, for fatigue.
+enum class SurfaceFinish : std::uint8_t { polished, ground, machined, hot_rolled, as_forged };
+
+/// How mean stress and amplitude are held together against fatigue.
+enum class FatigueCriterion : std::uint8_t { goodman, gerber, soderberg };
+
+/// A crack that inspection may miss.
+struct Crack {
+  enum class Kind : std::uint8_t {
+    edge,     ///< Straight, along the whole edge of the most stressed side, depth a.
+    surface,  ///< Semi-elliptical on the most stressed side, depth a, half-length c.
+  };
+  Kind kind = Kind::edge;
+  double depth = 0.0;        ///< a [m], > 0.
+  double half_length = 0.0;  ///< c [m], of a surface crack: >= a.
+};
+
+/// What the making leaves in a member that its plain section does not show. It is taken at every
+/// station.
+struct MemberDetails {
+  double net_area = 1.0;     ///< A_net / A past holes, keyways, threads, in (0, 1].
+  double net_modulus = 1.0;  ///< W_net / W of both axes and of torsion, in (0, 1].
+  double k_t_axial = 1.0;    ///< Elastic stress concentration factors on the net section, >= 1.
+  double k_t_bending = 1.0;
+  double k_t_torsion = 1.0;
+  std::optional<double> notch_radius;  ///< r [m]; absent: full notch sensitivity.
+  SurfaceFinish surface = SurfaceFinish::machined;
+  double reliability = 0.99;  ///< Of the fatigue strength, 0.5 to 0.999999.
+  FatigueCriterion criterion = FatigueCriterion::goodman;
+  std::optional<double> detail_category;  ///< Welded detail: Delta sigma_C at 2e6 cycles [Pa].
+  bool welded = false;                    ///< A weld crosses the member where it is most stressed.
+  std::optional<Crack> crack;
+  std::vector<AttachedMass> masses;
+};
+
 /// Limits that the user sets on one member.
 struct MemberLimits {
   std::optional<double> deflection;  ///< Largest deflection [m].
+  bool shear_deflection = false;     ///< Adds the deflection of shear.
+  std::optional<double> rotation;    ///< Largest slope of the axis [rad].
   std::optional<double> twist;       ///< Largest twist over the length [rad].
+  std::optional<double> frequency;   ///< Least first natural frequency [Hz].
+  std::optional<double> elongation;  ///< Largest change of length, heat and axial force [m].
   std::optional<double> height;      ///< Envelope along z [m].
   std::optional<double> width;       ///< Envelope along y [m].
   std::optional<double> wall;        ///< Least wall [m].
   double slenderness = 200.0;        ///< Cap on K L / i of a member in compression.
   ColumnMethod column_method = ColumnMethod::curves;
+  bool lateral_restraint = false;  ///< The compressed side cannot move across: no lateral buckling.
+  MemberDetails details = {};
 };
 
 /// All that a limit state may look at. References: valid during the call only.

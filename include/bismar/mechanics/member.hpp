@@ -15,6 +15,8 @@ namespace bismar {
 enum class Support : std::uint8_t {
   cantilever,     ///< Fixed at x = 0, free at x = L.
   pinned_pinned,  ///< Pinned at both ends.
+  fixed_pinned,   ///< Fixed at x = 0, pinned at x = L.
+  fixed_fixed,    ///< Fixed at both ends.
 };
 
 /// Direction of a transverse load.
@@ -72,6 +74,12 @@ struct InternalForces {
   double T = 0.0;    ///< [N m]
 };
 
+/// How often and how far a load case swings.
+struct FatigueLoading {
+  double cycles = 1e6;         ///< Times the whole load case comes and goes, >= 1.
+  double stress_ratio = -1.0;  ///< Least over largest stress, -1 (reversed) to 1, 0 = pulsating.
+};
+
 /// Loads that act together. Factors act per limit state and are kept by the limit state's id;
 /// a limit state without an entry uses its own default.
 struct LoadCase {
@@ -80,15 +88,32 @@ struct LoadCase {
   Support support_y = Support::cantilever;  ///< For loads along y.
   std::vector<Load> loads = {};
   std::optional<InternalForces> direct = {};  ///< Adds one section with these forces.
+  /// Where the second support stands [m], 0 < x <= L, absent = at x = L. Beyond it the member
+  /// overhangs. For pinned_pinned and fixed_pinned only.
+  std::optional<double> second_support = {};
+  /// Acceleration across the member that its own mass feels [m/s^2]: 9.80665 for its weight, more
+  /// for a member that is moved. Taken adverse: it never relieves another load.
+  double acceleration_z = 0.0;
+  double acceleration_y = 0.0;
+  /// Eccentricity of the compression at both ends [m]. Absent: 0 where the column curves stand for
+  /// imperfections, L / 500 with the methods that know none (Euler, Johnson).
+  std::optional<double> eccentricity = {};
+  double temperature_change = 0.0;  ///< From the state as assembled [K]; its sign does not matter.
+  bool restrained = false;          ///< The ends keep their distance when the temperature changes.
+  std::optional<FatigueLoading> fatigue = {};  ///< Absent: the load case is static.
   std::map<std::string, double> factors = {};
   double duration = 0.0;     ///< How long the load lasts [s]; 0 = short (not above an hour).
   bool hand_loaded = false;  ///< Loaded by hand: an unknown elongation leaves a material undecided.
   bool impact = false;       ///< Loaded by impact: likewise.
 };
 
-/// A cantilever with its loads, for the short form of a part.
+/// A member held alike in both planes with its loads, for the short form of a part.
 [[nodiscard]] BISMAR_API LoadCase cantilever(std::vector<Load> loads, std::string name = "service");
 [[nodiscard]] BISMAR_API LoadCase pinned_pinned(std::vector<Load> loads,
                                                 std::string name = "service");
+[[nodiscard]] BISMAR_API LoadCase fixed_pinned(std::vector<Load> loads,
+                                               std::string name = "service");
+[[nodiscard]] BISMAR_API LoadCase fixed_fixed(std::vector<Load> loads,
+                                              std::string name = "service");
 
 }  // namespace bismar

@@ -17,15 +17,52 @@ namespace bismar {
 /// Source: EN 1993-1-1:2005 Table 5.2; E/210 GPa as EN 1993-1-4:2006 section 5.2.
 [[nodiscard]] BISMAR_API double wall_epsilon(double strength, double youngs_modulus);
 
-/// Largest c/t (or d/t) up to which a wall reaches its strength before it buckles: class 3 [-].
+/// Largest c/t (or d/t) of a wall in a class [-].
 ///
-///     internal part in compression  42 epsilon       outstand      14 epsilon
-///     internal part in bending     124 epsilon       round tube    90 epsilon^2
+///                                   class 1          class 2          class 3
+///     internal part in compression  33 epsilon       38 epsilon       42 epsilon
+///     internal part in bending      72 epsilon       83 epsilon      124 epsilon
+///     outstand                       9 epsilon       10 epsilon       14 epsilon
+///     round tube                    50 epsilon^2     70 epsilon^2     90 epsilon^2
 ///
+/// Class 1 may turn as a plastic hinge, class 2 reaches its plastic moment, class 3 its strength
+/// before it buckles.
+/// @param wall_class  1, 2 or 3.  @param epsilon  Material factor [-], > 0.
+/// @throws bismar::Error  not_finite or out_of_range, place "wall_class", "epsilon".
+/// Source: EN 1993-1-1:2005 Table 5.2; the tube's limits from memory.
+[[nodiscard]] BISMAR_API double wall_class_limit(PlateElement::Kind kind,
+                                                 int wall_class,
+                                                 double epsilon);
+
+/// wall_class_limit() of class 3.
 /// @param epsilon  Material factor [-], > 0.
 /// @throws bismar::Error  not_finite or out_of_range, place "epsilon".
-/// Source: EN 1993-1-1:2005 Table 5.2; the tube's limit from memory.
 [[nodiscard]] BISMAR_API double class_3_limit(PlateElement::Kind kind, double epsilon);
+
+/// Class 1 to 4 of a wall: the least whose limit it meets (to 1e-12), 4 where none.
+/// @param ratio  c/t or d/t [-], > 0.  @param epsilon  Material factor [-], > 0.
+/// @throws bismar::Error  not_finite or out_of_range, place "ratio", "epsilon".
+[[nodiscard]] BISMAR_API int wall_class(PlateElement::Kind kind, double ratio, double epsilon);
+
+/// Class of a section in pure bending about y or in pure compression: that of its worst wall; 1
+/// for a solid. In compression the webs count as compressed throughout.
+/// @param epsilon  Material factor [-], > 0.
+/// @throws bismar::Error  not_finite or out_of_range, place "epsilon".
+/// Source: EN 1993-1-1:2005 5.5.2(6).
+[[nodiscard]] BISMAR_API int section_class(const SectionProperties& section,
+                                           double epsilon,
+                                           bool compressed);
+
+/// epsilon, raised where the acting compression is below the strength [-].
+///
+///     epsilon sqrt(f / sigma_com) for sigma_com < f
+///
+/// Not where the member's buckling is verified (5.5.2(10)).
+/// @param epsilon  Material factor [-], > 0.  @param strength  f [Pa], > 0.
+/// @param stress  sigma_com, largest compression in the wall [Pa], > 0.
+/// @throws bismar::Error  not_finite or out_of_range, place is the argument's name.
+/// Source: EN 1993-1-1:2005 5.5.2(9).
+[[nodiscard]] BISMAR_API double acting_wall_epsilon(double epsilon, double strength, double stress);
 
 /// Material factor of the wall limits of aluminium [-].
 ///

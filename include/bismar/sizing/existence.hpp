@@ -53,11 +53,17 @@ struct Exclusion {
 /// strength is lost.
 [[nodiscard]] BISMAR_API bool forms_hot(const Route& route);
 
+[[nodiscard]] BISMAR_API bool is_tube(SectionFamily family);
+/// I, channel, T, angle.
+[[nodiscard]] BISMAR_API bool is_open_section(SectionFamily family);
+
 /// Whether the route can leave a free size of this shape. Never true for a route that keeps stock.
 ///
-/// solid: every solid; tube: round and rectangular tubes, but only round ones from winding; cored
-/// tube (castings) and welded tube (roll forming): both; rectangle (planing): square and rectangle;
-/// flat (cutting from sheet, laying up): rectangle; open section, cup: no shape of this version.
+/// solid: every solid; tube: round, elliptical and rectangular tubes, but no rectangular ones from
+/// winding; cored tube (castings): all of them; welded tube (roll forming): round and rectangular;
+/// rectangle (planing): square and rectangle; flat (cutting from sheet, laying up): rectangle; open
+/// section: I, channel, T and angle, of bent sheet channel and angle only; cup: no shape of this
+/// version. A polygon goes with solids, tubes or open sections, see proportion_rules().
 [[nodiscard]] BISMAR_API bool can_leave(const Route& route, SectionFamily family);
 
 /// Whether this condition owes its strength to hardening, tempering, ageing or cold work, which hot
@@ -76,6 +82,10 @@ struct Exclusion {
 [[nodiscard]] BISMAR_API std::optional<Exclusion> shape_rules(const Route& route,
                                                               SectionFamily family,
                                                               bool from_stock);
+/// What the ratios of a free shape ask of a route that can leave its family: bent sheet has one
+/// thickness; a polygon with holes is a tube, one without a solid or an open section.
+[[nodiscard]] BISMAR_API std::optional<Exclusion> proportion_rules(const Route& route,
+                                                                   const Shape& shape);
 /// Extruded and pultruded shapes need a row for that product form: tube, bar or section.
 [[nodiscard]] BISMAR_API std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material,
                                                                    const Route& route,

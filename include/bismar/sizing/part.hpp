@@ -33,14 +33,21 @@ struct Sizes {
   }
 };
 
-/// A parametric shape. Its size is its height (diameter, side); the other dimensions follow by
-/// ratios. A ratio that is left out where the shape has one is free, and makes a second free size.
+/// A parametric shape. Its size is its height (diameter, side, width across flats); the other
+/// dimensions follow by ratios. A ratio that is left out where the shape has one is free, and makes
+/// a second free size; radii left out are zero.
 struct Shape {
   SectionFamily family = SectionFamily::solid_round;
-  std::optional<double> height_to_width = {};  ///< h/b: ellipse, rectangle, rectangular tube.
-  std::optional<double> wall_to_height = {};   ///< t/h (t/d): tubes.
-  double height_min = 4e-3;                    ///< [m]
-  double height_max = 0.5;                     ///< [m]
+  std::optional<double> height_to_width = {};        ///< h/b: all but round, square and hexagon.
+  std::optional<double> wall_to_height = {};         ///< t/h (t/d): tubes; both legs of an angle.
+  std::optional<double> web_to_height = {};          ///< t_w/h: I, channel, T.
+  std::optional<double> flange_to_height = {};       ///< t_f/h: I, channel, T.
+  std::optional<double> root_radius_to_height = {};  ///< r/h: I, channel, T, angle.
+  /// Corners of a polygon and of its holes, any scale and origin: the size is its height along z.
+  std::vector<SectionPoint> outline = {};
+  std::vector<std::vector<SectionPoint>> holes = {};
+  double height_min = 4e-3;  ///< [m]
+  double height_max = 0.5;   ///< [m]
   Sizes sizes = {};
   friend bool operator==(const Shape&, const Shape&) = default;
 };
@@ -49,6 +56,9 @@ struct Shape {
 struct ShapeOptions {
   std::optional<double> height_to_width = {};
   std::optional<double> wall_to_height = {};
+  std::optional<double> web_to_height = {};
+  std::optional<double> flange_to_height = {};
+  std::optional<double> root_radius_to_height = {};
   double height_min = 4e-3;  ///< [m]
   double height_max = 0.5;   ///< [m]
   Sizes sizes = {};
@@ -59,6 +69,15 @@ struct ShapeOptions {
 [[nodiscard]] BISMAR_API Shape ellipse(const ShapeOptions& options);
 [[nodiscard]] BISMAR_API Shape round_tube(const ShapeOptions& options);
 [[nodiscard]] BISMAR_API Shape rectangular_tube(const ShapeOptions& options);
+[[nodiscard]] BISMAR_API Shape hexagon(const ShapeOptions& options = {});
+[[nodiscard]] BISMAR_API Shape elliptical_tube(const ShapeOptions& options);
+[[nodiscard]] BISMAR_API Shape i_section(const ShapeOptions& options);
+[[nodiscard]] BISMAR_API Shape channel(const ShapeOptions& options);
+[[nodiscard]] BISMAR_API Shape tee(const ShapeOptions& options);
+[[nodiscard]] BISMAR_API Shape angle(const ShapeOptions& options);
+[[nodiscard]] BISMAR_API Shape polygon_shape(std::vector<SectionPoint> outline,
+                                             std::vector<std::vector<SectionPoint>> holes = {},
+                                             const ShapeOptions& options = {});
 
 /// A prismatic member: tie, strut, beam, shaft, or all at once.
 struct Member {
@@ -67,6 +86,7 @@ struct Member {
   std::vector<std::string> stock =
       {};  ///< Stock lists to try, by id; "all" for every list of sections.
   std::vector<LoadCase> load_cases = {};
+  MemberDetails details = {};  ///< Holes, notches, welds, cracks, surface, carried masses.
 };
 
 /// A bound on a property of the material.
@@ -79,12 +99,17 @@ struct PropertyLimit {
 /// What the design must stay within.
 struct Limits {
   std::optional<double> deflection = {};  ///< [m]
+  bool shear_deflection = false;          ///< The deflection has its shear part.
+  std::optional<double> rotation = {};    ///< Slope of the axis [rad]
   std::optional<double> twist = {};       ///< [rad]
+  std::optional<double> frequency = {};   ///< Least first natural frequency [Hz].
+  std::optional<double> elongation = {};  ///< Change of length by heat and axial force [m].
   std::optional<double> height = {};      ///< Envelope [m]
   std::optional<double> width = {};       ///< Envelope [m]
   std::optional<double> wall = {};        ///< Least wall [m]
   double slenderness = 200.0;             ///< K L / i of a member in compression.
   ColumnMethod column_method = ColumnMethod::curves;
+  bool lateral_restraint = false;        ///< Held across: no lateral-torsional buckling.
   std::optional<double> mass = {};       ///< Cap [kg]
   std::optional<double> cost = {};       ///< Cap [currency]
   std::vector<std::string> routes = {};  ///< Only these routes; empty = every primary route.

@@ -13,7 +13,7 @@
 namespace bismar {
 
 /// Version of the stored result; raised when a reader of the old one could misread the new one.
-inline constexpr int result_format_version = 1;
+inline constexpr int result_format_version = 2;
 
 /// One utilisation of a design.
 struct Utilisation {

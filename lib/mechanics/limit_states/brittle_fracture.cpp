@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/own_mass.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -31,7 +32,8 @@ struct Strengths {
 
 bool is_sheared(const LoadEffects& effects) {
   return std::any_of(effects.stations.begin(), effects.stations.end(), [](const Station& station) {
-    return station.forces.V_y != 0.0 || station.forces.V_z != 0.0;
+    return station.forces.V_y != 0.0 || station.forces.V_z != 0.0 || station.own.V_y != 0.0 ||
+           station.own.V_z != 0.0;
   });
 }
 
@@ -83,36 +85,51 @@ struct Worst {
   double ratio = 0.0;  ///< Principal stress over strength, before the factor.
 };
 
+/// The axial stress as one side of a bent section feels it. Where own mass acts it never relieves:
+/// the relief falls with the square of the scale and the bending stress of own mass only with the
+/// scale, so that a larger section could be the worse one.
+double axial_on_side(double axial, bool tension_side, bool relieves) {
+  if (relieves) {
+    return axial;
+  }
+  return tension_side ? std::max(0.0, axial) : std::min(0.0, axial);
+}
+
 /// Largest principal stress over strength on one side of a point: each part of the direct stress
 /// over its own strength, the shear stress over that of the side.
-double side_ratio(const StressPoint& point, const Strengths& strength, bool tension_side) {
+double side_ratio(const StressPoint& point,
+                  const Strengths& strength,
+                  bool tension_side,
+                  bool relieves) {
+  const double axial = axial_on_side(point.axial, tension_side, relieves);
   if (!tension_side) {
-    return largest_principal((point.bending - point.axial) / strength.compression,
+    return largest_principal((point.bending - axial) / strength.compression,
                              point.shear / strength.compression);
   }
   // Axial compression relieves bending, but at most all of it: no credit against shear.
-  const double direct = point.axial > 0.0
-                            ? point.axial / strength.tension + point.bending / strength.bending
-                            : std::max(0.0, point.bending + point.axial) / strength.bending;
+  const double direct = axial > 0.0 ? axial / strength.tension + point.bending / strength.bending
+                                    : std::max(0.0, point.bending + axial) / strength.bending;
   return largest_principal(direct, point.shear / strength.tension);
 }
 
 /// The principal stress itself, for the explanation [Pa].
-double side_stress(const StressPoint& point, bool tension_side) {
-  return tension_side ? largest_principal(std::max(0.0, point.bending + point.axial), point.shear)
-                      : largest_principal(point.bending - point.axial, point.shear);
+double side_stress(const StressPoint& point, bool tension_side, bool relieves) {
+  const double axial = axial_on_side(point.axial, tension_side, relieves);
+  return tension_side ? largest_principal(std::max(0.0, point.bending + axial), point.shear)
+                      : largest_principal(point.bending - axial, point.shear);
 }
 
 Worst worst_point(const CheckInput& input) {
   const Strengths strength = strengths(input.effects, input.material);
+  const bool relieves = !own_mass_acts(input.effects);
   Worst worst;
   worst.ratio = -1.0;
   for (const Station& station : input.effects.stations) {
-    const StressPoints points =
-        stress_points(input.section, station_stresses(input.section, station.forces));
+    const StressPoints points = stress_points(
+        input.section, station_stresses(input.section, acting_forces(input, station)));
     for (const StressPoint& point : points) {
       for (const bool tension_side : {true, false}) {
-        const double ratio = side_ratio(point, strength, tension_side);
+        const double ratio = side_ratio(point, strength, tension_side, relieves);
         if (ratio > worst.ratio) {
           worst = {
               .station = &station, .point = point, .tension_side = tension_side, .ratio = ratio};
@@ -140,7 +157,11 @@ class BrittleFracture final : public LimitState {
   }
   std::vector<Symbol> needs(const LoadEffects& effects,
                             const MemberMaterial& material) const override {
-    return needed_symbols(effects, material);
+    std::vector<Symbol> symbols = needed_symbols(effects, material);
+    if (own_mass_acts(effects)) {
+      symbols.push_back(Symbol::rho);
+    }
+    return symbols;
   }
   double utilisation(const CheckInput& input) const override {
     return input.factor * std::max(0.0, worst_point(input).ratio);
@@ -148,10 +169,14 @@ class BrittleFracture final : public LimitState {
   Explanation explain(const CheckInput& input) const override;
   /// Times the square of the scale, N/A and V/A_v are constant and M/W and T/W_t fall, whatever the
   /// sign of N; the principal stress rises with both the direct and the shear stress and scales
-  /// with them, so that it falls.
+  /// with them, so that it falls. With own mass no sign of N relieves, and each stress falls or, as
+  /// the shear stress of own mass, stays.
   Trend trend_with_scale() const override { return Trend::falls; }
   /// Each strength only ever divides a stress that is zero or above, or the whole principal stress.
   Trend trend_with(Symbol symbol) const override {
+    if (symbol == Symbol::rho) {
+      return Trend::rises;
+    }
     return symbol == Symbol::tensile || symbol == Symbol::compressive || symbol == Symbol::flexural
                ? Trend::falls
                : Trend::constant;
@@ -166,7 +191,7 @@ Explanation BrittleFracture::explain(const CheckInput& input) const {
   const Strengths strength = strengths(input.effects, input.material);
   const StressPoint& p = worst.point;
   const double u = utilisation(input);
-  const double principal = side_stress(p, worst.tension_side);
+  const double principal = side_stress(p, worst.tension_side, !own_mass_acts(input.effects));
   const std::string side = worst.tension_side ? "tension" : "compression";
   const double limit = worst.ratio > 0.0    ? principal / worst.ratio
                        : worst.tension_side ? strength.tension
@@ -176,6 +201,7 @@ Explanation BrittleFracture::explain(const CheckInput& input) const {
               " principal " + side + " " + std::string(p.place) +
               " at x = " + millimetres(worst.station->x) + " against a strength of " +
               megapascals(limit) + ": u = " + number(u) + ".";
+  add_own_mass_step(input, text.steps);
   text.steps.push_back("Axial stress " + megapascals(p.axial) +
                        " (tension positive), bending stress " + megapascals(p.bending) +
                        ", shear stress " + megapascals(p.shear) + ".");

@@ -4,7 +4,11 @@
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/text.hpp"
 
+#include <bismar/mechanics/torsional_buckling.hpp>
+
 #include <algorithm>
+#include <cmath>
+#include <numbers>
 #include <string>
 #include <string_view>
 #include <vector>
@@ -61,10 +65,46 @@ std::string curve_name(const CheckInput& input, BendingAxis axis) {
   throw InternalError("column law without a name");
 }
 
+/// From N_cr to N_b by the method that is asked for.
+void complete(const CheckInput& input, BendingAxis curve_axis, ColumnResistance& r) {
+  const double f = column_strength(input.material);
+  const double A = input.section.area;
+  switch (input.limits.column_method) {
+    case ColumnMethod::euler:
+      r.load = r.critical;
+      return;
+    case ColumnMethod::johnson: {
+      // The slenderness K L / r whose Euler load is N_cr.
+      const double E = column_modulus(input.material);
+      const double slenderness = std::numbers::pi * std::sqrt(E * A / r.critical);
+      r.load = johnson_critical_load(A, f * weld_share(input), E, slenderness);
+      return;
+    }
+    case ColumnMethod::curves:
+      break;
+  }
+  // The curve's slenderness is made of characteristic values; the design factor of timber's
+  // strength acts on the resistance only, and so does a weld, which is on the safe side.
+  r.slenderness = relative_slenderness(A, f / input.material.strength_factor, r.critical);
+  r.factor = reduction_factor(curve(input, curve_axis), r.slenderness);
+  r.load = r.factor * A * f * weld_share(input);
+}
+
+bool is_askew(const SectionProperties& section) { return section.I_yz != 0.0; }
+
+/// Between points held against twist: the whole length, twice that with a free end.
+double torsional_length(const CheckInput& input) {
+  return std::max({input.length, input.effects.buckling_length_y, input.effects.buckling_length_z});
+}
+
 }  // namespace
 
 bool is_timber(ColumnLaw law) {
   return law == ColumnLaw::timber_solid || law == ColumnLaw::timber_glued;
+}
+
+bool is_aluminium(ColumnLaw law) {
+  return law == ColumnLaw::aluminium_class_a || law == ColumnLaw::aluminium_class_b;
 }
 
 bool is_ductile_column(const MemberMaterial& material) {
@@ -80,6 +120,10 @@ double column_strength(const MemberMaterial& material) {
                                      : needed(material.compressive, Symbol::compressive);
 }
 
+double weld_share(const CheckInput& input) {
+  return input.limits.details.welded ? input.material.weld_yield_factor.value_or(1.0) : 1.0;
+}
+
 double column_modulus(const MemberMaterial& material) {
   const double E = is_timber(material.column_law) ? needed(material.E_05, Symbol::E_05)
                                                   : needed(material.E, Symbol::E);
@@ -89,22 +133,19 @@ double column_modulus(const MemberMaterial& material) {
 ColumnResistance column_resistance(const CheckInput& input, BendingAxis axis) {
   const bool about_y = axis == BendingAxis::y;
   ColumnResistance r;
-  r.axis = axis;
-  r.effective_length = about_y ? input.effects.buckling_length_y : input.effects.buckling_length_z;
-  r.second_moment = about_y ? input.section.I_y : input.section.I_z;
+  if (is_askew(input.section)) {
+    r.mode = ColumnMode::about_v;
+    r.effective_length = std::max(input.effects.buckling_length_y, input.effects.buckling_length_z);
+    r.second_moment = input.section.I_v();
+  } else {
+    r.mode = about_y ? ColumnMode::about_y : ColumnMode::about_z;
+    r.effective_length =
+        about_y ? input.effects.buckling_length_y : input.effects.buckling_length_z;
+    r.second_moment = about_y ? input.section.I_y : input.section.I_z;
+  }
   r.critical =
       euler_critical_load(column_modulus(input.material), r.second_moment, r.effective_length);
-  if (input.limits.column_method == ColumnMethod::euler) {
-    r.load = r.critical;
-    return r;
-  }
-  const double f = column_strength(input.material);
-  // The curve's slenderness is made of characteristic values; the design factor of timber's
-  // strength acts on the resistance only.
-  r.slenderness =
-      relative_slenderness(input.section.area, f / input.material.strength_factor, r.critical);
-  r.factor = reduction_factor(curve(input, axis), r.slenderness);
-  r.load = r.factor * input.section.area * f;
+  complete(input, axis, r);
   return r;
 }
 
@@ -114,31 +155,125 @@ ColumnResistance least_column_resistance(const CheckInput& input) {
   return about_z.load < about_y.load ? about_z : about_y;
 }
 
+bool may_twist(const SectionProperties& section) {
+  switch (section.family) {
+    case SectionFamily::i_section:
+    case SectionFamily::channel:
+    case SectionFamily::tee:
+    case SectionFamily::angle:
+      return true;
+    default:
+      return false;
+  }
+}
+
+ColumnResistance twisting_resistance(const CheckInput& input) {
+  const SectionProperties& section = input.section;
+  const double E = column_modulus(input.material);
+  ColumnResistance r;
+  r.mode = ColumnMode::twisting;
+  r.effective_length = torsional_length(input);
+  const double longer = std::max(input.effects.buckling_length_y, input.effects.buckling_length_z);
+  const bool y_is_major = section.I_y >= section.I_z;
+  const double length_u = is_askew(section) ? longer
+                          : y_is_major      ? input.effects.buckling_length_y
+                                            : input.effects.buckling_length_z;
+  const double length_v = is_askew(section) ? longer
+                          : y_is_major      ? input.effects.buckling_length_z
+                                            : input.effects.buckling_length_y;
+  r.critical =
+      torsional_flexural_critical_load(section,
+                                       {.youngs_modulus = E,
+                                        .shear_modulus = needed(input.material.G, Symbol::G),
+                                        .length = r.effective_length},
+                                       euler_critical_load(E, section.I_u(), length_u),
+                                       euler_critical_load(E, section.I_v(), length_v));
+  complete(input, BendingAxis::z, r);
+  return r;
+}
+
 std::string_view name(BendingAxis axis) { return axis == BendingAxis::y ? "y" : "z"; }
 
+std::string_view name(ColumnMode mode) {
+  switch (mode) {
+    case ColumnMode::about_y:
+      return "about y";
+    case ColumnMode::about_z:
+      return "about z";
+    case ColumnMode::about_v:
+      return "about the weak principal axis";
+    case ColumnMode::twisting:
+      return "by twisting";
+  }
+  throw InternalError("column mode without a name");
+}
+
 std::string critical_load_step(const CheckInput& input, const ColumnResistance& r) {
-  return "N_cr about " + std::string(name(r.axis)) + " = pi^2 E I / (K L)^2 = pi^2 x " +
+  if (r.mode == ColumnMode::twisting) {
+    return "N_cr by twisting = " + kilonewtons(r.critical) +
+           ", the least root of the torsional-flexural equation with G I_t = " +
+           gigapascals(needed(input.material.G, Symbol::G)) + " x " +
+           fourth_millimetres(input.section.I_t) +
+           ", pi^2 E I_w / L_T^2 with L_T = " + millimetres(r.effective_length) +
+           " and the shear centre at (" + millimetres(input.section.y_shear) + ", " +
+           millimetres(input.section.z_shear) + ").";
+  }
+  return "N_cr " + std::string(name(r.mode)) + " = pi^2 E I / (K L)^2 = pi^2 x " +
          gigapascals(column_modulus(input.material)) + " x " + fourth_millimetres(r.second_moment) +
          " / (" + millimetres(r.effective_length) + ")^2 = " + kilonewtons(r.critical) + ".";
 }
 
 std::vector<std::string> resistance_steps(const CheckInput& input, const ColumnResistance& r) {
-  if (input.limits.column_method == ColumnMethod::euler) {
-    return {};
-  }
   const double f = column_strength(input.material);
-  return {"Relative slenderness = root of A f / N_cr = root of (" +
-              square_millimetres(input.section.area) + " x " +
-              megapascals(f / input.material.strength_factor) + " / " + kilonewtons(r.critical) +
-              ") = " + number(r.slenderness) + ".",
-          "Reduction factor by " + curve_name(input, r.axis) + ": " + number(r.factor) + ".",
-          "N_b = " + number(r.factor) + " x " + square_millimetres(input.section.area) + " x " +
-              megapascals(f) + " = " + kilonewtons(r.load) + "."};
+  const double share = weld_share(input);
+  std::vector<std::string> steps;
+  if (input.limits.details.welded && input.limits.column_method != ColumnMethod::euler) {
+    steps.push_back(input.material.weld_yield_factor
+                        ? "A weld leaves " + number(share) + " of the strength."
+                        : "The strength beside the weld is not known; the check of the weld zone "
+                          "says so.");
+  }
+  switch (input.limits.column_method) {
+    case ColumnMethod::euler:
+      return {};
+    case ColumnMethod::johnson:
+      steps.push_back("Johnson's parabola, Euler's curve beyond it, with S_y = " +
+                      megapascals(f * share) + ": N_b = " + kilonewtons(r.load) + ".");
+      return steps;
+    case ColumnMethod::curves:
+      break;
+  }
+  const BendingAxis axis = r.mode == ColumnMode::about_y ? BendingAxis::y : BendingAxis::z;
+  steps.push_back("Relative slenderness = root of A f / N_cr = root of (" +
+                  square_millimetres(input.section.area) + " x " +
+                  megapascals(f / input.material.strength_factor) + " / " +
+                  kilonewtons(r.critical) + ") = " + number(r.slenderness) + ".");
+  steps.push_back("Reduction factor by " + curve_name(input, axis) + ": " + number(r.factor) + ".");
+  steps.push_back("N_b = " + number(r.factor) + " x " + square_millimetres(input.section.area) +
+                  " x " + megapascals(f * share) + " = " + kilonewtons(r.load) + ".");
+  return steps;
 }
 
-std::string_view euler_warning() {
-  return "Warning: the Euler load alone, as asked for; it knows neither imperfections nor yielding "
-         "and overstates what a real column carries.";
+void add_method_warning(const CheckInput& input, Explanation& text) {
+  std::string warning;
+  switch (input.limits.column_method) {
+    case ColumnMethod::curves:
+      return;
+    case ColumnMethod::euler:
+      warning =
+          "Warning: the Euler load alone, as asked for; it knows neither imperfections nor "
+          "yielding "
+          "and overstates what a real column carries.";
+      break;
+    case ColumnMethod::johnson:
+      warning =
+          "Warning: Johnson's parabola, as asked for; it knows no imperfections and overstates "
+          "what "
+          "a real column carries.";
+      break;
+  }
+  text.line += " " + warning;
+  text.steps.push_back(warning);
 }
 
 }  // namespace bismar::mechanics

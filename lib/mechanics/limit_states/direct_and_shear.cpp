@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/own_mass.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -24,7 +25,8 @@ struct Worst {
 bool is_sheared(const LoadEffects& effects) {
   return effects.twists ||
          std::any_of(effects.stations.begin(), effects.stations.end(), [](const Station& station) {
-           return station.forces.V_y != 0.0 || station.forces.V_z != 0.0;
+           return station.forces.V_y != 0.0 || station.forces.V_z != 0.0 ||
+                  station.own.V_y != 0.0 || station.own.V_z != 0.0;
          });
 }
 
@@ -54,7 +56,7 @@ double shear_ratio(const StationStresses& s, const MemberMaterial& material) {
 Worst worst_station(const CheckInput& input) {
   Worst worst;
   for (const Station& station : input.effects.stations) {
-    const StationStresses s = station_stresses(input.section, station.forces);
+    const StationStresses s = station_stresses(input.section, acting_forces(input, station));
     const double direct = direct_ratio(s, input.material);
     const double shear = shear_ratio(s, input.material);
     const double ratio = std::max(direct, shear);
@@ -87,7 +89,8 @@ class DirectAndShear final : public LimitState {
     return input.factor * std::max(0.0, worst_station(input).ratio);
   }
   Explanation explain(const CheckInput& input) const override;
-  /// Every stress falls with the square or the cube of the scale, and u rises with each.
+  /// Every stress falls with the square or the cube of the scale, that of own mass with the scale
+  /// or, in shear, not at all; u rises with each.
   Trend trend_with_scale() const override { return Trend::falls; }
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
@@ -96,6 +99,8 @@ class DirectAndShear final : public LimitState {
       case Symbol::flexural:
       case Symbol::shear:
         return Trend::falls;
+      case Symbol::rho:
+        return Trend::rises;
       default:
         return Trend::constant;
     }
@@ -119,6 +124,9 @@ std::vector<Symbol> DirectAndShear::needs(const LoadEffects& effects,
   if (is_sheared(effects)) {
     symbols.push_back(Symbol::shear);
   }
+  if (own_mass_acts(effects)) {
+    symbols.push_back(Symbol::rho);
+  }
   return symbols;
 }
 
@@ -132,6 +140,7 @@ Explanation DirectAndShear::explain(const CheckInput& input) const {
   const double u = utilisation(input);
   const std::string place = " at x = " + millimetres(worst.station->x);
   Explanation text;
+  add_own_mass_step(input, text.steps);
   if (worst.shear) {
     const double stress = shear_stress(s, material);
     text.line = "Shear strength: " + number(input.factor) + " x " + megapascals(stress) +

@@ -5,6 +5,7 @@
 #include <bismar/mechanics/limit_state.hpp>
 
 #include <algorithm>
+#include <cmath>
 #include <optional>
 #include <string>
 
@@ -17,6 +18,30 @@ inline double needed(const std::optional<double>& value, Symbol symbol) {
     throw InternalError("a limit state was evaluated without " + std::string(name(symbol)));
   }
   return *value;
+}
+
+/// The forces of a station with the member's own mass added, adverse: it never relieves a load.
+/// Members that feel no acceleration read no density.
+inline InternalForces acting_forces(const CheckInput& input, const Station& station) {
+  InternalForces forces = station.forces;
+  const LoadEffects& effects = input.effects;
+  if (effects.acceleration_z == 0.0 && effects.acceleration_y == 0.0) {
+    return forces;
+  }
+  const double mass = needed(input.material.rho, Symbol::rho) * input.section.area;
+  const auto add = [mass](double& force, double own, double acceleration) {
+    force += std::copysign(mass * std::abs(acceleration * own), force);
+  };
+  add(forces.V_z, station.own.V_z, effects.acceleration_z);
+  add(forces.M_y, station.own.M_y, effects.acceleration_z);
+  add(forces.V_y, station.own.V_y, effects.acceleration_y);
+  add(forces.M_z, station.own.M_z, effects.acceleration_y);
+  return forces;
+}
+
+/// Whether the density is read: the member's own mass acts.
+inline bool own_mass_acts(const LoadEffects& effects) {
+  return effects.acceleration_z != 0.0 || effects.acceleration_y != 0.0;
 }
 
 /// Bending strength of a material that is not held against yield [Pa]; a table without one: the

@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/own_mass.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -31,12 +32,14 @@ double strength(const MemberMaterial& material) {
 }
 
 /// Largest compression in the section [Pa]: bending less axial tension, with torsion as principal
-/// compression, so that a thin tube in torsion is looked at too.
+/// compression, so that a thin tube in torsion is looked at too. Where own mass acts tension gives
+/// no relief: it would fall faster with the scale than the bending stress of own mass.
 double acting_compression(const CheckInput& input) {
   double largest = 0.0;
   for (const Station& station : input.effects.stations) {
-    const StationStresses s = station_stresses(input.section, station.forces);
-    largest = std::max(largest, largest_principal(s.bending - s.axial, s.torsion));
+    const StationStresses s = station_stresses(input.section, acting_forces(input, station));
+    const double axial = own_mass_acts(input.effects) ? std::min(0.0, s.axial) : s.axial;
+    largest = std::max(largest, largest_principal(s.bending - axial, s.torsion));
   }
   return largest;
 }
@@ -50,8 +53,8 @@ struct Bending {
 Bending bending(const LoadEffects& effects) {
   Bending result;
   for (const Station& station : effects.stations) {
-    result.about_y = result.about_y || station.forces.M_y != 0.0;
-    result.about_z = result.about_z || station.forces.M_z != 0.0;
+    result.about_y = result.about_y || station.forces.M_y != 0.0 || station.own.M_y != 0.0;
+    result.about_z = result.about_z || station.forces.M_z != 0.0 || station.own.M_z != 0.0;
   }
   return result;
 }
@@ -172,10 +175,15 @@ class WallSlenderness final : public LimitState {
     if (!is_compressed(effects)) {
       return {};
     }
-    if (is_aluminium(material.column_law)) {
-      return {strength_symbol(material)};
+    std::vector<Symbol> symbols = {strength_symbol(material)};
+    if (!is_aluminium(material.column_law)) {
+      symbols.push_back(Symbol::E);
     }
-    return {Symbol::E, strength_symbol(material)};
+    // With axial compression the acting stress, and so the density, is not read.
+    if (own_mass_acts(effects) && effects.compression == 0.0) {
+      symbols.push_back(Symbol::rho);
+    }
+    return symbols;
   }
   double utilisation(const CheckInput& input) const override {
     if (!is_compressed(input.effects)) {
@@ -192,6 +200,7 @@ class WallSlenderness final : public LimitState {
     switch (symbol) {
       case Symbol::E:
         return Trend::falls;
+      case Symbol::rho:
       case Symbol::sigma_y:
       case Symbol::compressive:
         return Trend::rises;
@@ -208,6 +217,9 @@ Explanation WallSlenderness::explain(const CheckInput& input) const {
     text.line = "Wall slenderness: no wall is compressed: u = 0.";
     text.steps = {"Neither axial compression nor bending nor torsion acts."};
     return text;
+  }
+  if (input.effects.compression == 0.0) {
+    add_own_mass_step(input, text.steps);
   }
   const Worst worst = worst_wall(input, on.stress);
   const double u = utilisation(input);

@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/own_mass.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -16,6 +17,7 @@ namespace {
 
 struct Worst {
   const Station* station = nullptr;
+  InternalForces forces;  ///< There, own mass included.
   StressPoint point;
   double equivalent = 0.0;  ///< [Pa]
 };
@@ -24,19 +26,34 @@ Worst worst_point(const CheckInput& input) {
   Worst worst;
   double largest = -1.0;
   for (const Station& station : input.effects.stations) {
+    const InternalForces forces = acting_forces(input, station);
     const StressPoints points =
-        stress_points(input.section, station_stresses(input.section, station.forces));
+        stress_points(input.section, station_stresses(input.section, forces));
     for (const StressPoint& point : points) {
       const double squared = equivalent_squared(point);
       if (squared > largest) {
         largest = squared;
         worst.station = &station;
+        worst.forces = forces;
         worst.point = point;
       }
     }
   }
   worst.equivalent = std::sqrt(std::max(0.0, largest));
   return worst;
+}
+
+/// The moments and what the bending stress is made of with them.
+std::string bending_terms(const SectionProperties& section, const InternalForces& forces) {
+  const std::string about_y = "M_y = " + newton_metres(forces.M_y);
+  const std::string about_z = "M_z = " + newton_metres(forces.M_z);
+  if (section.fibres.empty()) {
+    return about_y + ", W_y = " + cubic_millimetres(section.W_el_y) + ", " + about_z +
+           ", W_z = " + cubic_millimetres(section.W_el_z);
+  }
+  return about_y + ", " + about_z + ", I_y = " + fourth_millimetres(section.I_y) +
+         ", I_z = " + fourth_millimetres(section.I_z) +
+         ", I_yz = " + fourth_millimetres(section.I_yz) + " at the worst corner";
 }
 
 class Yield final : public LimitState {
@@ -52,7 +69,10 @@ class Yield final : public LimitState {
                const SectionProperties&) const override {
     return material.rule == StressRule::von_mises_yield;
   }
-  std::vector<Symbol> needs(const LoadEffects&, const MemberMaterial&) const override {
+  std::vector<Symbol> needs(const LoadEffects& effects, const MemberMaterial&) const override {
+    if (own_mass_acts(effects)) {
+      return {Symbol::sigma_y, Symbol::rho};
+    }
     return {Symbol::sigma_y};
   }
   double utilisation(const CheckInput& input) const override {
@@ -60,11 +80,14 @@ class Yield final : public LimitState {
            needed(input.material.sigma_y, Symbol::sigma_y);
   }
   Explanation explain(const CheckInput& input) const override;
-  /// Every stress falls: N/A and V/A_v with the square of the scale, M/W and T/W_t with its cube;
+  /// Every stress falls: N/A and V/A_v with the square of the scale, M/W and T/W_t with its cube,
+  /// of own mass, which rises with its square, the shear stress stays and the bending stress falls;
   /// the equivalent stress rises with each of their magnitudes.
   Trend trend_with_scale() const override { return Trend::falls; }
   Trend trend_with(Symbol symbol) const override {
-    return symbol == Symbol::sigma_y ? Trend::falls : Trend::constant;
+    return symbol == Symbol::sigma_y ? Trend::falls
+           : symbol == Symbol::rho   ? Trend::rises
+                                     : Trend::constant;
   }
 };
 
@@ -81,23 +104,21 @@ Explanation Yield::explain(const CheckInput& input) const {
               " von Mises stress " + std::string(p.place) +
               " at x = " + millimetres(worst.station->x) + " against a yield strength of " +
               megapascals(strength) + ": u = " + number(u) + ".";
-  text.steps = {
-      "Axial stress N / A = " + megapascals(p.axial) +
-          ", from N = " + kilonewtons(worst.station->forces.N) +
-          " and A = " + square_millimetres(input.section.area) + ".",
-      "Bending stress there = " + megapascals(p.bending) +
-          ", from M_y = " + newton_metres(worst.station->forces.M_y) +
-          ", W_y = " + cubic_millimetres(input.section.W_el_y) +
-          ", M_z = " + newton_metres(worst.station->forces.M_z) +
-          ", W_z = " + cubic_millimetres(input.section.W_el_z) + ".",
-      "Shear stress there = " + megapascals(p.shear) +
-          ", from V_z = " + kilonewtons(worst.station->forces.V_z) +
-          ", V_y = " + kilonewtons(worst.station->forces.V_y) +
-          ", T = " + newton_metres(worst.station->forces.T) + ".",
-      "Von Mises stress, the square root of sigma^2 + 3 tau^2, = " + megapascals(worst.equivalent) +
-          ".",
-      "u = factor x stress / yield strength = " + number(input.factor) + " x " +
-          megapascals(worst.equivalent) + " / " + megapascals(strength) + " = " + number(u) + "."};
+  add_own_mass_step(input, text.steps);
+  const InternalForces& f = worst.forces;
+  text.steps.push_back("Axial stress N / A = " + megapascals(p.axial) +
+                       ", from N = " + kilonewtons(f.N) +
+                       " and A = " + square_millimetres(input.section.area) + ".");
+  text.steps.push_back("Bending stress there = " + megapascals(p.bending) + ", from " +
+                       bending_terms(input.section, f) + ".");
+  text.steps.push_back("Shear stress there = " + megapascals(p.shear) +
+                       ", from V_z = " + kilonewtons(f.V_z) + ", V_y = " + kilonewtons(f.V_y) +
+                       ", T = " + newton_metres(f.T) + ".");
+  text.steps.push_back("Von Mises stress, the square root of sigma^2 + 3 tau^2, = " +
+                       megapascals(worst.equivalent) + ".");
+  text.steps.push_back("u = factor x stress / yield strength = " + number(input.factor) + " x " +
+                       megapascals(worst.equivalent) + " / " + megapascals(strength) + " = " +
+                       number(u) + ".");
   return text;
 }
 

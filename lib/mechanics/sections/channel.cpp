@@ -3,6 +3,7 @@
 
 #include "mechanics/arguments.hpp"
 #include "mechanics/sections/channel_profile.hpp"
+#include "mechanics/sections/shear_energy.hpp"
 
 #include <bismar/error.hpp>
 
@@ -98,15 +99,41 @@ SectionProperties channel(double height,
   section.I_t = torsion_constant(height, width, web, flange, root_radius);
   section.W_t = section.I_t / std::max(web, flange);
 
+  const double mid_height = height - flange;  // between the flanges' mid-lines
+  const double mid_width = width - web / 2.0;
+  const double offset = flange * mid_width * mid_width * mid_height * mid_height /
+                        (4.0 * section.I_y);  // of the shear centre from the web's mid-line
+  section.y_shear = web / 2.0 - offset - centroid;
+  const double from_web = centroid - web / 2.0;
+  section.I_w =
+      mid_height * mid_height / 4.0 *
+      (section.I_z - section.area * from_web * from_web *
+                         (mid_height * mid_height * section.area / (4.0 * section.I_y) - 1.0));
+
   section.A_v_z = section.I_y * web / m.first_z;
-  // S(y) / b(y) <= (b - y_s)^2 / 2 at every cut y, because the depth of material only falls towards
-  // the tips: exact for parallel flanges, on the safe side for tapered ones.
+  // In the flanges S(y) / b(y) <= (b - y_s)^2 / 2 at every cut y, because the depth of material
+  // only falls towards the tips. What of it reaches the web is taken up along its height: at the
+  // end of the root fillet z (c - t_w/2). Into the fillet z grows and so does the wall, by at least
+  // d^2 / (2 r) after d: the ratio rises by no more than r t_w / (2 z^2).
   const double reach = width - centroid;
-  section.A_v_y = 2.0 * section.I_z / (reach * reach);
-  // As for an I: stress at the flange's inner face at the web, shear at the end of the fillet.
   const double web_end = profile.web_end();
-  section.junction_ratio = 2.0 * profile.flange_face_at_web() / height;
+  const double face = profile.flange_face_at_web();
+  const double web_length =
+      web_end > 0.0 ? std::min(face, web_end + root_radius * web / (2.0 * web_end)) : face;
+  section.A_v_y = section.I_z / std::max(reach * reach / 2.0, web_length * from_web);
+  // As for an I: stress at the flange's inner face at the web, shear at the end of the fillet.
+  section.junction_ratio = 2.0 * face / height;
   section.A_v_junction = section.I_y * web / (m.first_z - web * web_end * web_end / 2.0);
+  // Flow along a flange from its tip; the mid-line is farthest out at the thin tip.
+  const double tip_middle = (height / 2.0 + profile.flange_face_at(width)) / 2.0;
+  section.A_v_flange = section.I_y / (tip_middle * (width - web));
+  section.A_s_z = mechanics::energy_shear_area_i(height, width, web, flange);
+  section.A_s_y = 2.0 * width * flange / 1.2;
+  for (const double y : {-centroid, reach}) {
+    for (const double z : {-height / 2.0, height / 2.0}) {
+      section.fibres.push_back({.y = y, .z = z});
+    }
+  }
 
   section.plates = {
       {.kind = PlateElement::Kind::outstand, .ratio = (width - web - root_radius) / flange},

@@ -39,6 +39,8 @@ class ChannelProfile {
   [[nodiscard]] double web_end() const { return arcs_[0].centre_z; }
   /// Height of the flange's inner face, prolonged to the web's face, from mid-height.
   [[nodiscard]] double flange_face_at_web() const { return face(size_.web); }
+  /// The same, unrounded, at a distance from the back of the web.
+  [[nodiscard]] double flange_face_at(double y) const { return face(y); }
 
  private:
   struct Arc {

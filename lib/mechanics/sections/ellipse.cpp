@@ -2,6 +2,7 @@
 #include <bismar/mechanics/section.hpp>
 
 #include "mechanics/arguments.hpp"
+#include "mechanics/sections/ellipse_circumference.hpp"
 
 #include <bismar/error.hpp>
 
@@ -15,10 +16,13 @@ namespace {
 
 constexpr double pi = std::numbers::pi;
 
-/// Circumference of an ellipse by the arithmetic-geometric mean: quadratic convergence, so that the
-/// loop ends at rounding after a handful of steps. Source: Abramowitz and Stegun, 17.6 (from
-/// memory).
-double circumference(double semi_major, double semi_minor) {
+}  // namespace
+
+namespace mechanics {
+
+double ellipse_circumference(double semi_axis, double other_semi_axis) {
+  const double semi_major = std::max(semi_axis, other_semi_axis);
+  const double semi_minor = std::min(semi_axis, other_semi_axis);
   double a = semi_major;
   double b = semi_minor;
   double sum = (semi_major * semi_major - semi_minor * semi_minor) / 2.0;
@@ -37,7 +41,7 @@ double circumference(double semi_major, double semi_minor) {
   return 2.0 * pi / a * (semi_major * semi_major - sum);
 }
 
-}  // namespace
+}  // namespace mechanics
 
 SectionProperties solid_ellipse(double height, double width) {
   FaultList faults;
@@ -53,7 +57,7 @@ SectionProperties solid_ellipse(double height, double width) {
   section.height = height;
   section.width = width;
   section.wall = section.ruling_dimension = std::min(height, width);
-  section.perimeter = circumference(std::max(a, b), least);
+  section.perimeter = mechanics::ellipse_circumference(a, b);
   section.area = pi * a * b;
   section.I_y = pi / 4.0 * a * a * a * b;
   section.I_z = pi / 4.0 * b * b * b * a;
@@ -65,6 +69,7 @@ SectionProperties solid_ellipse(double height, double width) {
   section.I_t = pi * a * a * a * b * b * b / (a * a + b * b);
   section.W_t = pi / 2.0 * a * b * least;
   section.A_v_y = section.A_v_z = 0.75 * section.area;  // V S / (I b) = 4 V / (3 A)
+  section.A_s_y = section.A_s_z = 0.9 * section.area;
   section.smooth_outline = true;
   return section;
 }

@@ -3,6 +3,7 @@
 
 #include "mechanics/arguments.hpp"
 #include "mechanics/fillet.hpp"
+#include "mechanics/sections/shear_energy.hpp"
 
 #include <bismar/error.hpp>
 
@@ -75,6 +76,8 @@ SectionProperties i_section(
                    4.0 * (fillet.s + web / 2.0 * fillet.area);
   section.I_t = torsion_constant(height, width, web, flange, root_radius);
   section.W_t = section.I_t / std::max(web, flange);
+  const double mid_height = height - flange;  // between the flanges' mid-lines
+  section.I_w = flange * width * width * width * mid_height * mid_height / 24.0;
 
   section.A_v_z = section.I_y * web / half_moment_y;
   // S(y) / b(y) <= (b^2/4 - y^2) / 2 at every cut y, because the thickness only falls outwards: the
@@ -85,6 +88,11 @@ SectionProperties i_section(
   const double web_end = clear / 2.0 - root_radius;
   section.junction_ratio = clear / height;
   section.A_v_junction = section.I_y * web / (half_moment_y - web * web_end * web_end / 2.0);
+
+  // Flow along a flange from its tip: the mid-line's distance times the overhang.
+  section.A_v_flange = section.I_y / (mid_height / 2.0 * overhang / 2.0);
+  section.A_s_z = mechanics::energy_shear_area_i(height, width, web, flange);
+  section.A_s_y = 2.0 * width * flange / 1.2;
 
   section.plates = {
       {.kind = PlateElement::Kind::outstand, .ratio = (overhang / 2.0 - root_radius) / flange},

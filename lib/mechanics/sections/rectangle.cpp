@@ -31,6 +31,7 @@ SectionProperties rectangle(double height, double width) {
   section.I_t = torsion.k2 * longer * shorter * shorter * shorter;
   section.W_t = torsion.k1 * longer * shorter * shorter;
   section.A_v_y = section.A_v_z = section.area / 1.5;  // V S / (I b) = 3 V / (2 A)
+  section.A_s_y = section.A_s_z = section.area / 1.2;  // the energy of that parabola
   return section;
 }
 

@@ -3,6 +3,7 @@
 
 #include "mechanics/arguments.hpp"
 #include "mechanics/fillet.hpp"
+#include "mechanics/sections/shear_energy.hpp"
 #include "mechanics/text.hpp"
 
 #include <bismar/error.hpp>
@@ -118,6 +119,8 @@ SectionProperties rectangular_tube(double height,
   // Both walls carry the shear; the first moment is largest at the neutral axis.
   section.A_v_z = section.I_y * 2.0 * wall / half_moment_y;
   section.A_v_y = section.I_z * 2.0 * wall / half_moment_z;
+  section.A_s_z = mechanics::energy_shear_area_box(height, width, wall);
+  section.A_s_y = mechanics::energy_shear_area_box(width, height, wall);
   // Where the web meets the flange: stress at the flange's inner face with the shear at the end of
   // the corner arc bounds every point of the corner.
   const double clear = std::min(inner_height / 2.0, height / 2.0 - outer_radius);

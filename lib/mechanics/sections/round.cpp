@@ -32,6 +32,7 @@ SectionProperties solid_round(double diameter) {
   section.I_t = 2.0 * section.I_y;
   section.W_t = 2.0 * section.W_el_y;
   section.A_v_y = section.A_v_z = 0.75 * section.area;  // tau = 4 V / (3 A)
+  section.A_s_y = section.A_s_z = 0.9 * section.area;   // the energy of V S / (I b)
   section.smooth_outline = true;
   return section;
 }
@@ -66,6 +67,9 @@ SectionProperties round_tube(double diameter, double wall, Forming forming) {
   section.W_t = 2.0 * section.W_el_y;
   // tau = V S / (I 2t) at the neutral axis, S = half the plastic modulus.
   section.A_v_y = section.A_v_z = section.I_y * 2.0 * wall / (section.W_pl_y / 2.0);
+  const double m = bore / diameter;
+  const double sum = (1.0 + m * m) * (1.0 + m * m);
+  section.A_s_y = section.A_s_z = 6.0 * sum / (7.0 * sum + 20.0 * m * m) * section.area;
   section.smooth_outline = true;
   section.plates = {{.kind = PlateElement::Kind::round, .ratio = diameter / wall}};
   return section;

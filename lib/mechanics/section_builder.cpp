@@ -29,10 +29,10 @@ SectionProperties make_rectangular_tube(Dimensions d, Forming forming) {
   const std::optional<double>& inner = d[4];
   if (outer.has_value() != inner.has_value()) {
     throw Error({Code::missing,
-                 outer ? "inner radius" : "outer radius",
+                 outer ? "outer radius" : "inner radius",
                  {},
                  "both radii or none",
-                 "Outer and inner radius are given together or not at all."});
+                 "outer and inner radius are given together or not at all."});
   }
   if (outer) {
     return rectangular_tube(*d[0], *d[1], *d[2], *outer, *inner, forming);

@@ -7,6 +7,7 @@
 #include <bismar/sizing/existence.hpp>
 
 #include <algorithm>
+#include <array>
 #include <cmath>
 #include <limits>
 #include <set>
@@ -135,14 +136,20 @@ ResolvedMaterial SizingProblem::resolve_case(std::size_t material,
   if (settings_.missing != Missing::class_median) {
     return resolved;
   }
-  // Whatever a limit state of this load case may read; the section is not known yet, so a tube
-  // stands for all: it has walls. A filled yield strength may change the rule, and so what is read:
+  // Whatever a limit state of this load case may read; the section is not known yet, so a
+  // tube and an I stand for all: walls, and a weak axis. A filled yield strength may change the
+  // rule, and so what is read:
   // look again.
-  const auto any_section = bismar::round_tube(0.1, 0.01, Forming::unknown);
+  const std::array any_sections = {bismar::round_tube(0.1, 0.01, Forming::unknown),
+                                   bismar::i_section(0.2, 0.1, 0.006, 0.009, 0.01)};
   for (int pass_number = 0; pass_number < 3; ++pass_number) {
     std::set<Symbol> wanted = {Symbol::rho};
     for (const LimitState* state : limit_states()) {
-      if (state->applies(effects_[load_case], member_limits_, resolved.member, any_section)) {
+      const bool applies =
+          std::any_of(any_sections.begin(), any_sections.end(), [&](const auto& section) {
+            return state->applies(effects_[load_case], member_limits_, resolved.member, section);
+          });
+      if (applies) {
         const auto needs = state->needs(effects_[load_case], resolved.member);
         wanted.insert(needs.begin(), needs.end());
       }

@@ -77,15 +77,15 @@ Answers weld_zone(const Check& check) {
 }
 
 std::optional<Answers> aluminium_answers(const Check& check) {
-  if (check.inputs.count("lambda_bar") != 0) {
+  if (check.inputs.contains("lambda_bar")) {
     const double lambda = check["lambda_bar"];
     return Answers{{"chi_A", reduction_factor(aluminium_curve(true), lambda)},
                    {"chi_B", reduction_factor(aluminium_curve(false), lambda)}};
   }
-  if (check.inputs.count("beta_over_eps") != 0) {
+  if (check.inputs.contains("beta_over_eps")) {
     return Answers{{"rho_c", aluminium_wall_factor({}, check["beta_over_eps"])}};
   }
-  return check.inputs.count("f_o_haz") != 0 ? weld_zone(check) : aluminium_column(check);
+  return check.inputs.contains("f_o_haz") ? weld_zone(check) : aluminium_column(check);
 }
 
 Answers slenderness_100(const Check& check) {
@@ -173,15 +173,15 @@ Answers joist(const Check& check) {
 }
 
 std::optional<Answers> timber_answers(const Check& check) {
-  if (check.inputs.count("lambda_rel") != 0) {
+  if (check.inputs.contains("lambda_rel")) {
     const double lambda = check["lambda_rel"];
     return Answers{{"kc_solid", reduction_factor(timber_curve(false), lambda)},
                    {"kc_glulam", reduction_factor(timber_curve(true), lambda)}};
   }
-  if (check.inputs.count("lambda_rel_m") != 0) {
+  if (check.inputs.contains("lambda_rel_m")) {
     return Answers{{"k_crit", lateral_buckling_factor(check["lambda_rel_m"])}};
   }
-  if (check.inputs.count("slenderness") != 0) {
+  if (check.inputs.contains("slenderness")) {
     return slenderness_100(check);
   }
   if (check.id == "TIM-014") {
@@ -193,7 +193,7 @@ std::optional<Answers> timber_answers(const Check& check) {
   if (check.id == "TIM-032") {
     return joist(check);
   }
-  if (check.inputs.count("h") != 0) {
+  if (check.inputs.contains("h")) {
     const bool glued = check.title.find("glulam") != std::string::npos;
     return Answers{
         {"k_h", size_factor(glued ? TimberKind::glued_laminated : TimberKind::solid, check["h"])}};

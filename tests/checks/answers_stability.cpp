@@ -22,7 +22,7 @@ constexpr double E_steel = 210e9;
 constexpr double G_steel = 81e9;
 
 double get(const Check& check, const std::string& name, double otherwise) {
-  return check.inputs.count(name) != 0 ? check[name] : otherwise;
+  return check.inputs.contains(name) ? check[name] : otherwise;
 }
 
 LateralTorsionalBeam beam_of(const Check& check, const MomentFactors& factors) {
@@ -42,7 +42,7 @@ Answers critical_moment(const Check& check) {
   const MomentFactors factors{.C1 = get(check, "C1", 1.0), .C2 = get(check, "C2", 0.0)};
   const double critical = elastic_critical_moment(beam_of(check, factors));
   Answers answers{{"Mcr", critical}};
-  if (check.inputs.count("Wpl_y") != 0) {
+  if (check.inputs.contains("Wpl_y")) {
     answers["lambda_0"] = lateral_torsional_slenderness(check["Wpl_y"], check["fy"], critical);
   }
   return answers;
@@ -125,7 +125,7 @@ Answers class_limits(const Check& check) {
 
 Answers classes(const Check& check) {
   const double epsilon = wall_epsilon(check["fy"], E_steel);
-  if (check.inputs.count("D") != 0) {
+  if (check.inputs.contains("D")) {
     const SectionProperties tube = round_tube(check["D"], check["t"], Forming::hot_finished);
     return {{"d_over_t", tube.plates.at(0).ratio}, {"class", section_class(tube, epsilon, true)}};
   }
@@ -158,7 +158,7 @@ Answers acting_stress(const Check& check) {
 
 Answers plastic_with_axial(const Check& check) {
   const double n = check["n"];
-  if (check.inputs.count("t_f") != 0) {
+  if (check.inputs.contains("t_f")) {
     const double a = web_share(check["A"], check["b"], check["t_f"]);
     return {{"a", a},
             {"M_N_y_ratio", plastic_moment_share_y(n, a)},
@@ -303,10 +303,10 @@ Answers minor_axis(const Check& check) {
 }
 
 std::optional<Answers> lateral_answers(const Check& check) {
-  if (check.inputs.count("f") != 0) {
+  if (check.inputs.contains("f")) {
     return rolled_with_divisor(check);
   }
-  if (check.inputs.count("L") != 0) {
+  if (check.inputs.contains("L")) {
     return critical_moment(check);
   }
   return check.inputs.size() == 1 ? class_limits(check) : classes(check);
@@ -321,16 +321,16 @@ std::optional<Answers> stability_answers(const Check& check) {
   if (!starts_with(check.id, "STL")) {
     return std::nullopt;
   }
-  if (check.inputs.count("sigma_com_Ed") != 0) {
+  if (check.inputs.contains("sigma_com_Ed")) {
     return acting_stress(check);
   }
-  if (check.inputs.count("lambda_LT") != 0) {
+  if (check.inputs.contains("lambda_LT")) {
     return lateral_curves(check);
   }
-  if (check.inputs.count("n") != 0) {
+  if (check.inputs.contains("n")) {
     return plastic_with_axial(check);
   }
-  if (check.inputs.count("Pr_Pc") != 0) {
+  if (check.inputs.contains("Pr_Pc")) {
     return Answers{{"ratio", aisc_interaction(check["Pr_Pc"], check["Mrx_Mcx"], check["Mry_Mcy"])}};
   }
   if (check.id == "STL-010") {

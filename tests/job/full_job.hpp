@@ -137,7 +137,7 @@ inline const std::string full_job = R"json({
         }
       },
       "limits": {
-        "deflection": "10 mm", "shear_deflection": true, "rotation": "1 deg", "frequency": "8 Hz",
+        "shear_deflection": true, "rotation": "1 deg", "frequency": "8 Hz",
         "elongation": "1 mm", "lateral_restraint": true
       }
     }

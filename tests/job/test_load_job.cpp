@@ -292,7 +292,7 @@ TEST_CASE("whole members of a job are read in SI units") {
   CHECK(details.k_t_torsion == 1.5);
   CHECK(details.notch_radius == 0.002);
   CHECK(details.surface == SurfaceFinish::as_forged);
-  CHECK(details.reliability == 0.999);
+  CHECK(details.reliability == Approx(0.999).epsilon(1e-15));
   CHECK(details.criterion == FatigueCriterion::gerber);
   CHECK(details.detail_category == 80e6);
   CHECK(details.welded);

@@ -185,7 +185,7 @@ TEST_CASE("what is no stored result, or one of another version, is refused with 
   CHECK(fault("{}").code == Code::missing);
   CHECK(fault("{").code == Code::json_malformed);
   CHECK(fault(R"({"bismar_result": 99})").code == Code::version_unsupported);
-  CHECK(fault(R"({"bismar_result": 1})").message == "the stored result lacks its job.");
+  CHECK(fault(R"({"bismar_result": 2})").message == "the stored result lacks its job.");
   const Fault kind =
       fault(with(stored_text(), "\"front_count\": ", "\"front_count\": \"x\", \"y\": "));
   CHECK(kind.code == Code::wrong_type);

@@ -25,8 +25,9 @@ struct SectionDimension {
 
 /// The section with these dimensions, in the order of dimensions(family) [m]; the optional ones may
 /// be absent.
-/// @throws bismar::Error  as the section's own function does, or missing, place "outer radius" or
-///   "inner radius", where only one of both is given; InternalError for a wrong count, a missing
+/// @throws bismar::Error  as the section's own function does, or missing, the place the radius that
+/// is
+///   given, where only one of both is; InternalError for a wrong count, a missing
 ///   dimension or a polygon.
 [[nodiscard]] BISMAR_API SectionProperties make_section(
     SectionFamily family, std::span<const std::optional<double>> dimensions, Forming forming);

@@ -97,10 +97,22 @@ double continuous_buckling_factor(double slenderness) {
   return std::min(1.56 - 0.75 * 1.3733, 0.9996 / (slenderness * slenderness));
 }
 
+bool is_solid(const SectionProperties& section) {
+  return section.family == SectionFamily::solid_rectangle ||
+         section.family == SectionFamily::solid_ellipse;
+}
+
 ColumnCurve lateral_curve(const CheckInput& input) {
-  return is_aluminium(input.material.column_law)
-             ? aluminium_lateral_curve(false)
-             : steel_curve(lateral_torsional_curve(input.section));
+  ColumnCurve curve = is_aluminium(input.material.column_law)
+                          ? aluminium_lateral_curve(false)
+                          : steel_curve(lateral_torsional_curve(input.section));
+  if (is_solid(input.section)) {
+    // EN 1993-1-1 6.3.2.2(4): no lateral buckling up to 0.4. Its jump there would let a stronger
+    // grade be the worse one, so that the plateau ends where the curve begins. The clause is kept
+    // to solid bars: curves of thin-walled sections stand for their residual stresses too.
+    curve.lambda_0 = std::max(curve.lambda_0, 0.4);
+  }
+  return curve;
 }
 
 }  // namespace
@@ -125,8 +137,8 @@ LateralShape lateral_shape(const LoadEffects& effects, double length) {
   using Basis = LateralShape::Basis;
   const MomentShape& moment = effects.moment_y;
   const bool own_mass = effects.acceleration_z != 0.0;
-  const auto shape = [](double C1, double C2, double k, Basis basis) {
-    return LateralShape{.factors = {.C1 = C1, .C2 = C2}, .k = k, .basis = basis};
+  const auto shape = [](double of_shape, double of_load, double k, Basis basis) {
+    return LateralShape{.factors = {.C1 = of_shape, .C2 = of_load}, .k = k, .basis = basis};
   };
   if (effects.support_z == Support::cantilever) {
     return at_most(moment, 0.75, 0.5, 0.25)
@@ -186,12 +198,14 @@ std::vector<Symbol> lateral_symbols(const MemberMaterial& material) {
 
 std::vector<std::string> lateral_steps(const CheckInput& input, const LateralResistance& r) {
   const SectionProperties& s = input.section;
-  std::vector<std::string> steps = {"Loads act at the top edge, " + millimetres(s.height / 2.0) +
-                                    " above the middle; the supports hold against twist. " +
-                                    describe(r.shape) + "."};
+  const bool tee = s.family == SectionFamily::tee;
+  std::vector<std::string> steps = {
+      tee ? "Loads act at the flange; the supports hold against twist. k = " + number(r.shape.k) +
+                ", one moment over the length."
+          : "Loads act at the top edge, " + millimetres(s.height / 2.0) +
+                " above the middle; the supports hold against twist. " + describe(r.shape) + "."};
   steps.push_back(
-      (s.family == SectionFamily::tee
-           ? "M_cr of a T with its stem's tip in compression (AISC 360-16 F9) with L = "
+      (tee ? "M_cr of a T with its stem's tip in compression (AISC 360-16 F9) with L = "
            : "M_cr = C1 pi^2 E I_z / (k L)^2 [root of (I_w / I_z + (k L)^2 G I_t / (pi^2 E I_z) + "
              "(C2 z_g)^2) - C2 z_g] with k L = ") +
       millimetres(r.shape.k * input.length) +

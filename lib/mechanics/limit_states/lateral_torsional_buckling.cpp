@@ -24,15 +24,15 @@ bool bends_about_y(const LoadEffects& effects) {
 /// What bending about the weak axis takes of the resistance. EN 1995-1-1 6.1.6 lets a rectangle
 /// count it with 0.7; a metal counts it whole, as in EN 1993-1-1 (6.61) with N = 0; where M_cr is
 /// the limit it is no part of it.
-double share_about_z(const CheckInput& input, double M_z) {
+double share_about_z(const CheckInput& input, double moment) {
   const MemberMaterial& material = input.material;
   const bool timber = is_timber(material.column_law);
-  if (M_z == 0.0 || (!timber && !is_ductile_column(material))) {
+  if (moment == 0.0 || (!timber && !is_ductile_column(material))) {
     return 0.0;
   }
   const bool rectangle = input.section.family == SectionFamily::solid_rectangle;
   const double weight = timber && rectangle ? 0.7 : 1.0;
-  return weight * input.factor * M_z /
+  return weight * input.factor * moment /
          (input.section.W_el_z * strength_in_bending(material) * weld_share(input));
 }
 

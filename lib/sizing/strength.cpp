@@ -170,6 +170,7 @@ class Resolver {
       m.*one.value = read(one.property);
     }
     m.E_axial = read(Property::youngs_modulus_axial);
+    shear_modulus();
     m.ceramic = info_.material_class == "ceramic" || info_.material_class == "glass";
     m.steel = is_steel(info_);
     m.cast_iron = info_.material_class == "cast iron";
@@ -179,6 +180,16 @@ class Resolver {
       if (auto& value = value_of(m, symbol); !value) {
         value = need(property_of(symbol));
       }
+    }
+  }
+
+  /// An isotropic solid's follows from Young's modulus and Poisson's ratio.
+  void shear_modulus() {
+    auto& m = out_.member;
+    const auto nu = read(Property::poisson_ratio);
+    if (!m.G && m.E && nu && info_.isotropic) {
+      m.G = *m.E / (2.0 * (1.0 + *nu));
+      out_.notes.emplace_back("shear modulus from Young's modulus and Poisson's ratio");
     }
   }
 

@@ -114,7 +114,7 @@ inline const std::string full_job = R"json({
             "name": "built in",
             "support": { "z": "fixed pinned", "y": "fixed" },
             "own_weight": true,
-            "loads": [{ "force": "-1 kN", "at": "middle" }],
+            "loads": [{ "force": "-1 kN", "at": "1 m" }],
             "eccentricity": "3 mm",
             "temperature_change": "-30 K",
             "restrained": true,
@@ -122,7 +122,7 @@ inline const std::string full_job = R"json({
           },
           {
             "name": "overhanging",
-            "support": "pinned",
+            "support": { "z": "pinned", "y": "pinned" },
             "second_support": "1.5 m",
             "acceleration": { "z": "15 m/s2", "y": "2 m/s2" }
           }

@@ -269,7 +269,7 @@ TEST_CASE("The stem of a T in compression buckles before the flange would") {
   CHECK(tee_critical_moment(200e9, 0.4e-6, 8e-9, 0.1, 3.0) == Approx(4378.3).epsilon(2e-4));
 }
 
-TEST_CASE("Curves follow the section; every other section takes curve d") {
+TEST_CASE("Curves follow the section, every other section takes curve d") {
   const SectionProperties wide = i_section(0.2, 0.2, 0.009, 0.015, 0.018);
   const SectionProperties twice = i_section(0.4, 0.2, 0.009, 0.015, 0.018);
   const SectionProperties deep = i_section(0.5, 0.2, 0.01, 0.016, 0.021);

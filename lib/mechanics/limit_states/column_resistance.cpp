@@ -184,7 +184,7 @@ ColumnResistance twisting_resistance(const CheckInput& input) {
   r.critical =
       torsional_flexural_critical_load(section,
                                        {.youngs_modulus = E,
-                                        .shear_modulus = needed(input.material.G, Symbol::G),
+                                        .shear_modulus = stability_shear_modulus(input.material),
                                         .length = r.effective_length},
                                        euler_critical_load(E, section.I_u(), length_u),
                                        euler_critical_load(E, section.I_v(), length_v));
@@ -212,7 +212,7 @@ std::string critical_load_step(const CheckInput& input, const ColumnResistance& 
   if (r.mode == ColumnMode::twisting) {
     return "N_cr by twisting = " + kilonewtons(r.critical) +
            ", the least root of the torsional-flexural equation with G I_t = " +
-           gigapascals(needed(input.material.G, Symbol::G)) + " x " +
+           stability_shear_modulus_text(input.material) + " x " +
            fourth_millimetres(input.section.I_t) +
            ", pi^2 E I_w / L_T^2 with L_T = " + millimetres(r.effective_length) +
            " and the shear centre at (" + millimetres(input.section.y_shear) + ", " +

@@ -313,7 +313,9 @@ std::vector<Symbol> CompressionBending::needs(const LoadEffects& effects,
                                               const MemberMaterial& material) const {
   std::vector<Symbol> symbols = column_symbols(material);
   add_bending_symbols(material, symbols);
-  symbols.push_back(Symbol::G);
+  if (stability_reads_shear_modulus(material)) {
+    symbols.push_back(Symbol::G);
+  }
   if (own_mass_acts(effects)) {
     symbols.push_back(Symbol::rho);
   }

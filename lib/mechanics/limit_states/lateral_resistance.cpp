@@ -61,7 +61,7 @@ double lateral_modulus(const MemberMaterial& material) {
 }
 
 double lateral_shear_modulus(const MemberMaterial& material) {
-  const double G = needed(material.G, Symbol::G);
+  const double G = stability_shear_modulus(material);
   return is_timber(material.column_law) ? std::min(G, needed(material.E_05, Symbol::E_05) / 16.0)
                                         : G;
 }
@@ -189,7 +189,10 @@ LateralResistance lateral_resistance(const CheckInput& input) {
 
 std::vector<Symbol> lateral_symbols(const MemberMaterial& material) {
   const bool timber = is_timber(material.column_law);
-  std::vector<Symbol> symbols = {timber ? Symbol::E_05 : Symbol::E, Symbol::G};
+  std::vector<Symbol> symbols = {timber ? Symbol::E_05 : Symbol::E};
+  if (stability_reads_shear_modulus(material)) {
+    symbols.push_back(Symbol::G);
+  }
   if (timber || is_ductile_column(material)) {
     add_bending_symbols(material, symbols);
   }
@@ -210,8 +213,10 @@ std::vector<std::string> lateral_steps(const CheckInput& input, const LateralRes
              "(C2 z_g)^2) - C2 z_g] with k L = ") +
       millimetres(r.shape.k * input.length) +
       ", E = " + gigapascals(lateral_modulus(input.material)) + ", G = " +
-      gigapascals(lateral_shear_modulus(input.material)) + ", I_z = " + fourth_millimetres(s.I_z) +
-      ", I_t = " + fourth_millimetres(s.I_t) + ": " + newton_metres(r.critical) + ".");
+      (is_timber(input.material.column_law) ? gigapascals(lateral_shear_modulus(input.material))
+                                            : stability_shear_modulus_text(input.material)) +
+      ", I_z = " + fourth_millimetres(s.I_z) + ", I_t = " + fourth_millimetres(s.I_t) + ": " +
+      newton_metres(r.critical) + ".");
   if (r.slenderness == 0.0) {
     steps.emplace_back("The material has no curve: M_cr itself is the limit.");
     return steps;

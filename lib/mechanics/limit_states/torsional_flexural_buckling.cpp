@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/column_resistance.hpp"
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/value.hpp"
 #include "mechanics/text.hpp"
 
 #include <string>
@@ -33,7 +34,9 @@ class TorsionalFlexuralBuckling final : public LimitState {
   }
   std::vector<Symbol> needs(const LoadEffects&, const MemberMaterial& material) const override {
     std::vector<Symbol> symbols = column_symbols(material);
-    symbols.push_back(Symbol::G);
+    if (stability_reads_shear_modulus(material)) {
+      symbols.push_back(Symbol::G);
+    }
     return symbols;
   }
   double utilisation(const CheckInput& input) const override {

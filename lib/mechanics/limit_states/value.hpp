@@ -1,6 +1,8 @@
 // SPDX-License-Identifier: MIT
 #pragma once
 
+#include "mechanics/text.hpp"
+
 #include <bismar/error.hpp>
 #include <bismar/mechanics/limit_state.hpp>
 
@@ -42,6 +44,26 @@ inline InternalForces acting_forces(const CheckInput& input, const Station& stat
 /// Whether the density is read: the member's own mass acts.
 inline bool own_mass_acts(const LoadEffects& effects) {
   return effects.acceleration_z != 0.0 || effects.acceleration_y != 0.0;
+}
+
+/// Whether stability reads the shear modulus of the table: an isotropic solid without one has at
+/// least E / 3 (nu = 1/2), which stands for it on the safe side.
+inline bool stability_reads_shear_modulus(const MemberMaterial& material) {
+  return material.G.has_value() || material.rule == StressRule::direct_and_shear;
+}
+
+/// Shear modulus for stability [Pa].
+inline double stability_shear_modulus(const MemberMaterial& material) {
+  return stability_reads_shear_modulus(material) ? needed(material.G, Symbol::G)
+                                                 : needed(material.E, Symbol::E) / 3.0;
+}
+
+/// "80 GPa", with a word where the table has none.
+inline std::string stability_shear_modulus_text(const MemberMaterial& material) {
+  return gigapascals(stability_shear_modulus(material)) +
+         (stability_reads_shear_modulus(material)
+              ? ""
+              : " (E / 3, the least of any isotropic solid: the table has none)");
 }
 
 /// Bending strength of a material that is not held against yield [Pa]; a table without one: the

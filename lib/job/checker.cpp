@@ -4,6 +4,7 @@
 #include <bismar/quantity/parse.hpp>
 
 #include <algorithm>
+#include <cmath>
 #include <utility>
 
 namespace bismar::detail {
@@ -34,6 +35,9 @@ std::string describe(const Format& format) {
       return "the number " + numbers;
     }
     case Type::quantity:
+      if (format.kind == QuantityKind::count) {
+        return "a whole number, such as 2000";
+      }
       return std::string(phrase_of(format.kind)) +
              (takes_plain_number(format.kind) ? ", such as "
                                               : " as a text with its unit, such as ") +
@@ -273,8 +277,7 @@ void Checker::check_quantity(const JsonValue& value, const Format& format) {
     return;
   }
   if (value.is(Kind::number)) {
-    if (format.kind == QuantityKind::count &&
-        value.number != static_cast<double>(static_cast<long long>(value.number))) {
+    if (format.kind == QuantityKind::count && value.number != std::floor(value.number)) {
       add(Code::out_of_range,
           value,
           value.text,

@@ -77,7 +77,8 @@ Format limits() {
   };
   return object(
       {key("deflection", length("Largest deflection.")),
-       key("shear_deflection", yes_or_no("The deflection has its shear part; default false.")),
+       key("shear_deflection",
+           yes_or_no("Shear counts in the deflection and the frequency; default false.")),
        key("rotation", quantity(QuantityKind::angle, Sign::positive, "Largest slope of the axis.")),
        key("frequency",
            quantity(QuantityKind::frequency, Sign::positive, "Least first natural frequency.")),

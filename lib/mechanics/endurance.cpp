@@ -38,17 +38,23 @@ void require_within(
   faults.throw_if_any();
 }
 
-/// z of the standard normal distribution by bisection: P(Z < z) = reliability.
+/// z of the standard normal distribution, P(Z < z) = reliability, for at least 0.5.
+///
+/// Begun with the rational formula of Hastings (Abramowitz and Stegun, Handbook of Mathematical
+/// Functions, 26.2.23, error below 4.5e-4; from memory) and bettered by two of Halley's steps on
+/// the tail above z, which keeps its digits where the reliability is close to 1. Each step cubes
+/// the error, so that two reach the rounding of erfc(); a bisection holds it in the tests.
 double normal_deviate(double reliability) {
-  double low = 0.0;
-  double high = 6.0;
-  for (int i = 0; i < 60; ++i) {
-    const double middle = 0.5 * (low + high);
-    // The tail above keeps its digits where the reliability is close to 1.
-    const bool below = 0.5 * std::erfc(middle / std::numbers::sqrt2) > 1.0 - reliability;
-    (below ? low : high) = middle;
+  const double tail = 1.0 - reliability;
+  const double t = std::sqrt(-2.0 * std::log(tail));
+  double z = t - (2.515517 + t * (0.802853 + t * 0.010328)) /
+                     (1.0 + t * (1.432788 + t * (0.189269 + t * 0.001308)));
+  for (int i = 0; i < 2; ++i) {
+    const double density = std::exp(-0.5 * z * z) / std::sqrt(2.0 * std::numbers::pi);
+    const double newton = (0.5 * std::erfc(z / std::numbers::sqrt2) - tail) / density;
+    z += newton / (1.0 - 0.5 * z * newton);
   }
-  return 0.5 * (low + high);
+  return std::max(0.0, z);
 }
 
 }  // namespace

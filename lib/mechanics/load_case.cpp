@@ -59,8 +59,8 @@ void check_second_support(FaultList& faults, const LoadCase& load_case, double l
   if (!has_second_support(load_case.support_z) || !has_second_support(load_case.support_y)) {
     faults.add(Code::conflict,
                "/second_support",
-               "Only a member that is pinned_pinned or fixed_pinned in both planes can overhang a "
-               "second support; leave it out or change the supports.");
+               "Only a member that is pinned or fixed pinned in both planes can overhang a second "
+               "support. Leave it out or change the supports.");
   }
 }
 

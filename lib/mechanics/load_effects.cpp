@@ -9,6 +9,8 @@
 
 #include <algorithm>
 #include <cmath>
+#include <cstddef>
+#include <numbers>
 #include <vector>
 
 namespace bismar {
@@ -28,7 +30,67 @@ OwnMassEffects own_mass_effects(const mechanics::BendingPlane& plane) {
           .rotation = mechanics::largest_rotation(plane)};
 }
 
-/// How a moment given directly runs along the member is not known: uniform is the worst.
+/// See MomentShape::load_share.
+double twisting_weight(const mechanics::PlaneSetup& held, double length, double x) {
+  if (held.support == Support::cantilever) {
+    return x / length;
+  }
+  const double s = held.second_support;
+  if (s < length * (1.0 - 1e-9)) {
+    return (x < s ? x * (s - x) / s : x - s) / length;
+  }
+  const double wave = std::sin(std::numbers::pi * x / length);
+  return wave * wave;
+}
+
+/// Integral of w |q| over a part of a segment on which q keeps its sign.
+double weighted_line_load(const mechanics::PlaneSegment& segment,
+                          const mechanics::PlaneSetup& held,
+                          double length,
+                          double from,
+                          double to) {
+  // Simpson's rule, exact for the polynomial weights, within 1e-5 for the sine.
+  constexpr int intervals = 32;
+  const double step = (to - from) / intervals;
+  double sum = 0.0;
+  for (int i = 0; i <= intervals; ++i) {
+    const double xi = from + i * step;
+    const double count = i == 0 || i == intervals ? 1.0 : i % 2 == 1 ? 4.0 : 2.0;
+    sum += count * std::abs(segment.load(xi)) * twisting_weight(held, length, segment.start + xi);
+  }
+  return sum * step / 3.0;
+}
+
+double load_share(const mechanics::CutMember& cut, const mechanics::BendingPlane& plane) {
+  double sum = 0.0;
+  const auto add_force = [&](double force, double x) {
+    if (std::abs(force) > cut.force_noise) {
+      sum += std::abs(force) * twisting_weight(plane.setup, cut.length, x);
+    }
+  };
+  // A jump of the shear force is a point load. Reactions are jumps too, where the weight is zero.
+  for (std::size_t k = 0; k < plane.segments.size(); ++k) {
+    const mechanics::PlaneSegment& segment = plane.segments[k];
+    const bool line_load = segment.load.c[0] != 0.0 || segment.load.c[1] != 0.0;
+    if (line_load) {
+      const double zero = segment.load.c[1] != 0.0 ? -segment.load.c[0] / segment.load.c[1] : 0.0;
+      const double turn = std::clamp(zero, 0.0, segment.length);
+      sum += weighted_line_load(segment, plane.setup, cut.length, 0.0, turn) +
+             weighted_line_load(segment, plane.setup, cut.length, turn, segment.length);
+    }
+    const double before = segment.shear(segment.length);
+    if (k + 1 < plane.segments.size()) {
+      add_force(before - plane.segments[k + 1].shear(0.0), plane.segments[k + 1].start);
+    } else if (plane.setup.support == Support::cantilever ||
+               plane.setup.second_support < cut.length * (1.0 - 1e-9)) {
+      add_force(before, cut.length);
+    }
+  }
+  return sum;
+}
+
+/// How a moment given directly runs along the member is not known: uniform is the worst. Other
+/// loads of the plane go on twisting the member, so that its moment is none of end moments alone.
 void include_direct(MomentShape& shape, double moment) {
   if (moment == 0.0) {
     return;
@@ -36,7 +98,11 @@ void include_direct(MomentShape& shape, double moment) {
   const double size = std::max(shape.largest, std::abs(moment));
   shape.largest = size;
   shape.quarters = {size, size, size};
-  shape.end_ratio = 1.0;
+  if (shape.load_share > 0.0) {
+    shape.end_ratio.reset();
+  } else {
+    shape.end_ratio = 1.0;
+  }
 }
 
 void read_member(const mechanics::CutMember& cut, LoadEffects& effects) {
@@ -51,6 +117,8 @@ void read_member(const mechanics::CutMember& cut, LoadEffects& effects) {
   }
   effects.moment_y = mechanics::moment_shape(cut, cut.z);
   effects.moment_z = mechanics::moment_shape(cut, cut.y);
+  effects.moment_y.load_share = load_share(cut, cut.z);
+  effects.moment_z.load_share = load_share(cut, cut.y);
   effects.own_z = own_mass_effects(cut.own_z);
   effects.own_y = own_mass_effects(cut.own_y);
 }

@@ -18,6 +18,9 @@ namespace {
 
 /// Closer than this share of the outline's size is in touch.
 constexpr double touching = 1e-9;
+/// Largest size over mean thickness: strips up to 2000 : 1, needles up to
+/// 1000 : 1. What is thinner takes ever more time, up to minutes.
+constexpr double most_slender = 2000.0;
 
 std::string place_of(std::size_t ring) {
   return ring == 0 ? "/outer" : "/holes/" + std::to_string(ring - 1);
@@ -56,6 +59,9 @@ class Checker {
           check_pair(r, other);
         }
       }
+    }
+    if (faults_.empty()) {
+      check_thickness();
     }
     faults_.throw_if_any();
   }
@@ -141,7 +147,8 @@ class Checker {
     const Ring& ring = rings_[r];
     const std::size_t n = ring.size();
     const auto at = [&](std::size_t i) -> const SectionPoint& { return ring[i % n]; };
-    for (std::size_t i = 0; i < n; ++i) {
+    // The first place only: the others follow from it.
+    for (std::size_t i = 0; i < n && sound_[r]; ++i) {
       for (std::size_t j = 0; j < i; ++j) {
         bool meet = false;
         if (j + 1 == i || (j == 0 && i + 1 == n)) {
@@ -174,7 +181,7 @@ class Checker {
     const Ring& b = rings_[other];
     const std::string what = other == 0 ? "the outline" : "hole " + std::to_string(other - 1);
     bool apart = true;
-    for (std::size_t i = 0; i < a.size(); ++i) {
+    for (std::size_t i = 0; i < a.size() && apart; ++i) {
       for (std::size_t j = 0; j < b.size(); ++j) {
         if (distance(a[i], a[(i + 1) % a.size()], b[j], b[(j + 1) % b.size()]) <=
             touching * size_) {
@@ -205,6 +212,33 @@ class Checker {
           "one inside the other",
           "holes side by side",
           "This hole and " + what + " lie one inside the other.");
+    }
+  }
+
+  /// Twice the area over the whole perimeter is the mean thickness of anything thin, however it is
+  /// turned, bent or closed, and half the thickness of a slender triangle.
+  void check_thickness() {
+    double area = 0.0;
+    double perimeter = 0.0;
+    for (std::size_t r = 0; r < rings_.size(); ++r) {
+      const Ring& ring = rings_[r];
+      const double inside = std::abs(signed_area(ring));
+      area += r == 0 ? inside : -inside;
+      for (std::size_t i = 0; i < ring.size(); ++i) {
+        const SectionPoint edge = ring[(i + 1) % ring.size()] - ring[i];
+        perimeter += std::hypot(edge.y, edge.z);
+      }
+    }
+    const double slender = size_ * perimeter / (2.0 * area);
+    if (!(slender <= most_slender)) {
+      add(Code::out_of_range,
+          place_of(0),
+          number(slender) + " times its mean thickness",
+          "a size of at most " + number(most_slender) + " times the mean thickness",
+          "The section is " + number(slender) +
+              " times as large as its mean thickness (twice the area over the perimeter, holes "
+              "included); at most " +
+              number(most_slender) + " times can be solved. Make it thicker, or check its points.");
     }
   }
 

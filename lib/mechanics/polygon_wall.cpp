@@ -6,7 +6,10 @@
 #include <cstddef>
 #include <limits>
 #include <numbers>
+#include <numeric>
 #include <queue>
+#include <utility>
+#include <vector>
 
 namespace bismar::mechanics {
 
@@ -146,33 +149,68 @@ double least_wall(std::span<const Edge> edges, std::span<const SectionPoint> hul
   return std::isinf(wall) ? least_width(hull) : wall;
 }
 
+namespace {
+
+/// A square that may hold the centre of the largest circle.
+struct Cell {
+  SectionPoint middle;
+  double half = 0.0;
+  double reach = 0.0;             ///< No circle with its centre in the cell has a larger radius.
+  std::vector<std::size_t> near;  ///< The edges that can be the nearest to a place in the cell.
+  bool operator<(const Cell& other) const { return reach < other.reach; }
+};
+
+bool is_in_material(const SectionPoint& point, std::span<const Ring> rings) {
+  for (std::size_t r = 1; r < rings.size(); ++r) {
+    if (is_inside(point, rings[r])) {
+      return false;
+    }
+  }
+  return is_inside(point, rings[0]);
+}
+
+}  // namespace
+
 double largest_circle(std::span<const Ring> rings, std::span<const Edge> edges) {
-  struct Cell {
-    SectionPoint middle;
-    double half = 0.0;
-    double reach = 0.0;  ///< No circle with its centre in the cell has a larger radius.
-    bool operator<(const Cell& other) const { return reach < other.reach; }
-  };
   double best = 0.0;
   std::priority_queue<Cell> cells;
-  const auto add = [&](const SectionPoint& middle, double half) {
+  std::vector<double> distances;
+  // Thin rings of many edges make many cells: each looks at the edges near its parent only.
+  const auto add = [&](const SectionPoint& middle, double half, std::span<const std::size_t> near) {
     double radius = infinity;
-    for (const Edge& edge : edges) {
-      const SectionPoint way = nearest(middle, edge) - middle;
-      radius = std::min(radius, std::hypot(way.y, way.z));
+    std::size_t closest = near[0];
+    SectionPoint to_closest;
+    distances.clear();
+    for (const std::size_t e : near) {
+      const SectionPoint way = nearest(middle, edges[e]) - middle;
+      distances.push_back(std::hypot(way.y, way.z));
+      if (distances.back() < radius) {
+        radius = distances.back();
+        closest = e;
+        to_closest = way;
+      }
     }
-    bool inside = is_inside(middle, rings[0]);
-    for (std::size_t r = 1; r < rings.size(); ++r) {
-      inside = inside && !is_inside(middle, rings[r]);
-    }
+    // Square to the nearest edge, the side of that edge tells; at its ends the whole outline does.
+    const double out = dot(to_closest, edges[closest].outward);
+    const bool square = std::abs(out) > (1.0 - slack) * radius;
+    const bool inside = square ? out > 0.0 : is_in_material(middle, rings);
     const double signed_radius = inside ? radius : -radius;
     best = std::max(best, signed_radius);
-    const double reach = signed_radius + half * std::numbers::sqrt2;
+    const double diagonal = half * std::numbers::sqrt2;
+    const double reach = signed_radius + diagonal;
     constexpr double exact_enough = 1.01;
     if (reach > exact_enough * best) {
-      cells.push({middle, half, reach});
+      Cell cell{.middle = middle, .half = half, .reach = reach, .near = {}};
+      for (std::size_t i = 0; i < near.size(); ++i) {
+        if (distances[i] <= (radius + 2.0 * diagonal) * (1.0 + slack)) {
+          cell.near.push_back(near[i]);
+        }
+      }
+      cells.push(std::move(cell));
     }
   };
+  std::vector<std::size_t> all(edges.size());
+  std::iota(all.begin(), all.end(), std::size_t{0});
 
   SectionPoint low = rings[0][0];
   SectionPoint high = low;
@@ -186,7 +224,7 @@ double largest_circle(std::span<const Ring> rings, std::span<const Edge> edges) 
   };
   for (int column = 0; column < count(high.y - low.y); ++column) {
     for (int row = 0; row < count(high.z - low.z); ++row) {
-      add({low.y + (column + 0.5) * side, low.z + (row + 0.5) * side}, side / 2.0);
+      add({low.y + (column + 0.5) * side, low.z + (row + 0.5) * side}, side / 2.0, all);
     }
   }
   while (!cells.empty() && cells.top().reach > 1.01 * best) {
@@ -195,7 +233,7 @@ double largest_circle(std::span<const Ring> rings, std::span<const Edge> edges) 
     const double half = cell.half / 2.0;
     for (const double y : {-half, half}) {
       for (const double z : {-half, half}) {
-        add({cell.middle.y + y, cell.middle.z + z}, half);
+        add({cell.middle.y + y, cell.middle.z + z}, half, cell.near);
       }
     }
   }

@@ -132,10 +132,7 @@ StressPoints stress_points(const SectionProperties& section, const StationStress
   // What of a y load's shear and M_z's bending there is in the web: all along a channel's, none of
   // the shear in others.
   const double web_shear_y = channel ? s.shear_y : 0.0;
-  const bool fibres = !section.fibres.empty();
-  const double across_y = fibres ? s.bending - s.bending_z : s.bending_y;
-  const double across_z = fibres ? s.bending - s.bending_y : s.bending_z;
-  const double web_bending = channel ? s.web_bending_z : across_z;
+  const double web_bending = channel ? s.web_bending_z : s.bending_z;
   StressPoints points{};
   points[0] = extreme_fibre(s, s.torsion + s.flange_shear);
   points[1] = {.place = "at the neutral axis of the z loads",
@@ -145,7 +142,7 @@ StressPoints stress_points(const SectionProperties& section, const StationStress
                .shear = s.shear_z + web_shear_y + s.torsion};
   points[2] = {.place = "at the neutral axis of the y loads",
                .axial = s.axial,
-               .bending = across_y,
+               .bending = s.bending_y,
                .beyond = s.bending_z,
                .shear = s.shear_y + s.torsion + s.flange_shear};
   points[3] = {.place = "at the centre",

@@ -43,7 +43,8 @@ std::string gigapascals(double pascals) { return with_unit(pascals * 1e-9, "GPa"
 std::string kilonewtons(double newtons) { return with_unit(newtons * 1e-3, "kN"); }
 std::string newton_metres(double value) { return with_unit(value, "N m"); }
 std::string degrees(double radians) {
-  return with_unit(radians * 180.0 / std::numbers::pi, "degrees");
+  const double value = radians * 180.0 / std::numbers::pi;
+  return with_unit(value, number(value) == "1" ? "degree" : "degrees");
 }
 
 }  // namespace bismar::mechanics

@@ -7,6 +7,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <numbers>
 
 namespace bismar {
 
@@ -106,6 +107,28 @@ double aluminium_class_3_limit(PlateElement::Kind kind, double epsilon, bool cla
       return internal / 3.0 * (internal / 3.0);
   }
   throw InternalError("plate element without a wall limit");
+}
+
+double web_shear_coefficient(WebEdges edges) { return edges == WebEdges::both_held ? 5.34 : 1.2; }
+
+double web_shear_slenderness(WebEdges edges, double ratio, double strength, double youngs_modulus) {
+  FaultList faults;
+  mechanics::require_positive(faults, "ratio", ratio);
+  mechanics::require_positive(faults, "strength", strength);
+  mechanics::require_positive(faults, "youngs_modulus", youngs_modulus);
+  faults.throw_if_any();
+  constexpr double poisson = 0.3;
+  constexpr double plate = std::numbers::pi * std::numbers::pi / (12.0 * (1.0 - poisson * poisson));
+  return 0.76 * ratio *
+         std::sqrt(strength / (web_shear_coefficient(edges) * plate * youngs_modulus));
+}
+
+double web_shear_factor(double slenderness) {
+  FaultList faults;
+  mechanics::require_not_negative(faults, "slenderness", slenderness);
+  faults.throw_if_any();
+  constexpr double stocky = 0.83;
+  return slenderness <= stocky ? 1.0 : stocky / slenderness;
 }
 
 }  // namespace bismar

@@ -1,7 +1,11 @@
 // SPDX-License-Identifier: MIT
+#include <algorithm>
+#include <numbers>
+#include <span>
 #include <string>
 #include <vector>
 
+#include <bismar/mechanics/section_builder.hpp>
 #include <bismar/report/table.hpp>
 #include <bismar/report/text_report.hpp>
 
@@ -13,6 +17,21 @@ namespace {
 using report::number;
 
 std::string mm(double metres) { return number(metres * 1e3) + " mm"; }
+
+std::string angle(double radians) {
+  return number(radians * 180.0 / std::numbers::pi) + " deg (" + number(radians) + " rad)";
+}
+
+// "1 hole", "2 holes".
+std::string counted(std::size_t n, const std::string& what) {
+  return report::count(n) + " " + what + (n == 1 ? "" : "s");
+}
+
+// What people call the size of a shape: its height, diameter, side or width across flats.
+std::string size_word(SectionFamily family) {
+  const std::span<const SectionDimension> all = dimensions(family);
+  return all.empty() ? "height" : std::string(all.front().name);
+}
 
 std::string listed(const std::vector<std::string>& words) {
   std::string out;
@@ -29,34 +48,35 @@ std::string sizes_text(const Sizes& sizes) {
     case Sizes::Kind::series:
       return "in sizes of " + sizes.series;
     case Sizes::Kind::list:
-      return "in " + report::count(sizes.values.size()) + " listed sizes";
+      return "in " + counted(sizes.values.size(), "listed size");
   }
   return {};
 }
 
 std::string shape_text(const Shape& shape) {
   std::string out(name(shape.family));
+  const std::string size = size_word(shape.family);
   if (shape.height_to_width) out += ", height/width " + report::exact(*shape.height_to_width);
-  if (shape.wall_to_height) out += ", wall/height " + report::exact(*shape.wall_to_height);
+  if (shape.wall_to_height) out += ", wall/" + size + " " + report::exact(*shape.wall_to_height);
   if (shape.web_to_height) out += ", web/height " + report::exact(*shape.web_to_height);
   if (shape.flange_to_height) out += ", flange/height " + report::exact(*shape.flange_to_height);
   if (shape.root_radius_to_height) {
     out += ", root radius/height " + report::exact(*shape.root_radius_to_height);
   }
-  if (!shape.outline.empty()) out += " of " + report::count(shape.outline.size()) + " corners";
-  if (!shape.holes.empty()) out += " with " + report::count(shape.holes.size()) + " holes";
-  return out + ", height " + number(shape.height_min * 1e3) + " to " + mm(shape.height_max) + ", " +
-         sizes_text(shape.sizes);
+  if (!shape.outline.empty()) out += " of " + counted(shape.outline.size(), "corner");
+  if (!shape.holes.empty()) out += " with " + counted(shape.holes.size(), "hole");
+  return out + ", " + size + " " + number(shape.height_min * 1e3) + " to " + mm(shape.height_max) +
+         ", " + sizes_text(shape.sizes);
 }
 
-std::string_view support_text(Support support) {
+std::string support_text(Support support, const std::optional<double>& second) {
   switch (support) {
     case Support::cantilever:
       return "cantilever, fixed at x = 0";
     case Support::pinned_pinned:
-      return "pinned at both ends";
+      return second ? "pinned at x = 0 and at " + mm(*second) : "pinned at both ends";
     case Support::fixed_pinned:
-      return "fixed at x = 0, pinned at the end";
+      return "fixed at x = 0, pinned at " + (second ? mm(*second) : "the end");
     case Support::fixed_fixed:
       return "fixed at both ends";
   }
@@ -82,18 +102,18 @@ std::string load_text(const Load& load) {
   return {};
 }
 
-std::vector<std::string> load_case_lines(const LoadCase& load_case) {
+std::vector<std::string> load_case_lines(const LoadCase& load_case, double length) {
   std::vector<std::string> lines;
-  std::string support(support_text(load_case.support_z));
+  // A second support at the end is the usual one.
+  std::optional<double> second = load_case.second_support;
+  if (second && !(*second < length)) second.reset();
+  std::string support = support_text(load_case.support_z, second);
   if (load_case.support_y != load_case.support_z) {
-    support += " for loads along z, ";
-    support += support_text(load_case.support_y);
-    support += " for loads along y";
+    support +=
+        " for loads along z, " + support_text(load_case.support_y, second) + " for loads along y";
   }
+  if (second) support += ", overhang beyond";
   lines.push_back(std::move(support));
-  if (load_case.second_support) {
-    lines.push_back("second support at " + mm(*load_case.second_support) + ", overhang beyond");
-  }
   for (const Load& load : load_case.loads) lines.push_back(load_text(load));
   if (load_case.acceleration_z > 0.0) {
     lines.push_back("own mass, " + number(load_case.acceleration_z) + " m/s2 along z");
@@ -115,8 +135,9 @@ std::vector<std::string> load_case_lines(const LoadCase& load_case) {
                     (load_case.restrained ? ", ends restrained" : ""));
   }
   if (load_case.fatigue) {
-    lines.push_back(number(load_case.fatigue->cycles) + " cycles at stress ratio " +
-                    number(load_case.fatigue->stress_ratio));
+    const double cycles = load_case.fatigue->cycles;
+    lines.push_back((cycles == 1.0 ? std::string("1 cycle") : number(cycles) + " cycles") +
+                    " at stress ratio " + number(load_case.fatigue->stress_ratio));
   }
   for (const auto& [limit, factor] : load_case.factors) {
     lines.push_back("factor " + report::exact(factor) + " on " + limit);
@@ -152,6 +173,48 @@ class Facts {
       {{"what", report::Align::left, false}, {"as read", report::Align::left, true}}};
 };
 
+std::string_view surface_text(SurfaceFinish surface) {
+  switch (surface) {
+    case SurfaceFinish::polished:
+      return "polished";
+    case SurfaceFinish::ground:
+      return "ground";
+    case SurfaceFinish::machined:
+      return "machined";
+    case SurfaceFinish::hot_rolled:
+      return "hot rolled";
+    case SurfaceFinish::as_forged:
+      return "as forged";
+  }
+  return {};
+}
+
+std::string_view criterion_text(FatigueCriterion criterion) {
+  switch (criterion) {
+    case FatigueCriterion::goodman:
+      return "Goodman";
+    case FatigueCriterion::gerber:
+      return "Gerber";
+    case FatigueCriterion::soderberg:
+      return "Soderberg";
+  }
+  return {};
+}
+
+// What fatigue reads, defaults included where a load case swings.
+void add_fatigue(Facts& facts, const MemberDetails& details, bool swings) {
+  const MemberDetails plain;
+  if (swings || details.surface != plain.surface) {
+    facts.add("surface", std::string(surface_text(details.surface)));
+  }
+  if (swings || details.reliability != plain.reliability) {
+    facts.add("reliability in fatigue", report::exact(details.reliability));
+  }
+  if (swings || details.criterion != plain.criterion) {
+    facts.add("mean stress in fatigue", std::string(criterion_text(details.criterion)));
+  }
+}
+
 void add_details(Facts& facts, const MemberDetails& details) {
   const MemberDetails plain;
   const auto factor = [&](const std::string& what, double value, double usual) {
@@ -170,10 +233,9 @@ void add_details(Facts& facts, const MemberDetails& details) {
   if (details.crack) {
     const Crack& crack = *details.crack;
     facts.add("crack",
-              crack.kind == Crack::Kind::edge
-                  ? "edge, " + mm(crack.depth) + " deep"
-                  : "surface, " + mm(crack.depth) + " deep, " + mm(2.0 * crack.half_length) +
-                        " long");
+              crack.kind == Crack::Kind::edge ? "edge, " + mm(crack.depth) + " deep"
+                                              : "surface, " + mm(crack.depth) + " deep, " +
+                                                    mm(2.0 * crack.half_length) + " long");
   }
   for (const AttachedMass& mass : details.masses) {
     facts.add("carried mass", number(mass.mass) + " kg at " + mm(mass.at));
@@ -181,11 +243,10 @@ void add_details(Facts& facts, const MemberDetails& details) {
 }
 
 void add_limits(Facts& facts, const Limits& limits, const std::string& currency) {
-  facts.add_length(
-      limits.shear_deflection ? "deflection with shear at most" : "deflection at most",
-      limits.deflection);
-  if (limits.rotation) facts.add("rotation at most", number(*limits.rotation) + " rad");
-  if (limits.twist) facts.add("twist at most", number(*limits.twist) + " rad");
+  facts.add_length(limits.shear_deflection ? "deflection with shear at most" : "deflection at most",
+                   limits.deflection);
+  if (limits.rotation) facts.add("rotation at most", angle(*limits.rotation));
+  if (limits.twist) facts.add("twist at most", angle(*limits.twist));
   if (limits.frequency) facts.add("natural frequency at least", number(*limits.frequency) + " Hz");
   facts.add_length("elongation at most", limits.elongation);
   facts.add_length("height at most", limits.height);
@@ -236,19 +297,24 @@ std::string check_text(const Part& part, const Catalogue& catalogue, const TextO
   out += "\n\n";
 
   Facts facts;
-  facts.add("quantity", number(part.quantity) + " parts");
-  if (part.batch) facts.add("batch", number(*part.batch) + " parts");
+  const auto parts = [](double n) { return report::exact(n) + (n == 1.0 ? " part" : " parts"); };
+  facts.add("quantity", parts(part.quantity));
+  if (part.batch) facts.add("batch", parts(*part.batch));
   facts.add("length", mm(part.body.length));
   for (const Shape& shape : part.body.shapes) facts.add("shape", shape_text(shape));
   facts.add_list("stock lists", part.body.stock);
   for (const LoadCase& load_case : part.body.load_cases) {
     std::string lines;
-    for (const std::string& line : load_case_lines(load_case)) {
+    for (const std::string& line : load_case_lines(load_case, part.body.length)) {
       lines += (lines.empty() ? "" : "\n") + line;
     }
     facts.add("load case " + load_case.name, std::move(lines));
   }
   add_details(facts, part.body.details);
+  const bool swings = std::any_of(part.body.load_cases.begin(),
+                                  part.body.load_cases.end(),
+                                  [](const LoadCase& one) { return one.fatigue.has_value(); });
+  add_fatigue(facts, part.body.details, swings);
   add_limits(facts, part.limits, catalogue.currency);
   facts.add_list("finishes to try", part.finishes);
   for (const OperationUse& use : part.operations) {
@@ -257,10 +323,11 @@ std::string check_text(const Part& part, const Catalogue& catalogue, const TextO
   std::size_t sizes = 0;
   for (const StockList& list : catalogue.stock) sizes += list.items.size();
   facts.add("tables",
-            report::count(catalogue.materials.size()) + " materials, " + report::count(sizes) +
-                " stock sizes in " + report::count(catalogue.stock.size()) + " lists, " +
-                report::count(catalogue.routes.size()) + " routes, " +
-                report::count(catalogue.finishes.size()) + " finishes, prices in " +
+            counted(catalogue.materials.size(), "material") + ", " + counted(sizes, "stock size") +
+                " in " + counted(catalogue.stock.size(), "list") + ", " +
+                counted(catalogue.routes.size(), "route") + ", " +
+                report::count(catalogue.finishes.size()) +
+                (catalogue.finishes.size() == 1 ? " finish" : " finishes") + ", prices in " +
                 catalogue.currency);
   out += facts.text(options);
   out += "\nLoads are service values; the factors of each limit act when it is checked.\n\n";

@@ -3,6 +3,7 @@
 #include <array>
 #include <cmath>
 #include <limits>
+#include <set>
 
 #include <bismar/report/labels.hpp>
 #include <bismar/report/table.hpp>
@@ -302,19 +303,26 @@ double draw_ruler(Svg& svg,
 
   const std::vector<SubStretch> subs = sub_stretches(ruler, axis);
   std::size_t unnamed = 0;
+  std::set<std::string> seconds;
   if (!subs.empty()) {
     y = draw_regret(svg, result, ruler, axis, subs, y + 22.0);
-    y = draw_runners_up(svg, result, subs, letters, y + 5.0, unnamed) + 5.0;
+    y = draw_runners_up(svg, result, subs, letters, y + 5.0, unnamed, seconds) + 5.0;
   }
   y = draw_scale(svg, axis, result.currency, y + 2.0) + 4.0;
 
-  // Names that occur only as runner-up.
+  // Letters of the second row that no name over the beam explains; a letter that stands nowhere is
+  // left out.
   for (const std::string& name : letters.names()) {
+    const bool named = std::any_of(cuts.begin(), cuts.end(), [&](const Cut& c) {
+      return ruler.stretches[c.stretch].choice == name;
+    });
+    if (named || seconds.count(name) == 0) continue;
     const bool chosen = std::any_of(ruler.stretches.begin(),
                                     ruler.stretches.end(),
                                     [&](const NamedStretch& s) { return s.choice == name; });
-    if (!chosen)
-      key.push_back({letters.letter(name), choice_name(result, name) + " (runner-up only)"});
+    key.push_back({letters.letter(name),
+                   choice_name(result, name) +
+                       (chosen ? " (chosen outside the scale shown)" : " (runner-up only)")});
   }
   std::string remarks;
   if (cuts.size() < ruler.stretches.size()) {

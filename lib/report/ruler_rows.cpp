@@ -141,12 +141,14 @@ double draw_runners_up(Svg& svg,
                        const std::vector<SubStretch>& subs,
                        const ChoiceLetters& letters,
                        double top,
-                       std::size_t& unnamed) {
+                       std::size_t& unnamed,
+                       std::set<std::string>& drawn) {
   constexpr double height = 17.0;
   struct Pulled {
     double centre;
     double width;
     std::string letter;
+    std::string choice;
   };
   std::vector<Pulled> pulled;
   for (const SubStretch& sub : subs) {
@@ -162,8 +164,9 @@ double draw_runners_up(Svg& svg,
       svg.text({sub.cut.middle(), top + 12.5},
                letter,
                {.size = 10.5, .colour = theme::accent, .anchor = TextStyle::Anchor::middle});
+      drawn.insert(sub.runner_up->choice);
     } else {
-      pulled.push_back({sub.cut.middle(), width, letter});
+      pulled.push_back({sub.cut.middle(), width, letter, sub.runner_up->choice});
     }
   }
   svg.text({left - 7.0, top + 12.5},
@@ -194,6 +197,7 @@ double draw_runners_up(Svg& svg,
     svg.text({(*places)[i], top + height + 20.0},
              pulled[i].letter,
              {.size = 10.5, .colour = theme::accent, .anchor = TextStyle::Anchor::middle});
+    drawn.insert(pulled[i].choice);
   }
   return top + height + 24.0;
 }

@@ -4,6 +4,7 @@
 
 #include <cstddef>
 #include <optional>
+#include <set>
 #include <string>
 #include <vector>
 
@@ -52,11 +53,13 @@ double draw_regret(Svg& svg,
 /// Who the runner-up is: letters in a strip, pulled out below where it is too narrow. Returns the y
 /// below.
 /// @param unnamed  Set to the number of sub-stretches without a letter.
+/// @param drawn  Gets the choices whose letters stand there.
 double draw_runners_up(Svg& svg,
                        const Result& result,
                        const std::vector<SubStretch>& subs,
                        const ChoiceLetters& letters,
                        double top,
-                       std::size_t& unnamed);
+                       std::size_t& unnamed,
+                       std::set<std::string>& drawn);
 
 }  // namespace bismar::report

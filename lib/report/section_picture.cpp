@@ -23,6 +23,8 @@ using report::Svg;
 using report::TextStyle;
 namespace theme = report::theme;
 
+using Rings = std::vector<std::vector<SectionPoint>>;
+
 constexpr double page = 440.0;
 constexpr double drawn = 210.0;  // the larger outside dimension
 const Pen outline{.colour = theme::ink, .width = 1.6, .round = true};
@@ -232,9 +234,72 @@ void draw_axes(Svg& svg, const Box& box, Point centroid, const SectionPictureOpt
   if (options.load_along_y) load_arrow(svg, {box.x - 2.0, centroid.y}, {1.0, 0.0}, options.load_y);
 }
 
-}  // namespace
+void check_corners(FaultList& faults,
+                   std::span<const SectionPoint> corners,
+                   const std::string& where) {
+  if (corners.size() < 3) {
+    faults.add(Code::missing, where, "a polygon has at least 3 corners.");
+  }
+  for (const SectionPoint& corner : corners) {
+    if (std::isfinite(corner.y) && std::isfinite(corner.z)) continue;
+    faults.add(Code::not_finite, where, "the corners of a polygon must be finite numbers.");
+    return;
+  }
+}
 
-std::string section_svg(const SectionProperties& s, const SectionPictureOptions& options) {
+// The rings of a polygon, outline first, in metres from the lower left corner of its envelope.
+Rings scaled_rings(const SectionProperties& s,
+                   std::span<const SectionPoint> outer,
+                   std::span<const std::vector<SectionPoint>> holes) {
+  FaultList faults;
+  check_corners(faults, outer, "outline");
+  for (std::size_t i = 0; i < holes.size(); ++i) {
+    check_corners(faults, holes[i], "holes/" + std::to_string(i));
+  }
+  faults.throw_if_any();
+  const auto across = [](const SectionPoint& a, const SectionPoint& b) { return a.y < b.y; };
+  const auto up = [](const SectionPoint& a, const SectionPoint& b) { return a.z < b.z; };
+  const auto [left, right] = std::minmax_element(outer.begin(), outer.end(), across);
+  const auto [low, high] = std::minmax_element(outer.begin(), outer.end(), up);
+  const SectionPoint corner{left->y, low->z};
+  const double scale = s.height / (high->z - low->z);
+  const double width = scale * (right->y - left->y);
+  // Looser than any rounding on the way from the outline to its properties.
+  constexpr double same = 1e-6;
+  if (!std::isfinite(scale) || std::abs(width - s.width) > same * s.width) {
+    faults.add(Code::conflict,
+               "outline",
+               "the outline is not that of the section: at the section's height it has another "
+               "width.");
+    faults.throw_if_any();
+  }
+  const auto scaled = [&](std::span<const SectionPoint> ring) {
+    std::vector<SectionPoint> out;
+    for (const SectionPoint& p : ring) {
+      out.push_back({scale * (p.y - corner.y), scale * (p.z - corner.z)});
+    }
+    return out;
+  };
+  Rings rings = {scaled(outer)};
+  for (const std::vector<SectionPoint>& hole : holes) rings.push_back(scaled(hole));
+  return rings;
+}
+
+void draw_rings(Svg& svg, const Rings& rings, const Box& box, double scale) {
+  std::string path;
+  for (const std::vector<SectionPoint>& ring : rings) {
+    char command = 'M';
+    for (const SectionPoint& p : ring) {
+      path +=
+          command + coordinate(box.x + p.y * scale) + " " + coordinate(box.bottom() - p.z * scale);
+      command = 'L';
+    }
+    path += "Z";
+  }
+  svg.path(path, theme::tint, outline, true);
+}
+
+void require_size(const SectionProperties& s) {
   FaultList faults;
   const auto require = [&](double value, const char* name) {
     if (std::isfinite(value) && value > 0.0) return;
@@ -246,7 +311,12 @@ std::string section_svg(const SectionProperties& s, const SectionPictureOptions&
   require(s.width, "width");
   if (is_hollow(s) || is_profile(s)) require(s.wall, "wall");
   faults.throw_if_any();
+}
 
+// @param rings  Of a polygon that is drawn whole; empty: what the properties tell.
+std::string draw_section(const SectionProperties& s,
+                         const Rings& rings,
+                         const SectionPictureOptions& options) {
   const double scale = drawn / std::max(s.height, s.width);
   Svg svg;
   double top = 18.0;
@@ -273,7 +343,11 @@ std::string section_svg(const SectionProperties& s, const SectionPictureOptions&
   draw_dimension(svg, {left, box.y}, {left, box.bottom()}, mm(s.height), true);
   draw_dimension(svg, {box.x, below}, {box.right(), below}, mm(s.width), false);
 
-  draw_outline(svg, s, box, scale);
+  if (rings.empty()) {
+    draw_outline(svg, s, box, scale);
+  } else {
+    draw_rings(svg, rings, box, scale);
+  }
   const SectionPoint offset = centroid_of(s);
   const Point centroid{box.x + offset.y * scale, box.bottom() - offset.z * scale};
   draw_axes(svg, box, centroid, options);
@@ -310,7 +384,7 @@ std::string section_svg(const SectionProperties& s, const SectionPictureOptions&
     facts += s.family == SectionFamily::angle
                  ? "; radii left out"
                  : "; flange drawn so that the area is right, root radii left out";
-  } else if (s.family == SectionFamily::polygon) {
+  } else if (s.family == SectionFamily::polygon && rings.empty()) {
     facts += "; convex outline, recesses and holes left out";
   }
   note(facts, 10.5);
@@ -321,6 +395,21 @@ std::string section_svg(const SectionProperties& s, const SectionPictureOptions&
                       options.title.empty() ? "Section" : options.title,
                       "Cross-section to scale, " + mm(s.height) + " high along z and " +
                           mm(s.width) + " wide along y.");
+}
+
+}  // namespace
+
+std::string section_svg(const SectionProperties& section, const SectionPictureOptions& options) {
+  require_size(section);
+  return draw_section(section, {}, options);
+}
+
+std::string section_svg(const SectionProperties& section,
+                        std::span<const SectionPoint> outer,
+                        std::span<const std::vector<SectionPoint>> holes,
+                        const SectionPictureOptions& options) {
+  require_size(section);
+  return draw_section(section, scaled_rings(section, outer, holes), options);
 }
 
 }  // namespace bismar

@@ -364,8 +364,10 @@ std::string front_text(const Result& result,
     if (!factors.empty()) out += paragraph(factors, options.width, 2);
     // Said every time: a limit that nobody checked looks like one that is met.
     out += paragraph(
-        "Not checked: joints, wear, resonance beyond the first frequency, and whatever the job does "
-        "not name (own weight, fatigue, cracks, heat and vibration are checked where it names them).",
+        "Not checked: joints, wear, resonance beyond the first frequency, and whatever the job "
+        "does "
+        "not name (own weight, fatigue, cracks, heat and vibration are checked where it names "
+        "them).",
         options.width,
         2);
   }

@@ -383,6 +383,24 @@ void CandidateCompiler::add_limit_states() {
   }
 }
 
+bool CandidateCompiler::thin_polygon() const {
+  const auto shape = out_->candidate.shape;
+  if (shape == Candidate::none ||
+      problem_.part().body.shapes[shape].family != SectionFamily::polygon) {
+    return false;
+  }
+  // The limit states of walls and of twisting know no polygons. Up to this ratio no wall buckles in
+  // any usual metal: an outstand of EN 1993-1-1 Table 5.2 is class 3 up to 14 epsilon.
+  constexpr double stocky = 10.0;
+  const auto unit = problem_.section_of(shape, route_, 1.0);
+  const bool thin = std::max(unit.height, unit.width) > stocky * unit.wall;
+  const auto effects = problem_.effects();
+  return thin && std::any_of(effects.begin(), effects.end(), [](const LoadEffects& one) {
+           return one.bends || one.compression > 0.0 || one.twists || one.acceleration_z != 0.0 ||
+                  one.acceleration_y != 0.0;
+         });
+}
+
 std::vector<std::string> CandidateCompiler::open_limits(const StepState& step) const {
   const auto& limits = problem_.part().limits;
   std::vector<std::string> out;
@@ -400,6 +418,12 @@ std::vector<std::string> CandidateCompiler::open_limits(const StepState& step) c
   }
   const MemberDetails& details = problem_.part().body.details;
   const auto& cases = problem_.part().body.load_cases;
+  if (details.crack && !material_.isotropic) {
+    out.emplace_back("fracture toughness along and across the grain");
+  }
+  if (thin_polygon()) {
+    out.emplace_back("local and torsional buckling of a thin polygon");
+  }
   const bool weld_tires = (details.welded || details.detail_category) &&
                           std::any_of(cases.begin(), cases.end(), [](const LoadCase& one) {
                             return one.fatigue.has_value();

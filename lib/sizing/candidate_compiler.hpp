@@ -36,6 +36,8 @@ class CandidateCompiler {
   /// The dimension that the strength steps of the material are read at.
   [[nodiscard]] double strength_thickness(const SectionProperties& section) const;
   [[nodiscard]] double blank_thickness(const Blank& blank) const;
+  /// A free polygon with walls so thin that buckling of its parts is not covered.
+  [[nodiscard]] bool thin_polygon() const;
   [[nodiscard]] std::vector<std::string> open_limits(const StepState& step) const;
   void collect_constraints();
   void add_limit_states();

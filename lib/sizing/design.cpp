@@ -80,8 +80,10 @@ bool may_buckle_unchecked(const SizingProblem& problem,
                           const CompiledCandidate& compiled,
                           const Piece& piece,
                           const SectionProperties& section) {
-  const bool slender = section.I_y > 4.0 * section.I_z || section.I_z > 4.0 * section.I_y;
-  if (!slender || section.inner_perimeter > 0.0 || problem.member_limits().lateral_restraint) {
+  // Principal axes: an angle has its own, and a thin outline turns aside sooner than a solid one.
+  const double ratio = section.family == SectionFamily::angle ? 1.0 : 4.0;
+  if (!(section.I_u() > ratio * section.I_v()) || section.inner_perimeter > 0.0 ||
+      problem.member_limits().lateral_restraint) {
     return false;
   }
   for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {

@@ -66,9 +66,19 @@ bool is_cold_worked(std::string_view condition) {
          });
 }
 
-/// Heat-treated aluminium loses about half of its strength beside a weld.
+/// A seam takes the strength of heat treatment, ageing and cold work; of aluminium O, H111 and H112
+/// have nothing to lose.
 bool is_softened_by_welding(const MaterialInfo& material) {
-  return material.material_class == "aluminium" && has_temper(material.condition, "T");
+  const std::string_view condition = material.condition;
+  if (material.material_class == "aluminium") {
+    return has_temper(condition, "T") ||
+           (has_temper(condition, "H") && !found_in(condition, "H111") &&
+            !found_in(condition, "H112"));
+  }
+  if (is_steel(material)) {
+    return !steel_keeps_strength_welded(condition);
+  }
+  return is_cold_worked(condition) || found_in(condition, "aged");
 }
 
 }  // namespace

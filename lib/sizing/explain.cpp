@@ -76,6 +76,36 @@ std::vector<Symbol> helpful_symbols(const SizingProblem& problem,
   return {out.begin(), out.end()};
 }
 
+/// How one limit state comes about, in the load cases in which it does so alike.
+struct Account {
+  const LimitState* state;
+  Explanation explanation;
+  std::vector<std::size_t> load_cases;
+  bool governs;
+};
+
+/// The line with the load cases that it is of: "Yield, in daily use: ...". A part with one load
+/// case needs none.
+std::string with_load_cases(const Account& account, const std::vector<LoadCase>& load_cases) {
+  const std::string& line = account.explanation.line;
+  if (load_cases.size() < 2) {
+    return line;
+  }
+  std::string where;
+  if (account.load_cases.size() == load_cases.size()) {
+    where = "in every load case";
+  } else {
+    for (const auto one : account.load_cases) {
+      where += (where.empty() ? "in load case \"" : "\", \"") + load_cases[one].name;
+    }
+    where += "\"";
+  }
+  // Lines begin with the name of their limit state and a colon.
+  const auto colon = line.find(": ");
+  return colon == std::string::npos ? line + " (" + where + ")"
+                                    : line.substr(0, colon) + ", " + where + line.substr(colon);
+}
+
 /// The least factor on a value of the material that makes the candidate feasible, up to ten.
 std::optional<double> factor_needed(SizingProblem& problem, const Outcome& outcome, Symbol symbol) {
   const auto material = outcome.candidate.material;
@@ -142,7 +172,7 @@ std::vector<std::string> limit_lines(const SizingProblem& problem,
   const auto& compiled = problem.compiled(group);
   const auto detail = problem.detail(group, design.size);
   const auto& governing = design.utilisations[design.governing];
-  std::vector<std::string> out;
+  std::vector<Account> accounts;
   for (std::size_t i = 0; i < compiled.constraints.size(); ++i) {
     const auto& constraint = compiled.constraints[i];
     if (!detail.piece->applies[i]) {
@@ -156,17 +186,31 @@ std::vector<std::string> limit_lines(const SizingProblem& problem,
                            problem.member_limits(),
                            problem.part().body.length,
                            constraint.factor};
-    const auto explanation = constraint.state->explain(input);
-    out.push_back(explanation.line);
+    auto explanation = constraint.state->explain(input);
     const bool governs =
         constraint.label == governing.limit &&
         (governing.load_case.empty() ||
          governing.load_case == problem.part().body.load_cases[constraint.load_case].name);
-    if (governs) {
-      for (const auto& one : explanation.steps) {
+    const auto same = std::find_if(accounts.begin(), accounts.end(), [&](const Account& one) {
+      return one.state == constraint.state && one.explanation.line == explanation.line &&
+             one.explanation.steps == explanation.steps;
+    });
+    if (same != accounts.end()) {
+      same->load_cases.push_back(constraint.load_case);
+      same->governs = same->governs || governs;
+    } else {
+      accounts.push_back(
+          {constraint.state, std::move(explanation), {constraint.load_case}, governs});
+    }
+  }
+  std::vector<std::string> out;
+  for (const auto& account : accounts) {
+    out.push_back(with_load_cases(account, problem.part().body.load_cases));
+    if (account.governs) {
+      for (const auto& one : account.explanation.steps) {
         out.push_back("  " + one);
       }
-      out.push_back("  Source: " + std::string(constraint.state->source()));
+      out.push_back("  Source: " + std::string(account.state->source()));
     }
   }
   return out;

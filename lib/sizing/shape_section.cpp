@@ -3,12 +3,17 @@
 
 #include "sizing/words.hpp"
 
+#include <bismar/error.hpp>
 #include <bismar/mechanics/polygon.hpp>
 #include <bismar/mechanics/scaled_section.hpp>
 #include <bismar/mechanics/section_builder.hpp>
 
 #include <algorithm>
+#include <cmath>
+#include <limits>
+#include <string>
 #include <string_view>
+#include <utility>
 
 namespace bismar {
 
@@ -37,7 +42,6 @@ Forming forming_of(const Route& route) {
   return contains_word(route.leaves, "tube") ? Forming::extruded : Forming::unknown;
 }
 
-/// The corners of a polygon, enlarged so that it is `height` high.
 std::vector<SectionPoint> enlarged(const std::vector<SectionPoint>& points, double factor) {
   std::vector<SectionPoint> out;
   out.reserve(points.size());
@@ -47,26 +51,85 @@ std::vector<SectionPoint> enlarged(const std::vector<SectionPoint>& points, doub
   return out;
 }
 
-/// A polygon at height 1 m.
-SectionProperties unit_polygon(const Shape& shape) {
-  const auto [low, high] = std::minmax_element(
-      shape.outline.begin(), shape.outline.end(), [](const auto& a, const auto& b) {
-        return a.z < b.z;
-      });
-  const double factor = 1.0 / (high->z - low->z);
+/// A polygon's points at height 1 m.
+struct UnitOutline {
+  std::vector<SectionPoint> outer;
   std::vector<std::vector<SectionPoint>> holes;
-  for (const auto& hole : shape.holes) {
-    holes.push_back(enlarged(hole, factor));
+};
+
+/// Points that have no height cannot be enlarged to one: they are left as they are where they have
+/// faults of their own to tell.
+UnitOutline unit_outline(const Shape& shape) {
+  double low = std::numeric_limits<double>::infinity();
+  double high = -low;
+  for (const SectionPoint& point : shape.outline) {
+    if (std::isfinite(point.z)) {
+      low = std::min(low, point.z);
+      high = std::max(high, point.z);
+    }
   }
-  return polygon(enlarged(shape.outline, factor), holes);
+  const double height = high - low;  // -infinity where no z is a number
+  const bool finite = std::isfinite(height) && std::isfinite(1.0 / height);
+  if (height >= 0.0 && !finite && shape.outline.size() >= 3) {
+    Fault fault;
+    fault.code = Code::out_of_range;
+    fault.where = "/outer";
+    fault.found = plain(height) + " high";
+    fault.allowed = "corners at different z";
+    fault.message =
+        "The outline is " + plain(height) +
+        " high and cannot be enlarged to a size. A corner is [y, z], z along the height.";
+    throw Error(std::move(fault));
+  }
+  const double factor = finite ? 1.0 / height : 1.0;
+  UnitOutline unit;
+  unit.outer = enlarged(shape.outline, factor);
+  for (const auto& hole : shape.holes) {
+    unit.holes.push_back(enlarged(hole, factor));
+  }
+  return unit;
+}
+
+/// Runs `f`; its faults get the places of a part.
+template <class Function>
+auto with_places(const std::string& where, Function f) {
+  try {
+    return f();
+  } catch (const Error& error) {
+    constexpr std::string_view outer = "/outer";
+    FaultList faults;
+    for (Fault fault : error.faults()) {
+      if (fault.where.starts_with(outer)) {
+        fault.where.replace(0, outer.size(), "/outline");
+      }
+      fault.where.insert(0, where);
+      faults.add(std::move(fault));
+    }
+    faults.throw_if_any();
+    throw;
+  }
 }
 
 }  // namespace
 
+void check_outline(const Shape& shape) {
+  if (shape.family == SectionFamily::polygon) {
+    with_places({}, [&] {
+      const UnitOutline unit = unit_outline(shape);
+      check_polygon(unit.outer, unit.holes);
+    });
+  }
+}
+
 ShapeSections::ShapeSections(std::span<const Shape> shapes) : shapes_(shapes) {
-  for (const Shape& shape : shapes) {
-    polygons_.push_back(shape.family == SectionFamily::polygon ? unit_polygon(shape)
-                                                               : SectionProperties{});
+  for (std::size_t i = 0; i < shapes.size(); ++i) {
+    polygons_.emplace_back();
+    if (shapes[i].family == SectionFamily::polygon) {
+      polygons_.back() = with_places("/member/shapes/" + std::to_string(i), [&] {
+        const UnitOutline unit = unit_outline(shapes[i]);
+        return polygon(unit.outer, unit.holes);
+      });
+    }
   }
 }
 

@@ -194,8 +194,8 @@ class Resolver {
   }
 
   /// Factors of the row itself; else, of aluminium, those of its alloy and temper in the table of
-  /// weld zones; steels that are not hardened keep their strength beside a weld with matching
-  /// filler (EN 1993-1-8:2005 4.7.1).
+  /// weld zones; rolled, normalised and annealed steels keep their strength beside a weld with
+  /// matching filler (EN 1993-1-8:2005 4.7.1, S235 to S460).
   void weld_zone() {
     auto& m = out_.member;
     if (m.weld_yield_factor && m.weld_tensile_factor) {
@@ -204,7 +204,8 @@ class Resolver {
     if (const WeldZone* zone = find_weld_zone(reader_.catalogue().weld_zones, info_, thickness_)) {
       m.weld_yield_factor = zone->yield_factor;
       m.weld_tensile_factor = zone->tensile_factor;
-    } else if (is_steel(info_) && !is_hardened(info_.condition) && is_weldable(info_)) {
+    } else if (is_steel(info_) && steel_keeps_strength_welded(info_.condition) &&
+               is_weldable(info_) && m.sigma_y && *m.sigma_y <= 460e6) {
       m.weld_yield_factor = m.weld_tensile_factor = 1.0;
     }
   }
@@ -271,7 +272,13 @@ class Resolver {
       const auto k_def =
           need(service_.timber_class == ServiceClass::one ? Property::k_def_1 : Property::k_def_2);
       if (k_def) {
-        *m.E *= at_time(load_case_.duration, std::nullopt, 1.0 / (1.0 + *k_def));
+        // EN 1995-1-1 2.3.2.2: E and G alike.
+        const double factor = at_time(load_case_.duration, std::nullopt, 1.0 / (1.0 + *k_def));
+        for (auto* modulus : {&m.E, &m.E_axial, &m.G}) {
+          if (*modulus) {
+            **modulus *= factor;
+          }
+        }
       }
     }
     const auto reference = read(Property::reference_depth);
@@ -353,6 +360,20 @@ bool is_metal(std::string_view material_class) {
   static constexpr std::array<std::string_view, 5> others = {
       "polymer", "composite", "wood", "ceramic", "glass"};
   return std::find(others.begin(), others.end(), material_class) == others.end();
+}
+
+bool steel_keeps_strength_welded(std::string_view condition) {
+  static constexpr std::array<std::string_view, 6> delivered = {"as rolled",
+                                                                "normalised",
+                                                                "hot finished hollow section",
+                                                                "cold-formed hollow section",
+                                                                "thermomechanically rolled",
+                                                                "annealed"};
+  return condition == "hot rolled" ||
+         (!has(condition, "and aged") &&
+          std::any_of(delivered.begin(), delivered.end(), [&](std::string_view words) {
+            return has(condition, words);
+          }));
 }
 
 bool is_bath(const Finish& finish) { return contains_word(finish.process_words, "galvanising"); }

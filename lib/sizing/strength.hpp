@@ -16,6 +16,9 @@
 namespace bismar {
 
 [[nodiscard]] bool is_metal(std::string_view material_class);
+/// Whether a steel in this condition owes nothing to hardening, ageing or cold work that a weld
+/// would undo: as rolled, normalised, thermomechanically rolled, annealed, hollow sections.
+[[nodiscard]] bool steel_keeps_strength_welded(std::string_view condition);
 /// Steel, stainless steel.
 [[nodiscard]] bool is_steel(const MaterialInfo& material);
 [[nodiscard]] bool is_cast(const MaterialInfo& material);

@@ -3,6 +3,7 @@
 
 #include <bismar/mechanics/load_effects.hpp>
 
+#include <algorithm>
 #include <cmath>
 #include <set>
 #include <string_view>
@@ -58,7 +59,7 @@ class LoadCheck {
                       "zero or more",
                       "The duration of a load cannot be negative.");
       }
-      if (one.loads.empty() && one.direct &&
+      if (one.direct && displaces(*one.direct) &&
           (part_.limits.deflection || part_.limits.rotation || part_.limits.twist)) {
         faults_.fault(
             Code::conflict,
@@ -69,14 +70,16 @@ class LoadCheck {
             "load case "
             "\"" +
                 one.name +
-                "\" gives internal forces only. Give loads with stations, or leave those limits "
+                "\" gives internal forces directly. Give loads with stations, or leave those "
+                "limits "
                 "out.");
       }
+      combinations(one, where);
       if (std::isfinite(part_.body.length) && part_.body.length > 0.0) {
         try {
           static_cast<void>(reduce(one, part_.body.length));
         } catch (const Error& error) {
-          faults_.append(error, where + "/");
+          faults_.append(error, where);
         }
       }
     }
@@ -100,6 +103,32 @@ class LoadCheck {
                     "The reliability of a fatigue strength lies between 0.5 and 0.999999; it is " +
                         plain(d.reliability) + ".");
     }
+    const auto& cases = part_.body.load_cases;
+    const bool tires = std::any_of(
+        cases.begin(), cases.end(), [](const LoadCase& one) { return one.fatigue.has_value(); });
+    if (d.detail_category && !tires) {
+      conflict(where + "/detail_category",
+               "A detail category is for fatigue, and no load case has \"fatigue\".");
+    }
+    if (d.detail_category && (*d.detail_category < 36e6 || *d.detail_category > 160e6)) {
+      faults_.fault(Code::out_of_range,
+                    where + "/detail_category",
+                    plain(*d.detail_category * 1e-6) + " MPa",
+                    "from 36 to 160 MPa",
+                    "The detail categories of EN 1993-1-9 run from 36 to 160 MPa.");
+    }
+    if (!d.masses.empty() && !part_.limits.frequency) {
+      conflict(where + "/masses",
+               "Carried masses are for the natural frequency, on which there is no limit.");
+    }
+    if (d.notch_radius && d.k_t_axial == 1.0 && d.k_t_bending == 1.0 && d.k_t_torsion == 1.0) {
+      conflict(where + "/notch_radius",
+               "A notch radius needs a stress concentration factor k_t above 1 beside it.");
+    }
+    if (part_.limits.shear_deflection && !part_.limits.deflection && !part_.limits.frequency) {
+      conflict("/limits/shear_deflection",
+               "Shear is for the deflection and the frequency, on which there is no limit.");
+    }
     if (d.crack) {
       crack(*d.crack, where + "/crack");
     }
@@ -109,6 +138,47 @@ class LoadCheck {
   }
 
  private:
+  /// Shear, moment or torque given directly: what it bends and twists is not known.
+  static bool displaces(const InternalForces& f) {
+    return f.V_y != 0.0 || f.V_z != 0.0 || f.M_y != 0.0 || f.M_z != 0.0 || f.T != 0.0;
+  }
+
+  void conflict(const std::string& where, const std::string& message) {
+    faults_.fault(Code::conflict, where, "", "", message);
+  }
+
+  /// What one load case cannot have together, and keys that nothing would read.
+  void combinations(const LoadCase& one, const std::string& where) {
+    const MemberDetails& d = part_.body.details;
+    const bool accelerated = one.acceleration_z != 0.0 || one.acceleration_y != 0.0;
+    if (one.direct && accelerated) {
+      conflict(where + "/direct",
+               "Internal forces given directly and own mass are not added up. Put the moments of "
+               "the own mass into the direct forces, or give loads with stations.");
+    }
+    const bool off_centre = one.eccentricity && *one.eccentricity > 0.0;
+    if (off_centre &&
+        (part_.limits.deflection || part_.limits.rotation || one.fatigue || d.crack)) {
+      conflict(where + "/eccentricity",
+               "An eccentricity is held against strength and stability only, not against "
+               "deflection, rotation, fatigue or a crack. Give its moments N e as loads at both "
+               "ends instead.");
+    }
+    if (one.restrained && one.temperature_change == 0.0) {
+      conflict(where + "/restrained",
+               "Restrained ends matter where the temperature changes; give a temperature_change.");
+    }
+    if (one.restrained && one.support_z == Support::cantilever) {
+      conflict(where + "/restrained",
+               "A cantilever has a free end, which nothing keeps from moving when it warms.");
+    }
+    if (one.restrained && one.temperature_change != 0.0 && (one.fatigue || d.crack)) {
+      conflict(where + "/restrained",
+               "The force of a restrained temperature change is not held against fatigue or a "
+               "crack. Give it as an axial load instead.");
+    }
+  }
+
   /// Above zero and at most one.
   void share(double value, const std::string& where, const std::string& what) {
     if (!(value > 0.0 && value <= 1.0)) {

@@ -134,7 +134,11 @@ class ShapeCheck {
   /// crosses itself.
   void proportions(const Shape& shape, const std::string& where) {
     try {
-      static_cast<void>(ShapeSections({&shape, 1}).at(0, Route{}, 1.0));
+      if (shape.family == SectionFamily::polygon) {
+        check_outline(shape);
+      } else {
+        static_cast<void>(ShapeSections({&shape, 1}).at(0, Route{}, 1.0));
+      }
     } catch (const Error& error) {
       for (Fault fault : error.faults()) {
         if (fault.where == "wall" && is_tube(shape.family)) {
@@ -142,13 +146,31 @@ class ShapeCheck {
           fault.where = "/wall_to_height";
         } else if (!fault.where.starts_with("/")) {
           // The section was made 1 m high: its dimensions are the ratios.
-          fault.message = "At a height of 1 the " + fault.where + " does not fit. " + fault.message;
-          fault.where.clear();
+          const std::string key = ratio_key(fault.where);
+          fault.message = (key.empty() ? "The " + fault.where : key) +
+                          " does not fit the other ratios (at a height of 1 m: " + fault.message +
+                          ")";
+          fault.message += fault.message.ends_with(".)") ? "" : ".";
+          fault.where = key.empty() ? "" : "/" + key;
         }
         fault.where.insert(0, where);
         faults_.add(std::move(fault));
       }
     }
+  }
+
+  /// The key of a dimension as a section's function names it, "root_radius"; empty for none.
+  static std::string ratio_key(std::string dimension) {
+    std::replace(dimension.begin(), dimension.end(), '_', ' ');
+    if (dimension == "thickness") {
+      dimension = "wall";  // of an angle
+    }
+    for (const auto& [key, name] : ratio_keys) {
+      if (name == dimension) {
+        return std::string(key);
+      }
+    }
+    return {};
   }
 
   void sizes(const Shape& shape, const std::string& where) {

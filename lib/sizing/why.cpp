@@ -9,12 +9,54 @@
 
 #include <algorithm>
 #include <cmath>
+#include <span>
 
 namespace bismar {
 
 namespace {
 
 constexpr std::size_t shown_candidates = 6;
+
+std::string lower(std::string_view text) {
+  std::string out(text);
+  for (char& c : out) {
+    if (c >= 'A' && c <= 'Z') {
+      c = static_cast<char>(c - 'A' + 'a');
+    }
+  }
+  return out;
+}
+
+/// The ids that contain what was typed, or whose material's name does; else the nearest id.
+std::string suggestion(const std::string& typed,
+                       const Catalogue& catalogue,
+                       std::span<const std::string_view> ids) {
+  constexpr std::size_t most = 5;
+  const std::string wanted = lower(typed);
+  std::vector<std::string> found;
+  for (std::size_t m = 0; m < catalogue.materials.size() && !wanted.empty(); ++m) {
+    const auto& info = catalogue.materials.info(m);
+    if (lower(info.id).find(wanted) != std::string::npos ||
+        lower(info.name).find(wanted) != std::string::npos) {
+      found.push_back(info.id);
+    }
+  }
+  if (found.empty()) {
+    return did_you_mean(typed, ids);
+  }
+  std::string text = " Did you mean ";
+  const std::size_t shown = std::min(found.size(), most);
+  for (std::size_t i = 0; i < shown; ++i) {
+    text += (i == 0                                    ? "\""
+             : i + 1 == shown && shown == found.size() ? " or \""
+                                                       : ", \"") +
+            found[i] + "\"";
+  }
+  if (shown < found.size()) {
+    text += " or one of " + std::to_string(found.size() - shown) + " more";
+  }
+  return text + "?";
+}
 
 std::uint32_t find_material(const std::string& id, const Catalogue& catalogue) {
   if (const auto found = catalogue.materials.find(id)) {
@@ -43,7 +85,8 @@ std::uint32_t find_material(const std::string& id, const Catalogue& catalogue) {
     }
     message += ".";
   } else {
-    message += did_you_mean(id, ids);
+    message += suggestion(id, catalogue, ids) +
+               " A material is named by its id, or by its name where no other has the same.";
   }
   throw Error({Code::unknown_name, "material", id, "an id of the material table", message});
 }

@@ -140,6 +140,58 @@ TEST_CASE("why answers for a material") {
   CHECK_THAT(unknown.err, Contains("\"s235jr-as-rolled\""));
 }
 
+TEST_CASE("why offers the ids that contain what was typed, and says how a material is named") {
+  const Folder folder;
+  folder.write("job.json", quick_job);
+  const Ran part_of_id = run({"why", "job.json", "s235jr"}, folder.path());
+  CHECK(part_of_id.code == 2);
+  CHECK_THAT(part_of_id.err, Contains("There is no material \"s235jr\" in the catalogue."));
+  CHECK_THAT(part_of_id.err, Contains("Did you mean \"s235jr-as-rolled\""));
+  CHECK_THAT(part_of_id.err, Contains("A material is named by its id"));
+  // Names count as well, in any letter case; many are counted.
+  CHECK_THAT(run({"why", "job.json", "titanium grade 1"}, folder.path()).err,
+             Contains("\"titanium-grade-1-annealed\""));
+  CHECK_THAT(run({"why", "job.json", "S3"}, folder.path()).err, Contains(" more?"));
+}
+
+TEST_CASE("why names the load case of each check, and equal ones once") {
+  const Folder folder;
+  std::string text = quick_job;
+  const std::string list = "\"load_cases\": [";
+  const std::size_t at = text.find(list);
+  REQUIRE(at != std::string::npos);
+  folder.write("job.json", text);
+  // One load case needs no name.
+  CHECK_THAT(run({"why", "job.json", "s235jr-as-rolled"}, folder.path()).out,
+             Contains("- Yield: "));
+  const std::string other =
+      R"({ "name": "pushed", "support": "cantilever", "loads": [{ "force": "1 N", "at": "end" }] },)";
+  text.insert(at + list.size(), other);
+  folder.write("two.json", text);
+  const Ran two = run({"why", "two.json", "s235jr-as-rolled"}, folder.path());
+  INFO(two.out << two.err);
+  CHECK(two.code == 0);
+  CHECK_THAT(two.out, Contains("- Yield, in load case \"pushed\": "));
+  CHECK(two.out.find("- Yield: ") == std::string::npos);
+  // The same load twice.
+  text = quick_job;
+  const std::size_t open = text.find('{', at);
+  std::size_t close = open;
+  int depth = 0;
+  do {
+    depth += text[close] == '{' ? 1 : text[close] == '}' ? -1 : 0;
+    ++close;
+  } while (depth > 0);
+  std::string twin = text.substr(open, close - open);
+  twin.insert(1, "\"name\": \"twin\", ");
+  text.insert(open, twin + ", ");
+  folder.write("twins.json", text);
+  const Ran twins = run({"why", "twins.json", "s235jr-as-rolled"}, folder.path());
+  INFO(twins.out << twins.err);
+  CHECK_THAT(twins.out, Contains("- Yield, in every load case: "));
+  CHECK(twins.out.find("in load case") == std::string::npos);
+}
+
 TEST_CASE("where nothing is feasible the exit code is 1 and the reason is told") {
   const Folder folder;
   folder.write("job.json", hopeless_job);

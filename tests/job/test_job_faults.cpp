@@ -67,6 +67,17 @@ const std::vector<Case>& cases() {
        Code::missing,
        "/parts/0/member/load_cases/0/loads/5/from_preload",
        "\"torque_factor\" is missing"},
+      // counts
+      {R"("cycles": 200000, )",
+       "",
+       Code::missing,
+       "/parts/1/member/load_cases/0/fatigue",
+       "a whole number, such as 2000"},
+      {R"("cycles": 200000)",
+       R"("cycles": 1.5)",
+       Code::out_of_range,
+       "/parts/1/member/load_cases/0/fatigue/cycles",
+       "1.5 is not a whole number"},
       // version
       {R"("bismar": 1)",
        R"("bismar": 2)",
@@ -412,6 +423,10 @@ TEST_CASE("a message names what was found and what is allowed") {
   CHECK(faults[0].text().rfind("job.json:7:19 /parts/0/member/length: the number 300 has no unit. "
                                "Write a length as a text with its unit, such as \"",
                                0) == 0);
+}
+
+TEST_CASE("a count beyond every whole type is a whole number all the same") {
+  CHECK(faults_of(with(full_job, R"("cycles": 200000)", R"("cycles": 1e30)")).empty());
 }
 
 TEST_CASE("a job that is not an object is refused") {

@@ -153,6 +153,18 @@ TEST_CASE("The table of reliability factors is the rounded formula") {
     CHECK(tabulated_reliability_factor(row.reliability) == row.factor);
   }
   CHECK(reliability_factor(0.5) == Approx(1.0).margin(1e-15));
+  // The deviate by bisection of the tail, to the rounding of the factor.
+  for (int i = 0; i <= 2000; ++i) {
+    const double reliability = 1.0 - 0.5 * std::pow(2e-6, i / 2000.0);
+    double low = 0.0;
+    double high = 6.0;
+    for (int k = 0; k < 60; ++k) {
+      const double middle = 0.5 * (low + high);
+      (0.5 * std::erfc(middle / std::sqrt(2.0)) > 1.0 - reliability ? low : high) = middle;
+    }
+    INFO(reliability);
+    CHECK(std::abs(reliability_factor(reliability) - (1.0 - 0.04 * (low + high))) < 1e-15);
+  }
   // z of 0.975 is 1.959964.
   CHECK(reliability_factor(0.975) == Approx(1.0 - 0.08 * 1.959964).epsilon(1e-8));
   CHECK(faults([] { return reliability_factor(0.49); }) == "reliability out of range");

@@ -93,6 +93,7 @@ TEST_CASE("Limit states are found by their words, in a stated order") {
                                         "compression with bending",
                                         "eccentric compression",
                                         "wall slenderness",
+                                        "shear buckling",
                                         "slenderness",
                                         "net section",
                                         "weld zone",

@@ -7,9 +7,11 @@
 
 #include "support/catch.hpp"
 
+#include <algorithm>
 #include <cmath>
 #include <numbers>
 #include <string>
+#include <utility>
 #include <vector>
 
 namespace bismar {
@@ -93,13 +95,28 @@ TEST_CASE("An edge crack in a flat is held against the toughness as by hand") {
   CHECK(doubled.u("crack") == Approx(2.0 * pulled.u("crack")).epsilon(1e-15));
 }
 
-TEST_CASE("Compression closes no crack and opens none") {
+TEST_CASE("Compression closes no crack and opens none, but raises the moment") {
   const SectionProperties flat = solid_rectangle(50e-3, 20e-3);
   const Crack crack{.kind = Crack::Kind::edge, .depth = 2e-3};
   CHECK_FALSE(cracked(flat, {.N = -100e3}, crack).applies("crack"));
   const Case bent = cracked(flat, {.M_y = 500.0}, crack);
   const Case squeezed = cracked(flat, {.N = -100e3, .M_y = 500.0}, crack);
-  CHECK(squeezed.u("crack") == Approx(bent.u("crack")).epsilon(1e-14));
+  // A cantilever of 1 m: N_cr = pi^2 x 210 GPa x 208333 mm4 / (2 m)^2 = 107.949 kN; 100 kN raise
+  // the moment 1 / (1 - 0.926365) = 13.5805 times.
+  CHECK(squeezed.u("crack") == Approx(13.5805 * bent.u("crack")).epsilon(1e-5));
+  CHECK(limit_state("crack")->needs(squeezed.effects, squeezed.material) ==
+        std::vector<Symbol>{Symbol::K_Ic, Symbol::E});
+  CHECK(all_text(limit_state("crack")->explain(squeezed.input())).find("M_y by 1 / (1 - 100 kN") !=
+        std::string::npos);
+  Case beyond = squeezed;
+  beyond.factor = 1.1;
+  CHECK(std::isinf(beyond.u("crack")));
+  const Explanation text = limit_state("crack")->explain(beyond.input());
+  CHECK(text.line ==
+        "Crack: the factored compression 110 kN reaches N_cr = 107.9 kN, the deflection grows "
+        "without bound: u = infinity.");
+  // Compression without bending raises nothing.
+  CHECK_FALSE(cracked(flat, {.N = -200e3}, crack).applies("crack"));
 }
 
 TEST_CASE("A crack too deep for the formulas is a broken member and says why") {
@@ -209,6 +226,49 @@ TEST_CASE("An angle vibrates about its weak principal axis and an overhang as a 
   CHECK(reduce(overhanging, 1.0).second_support == 0.7);
 }
 
+TEST_CASE("Shear lowers the natural frequency of a stubby member where it is asked for") {
+  Case c{.section = solid_square(0.1),
+         .effects = reduce(fixed_fixed({force(1.0, 0.2)}), 0.4),
+         .length = 0.4};
+  c.limits.frequency = 1000.0;
+  // By hand: 22.3733 / (2 pi) x 5172.2 m/s x 28.8675 mm / (0.4 m)^2 = 3323 Hz.
+  CHECK(c.u("natural frequency") == Approx(1000.0 / 3322.9).epsilon(1e-4));
+  CHECK(all_text(limit_state("natural frequency")->explain(c.input())).find("slender member") !=
+        std::string::npos);
+  // Shear waves of sqrt(5/6 x 81 GPa / 7850) = 2932.4 m/s: f_s = 2932.4 / 0.8 = 3665.5 Hz, together
+  // 3322.9 x 3665.5 / 4947.5 = 2461.9 Hz.
+  c.limits.shear_deflection = true;
+  CHECK(c.u("natural frequency") == Approx(1000.0 / 2461.9).epsilon(1e-4));
+  CHECK(all_text(limit_state("natural frequency")->explain(c.input())).find("Shear alone") !=
+        std::string::npos);
+  CHECK(limit_state("natural frequency")->needs(c.effects, c.material) ==
+        std::vector<Symbol>{Symbol::E, Symbol::rho, Symbol::G});
+  // An isotropic table without G: E / 3 = 70 GPa, f_s = 3407.5 Hz, together 2379.0 Hz.
+  c.material.G.reset();
+  CHECK(c.u("natural frequency") == Approx(1000.0 / 2379.0).epsilon(1e-4));
+  CHECK(limit_state("natural frequency")->needs(c.effects, c.material) ==
+        std::vector<Symbol>{Symbol::E, Symbol::rho});
+  // No such bound for an anisotropic one.
+  c.material.rule = StressRule::direct_and_shear;
+  CHECK(limit_state("natural frequency")->needs(c.effects, c.material) ==
+        std::vector<Symbol>{Symbol::E, Symbol::rho, Symbol::G});
+}
+
+TEST_CASE("Shear brings the loss of frequency by compression forward") {
+  const SectionProperties s = solid_square(0.1);
+  const double stiffness = 81e9 * s.A_s_z;
+  const double slender = euler_critical_load(210e9, s.I_y, 1.0);
+  const double critical = 1.0 / (1.0 / slender + 1.0 / stiffness);
+  Case c{.section = s, .effects = reduce(pinned_pinned({axial(-0.36 * critical)}), 1.0)};
+  c.limits.frequency = 10.0;
+  c.limits.shear_deflection = true;
+  const double compressed = c.u("natural frequency");
+  c.effects = reduce(pinned_pinned({axial(0.36 * critical)}), 1.0);
+  CHECK(compressed == Approx(c.u("natural frequency") / 0.8).epsilon(1e-12));
+  c.effects = reduce(pinned_pinned({axial(-1.001 * critical)}), 1.0);
+  CHECK(std::isinf(c.u("natural frequency")));
+}
+
 TEST_CASE("Heat and axial force change the length together") {
   LoadCase load_case = cantilever({axial(-100e3)});
   load_case.temperature_change = 40.0;
@@ -274,9 +334,78 @@ TEST_CASE("Thermal restraint counts the bending of the loads and needs no axial 
   CHECK(straight >= 75.6 / 355.0);
   CHECK(bent >= straight + 0.99 * 12.0 / 355.0);
   CHECK(limit_state("thermal restraint")->needs(c.effects, c.material) ==
-        std::vector<Symbol>{Symbol::alpha, Symbol::E, Symbol::sigma_y});
+        std::vector<Symbol>{Symbol::alpha, Symbol::E, Symbol::sigma_y, Symbol::G});
   c.material.rule = StressRule::principal;
   CHECK(limit_state("thermal restraint")->default_factor(c.material) == 3.0);
+}
+
+TEST_CASE("The force of heat twists an open section and buckles its walls as a load does") {
+  for (const auto& [wall, worst] :
+       {std::pair{5e-3, "wall slenderness"}, std::pair{12e-3, "torsional-flexural buckling"}}) {
+    const double length = wall == 5e-3 ? 1.0 : 0.5;
+    LoadCase heated = pinned_pinned({});
+    heated.temperature_change = 50.0;
+    heated.restrained = true;
+    Case c{.section = angle(100e-3, 100e-3, wall, 0.0, 0.0), .effects = reduce(heated, length)};
+    c.length = length;
+    c.material.sigma_y = wall == 5e-3 ? 355e6 : 235e6;
+    c.factor = 1.5;
+    const double thermal = c.u("thermal restraint");
+    // 210 GPa x 12e-6 x 50 = 126 MPa.
+    Case loaded = c;
+    loaded.effects = reduce(pinned_pinned({axial(-126e6 * c.section.area)}), length);
+    INFO(worst);
+    CHECK(thermal == Approx(loaded.u(worst)).epsilon(1e-12));
+    CHECK(thermal > loaded.u("flexural buckling"));
+    CHECK(all_text(limit_state("thermal restraint")->explain(c.input()))
+              .find("the worst is " + std::string(worst)) != std::string::npos);
+    if (wall == 5e-3) {
+      // 95 / 5 over 14 root of (235 / 355): 1.6680.
+      CHECK(thermal == Approx(1.6680).epsilon(1e-4));
+      CHECK(loaded.u("torsional-flexural buckling") == Approx(1.245).epsilon(2e-3));
+    }
+  }
+}
+
+TEST_CASE("The force of cold tears a net section and a weld zone") {
+  LoadCase cooled = pinned_pinned({});
+  cooled.temperature_change = -60.0;
+  cooled.restrained = true;
+  Case c{.section = solid_square(50e-3), .effects = reduce(cooled, 10e-3), .length = 10e-3};
+  MemberMaterial& m = c.material;
+  m.column_law = ColumnLaw::aluminium_class_a;
+  m.E = 70e9;
+  m.alpha = 23e-6;
+  m.sigma_y = 260e6;
+  m.tensile = 310e6;
+  c.factor = 1.5;
+  const LimitState& state = *limit_state("thermal restraint");
+  // 70 GPa x 23e-6 x 60 = 96.6 MPa over 260 MPa.
+  CHECK(c.u("thermal restraint") == Approx(1.5 * 96.6 / 260.0).epsilon(1e-12));
+  // On 0.4 of the area, with 1.5 x 1.25 as the net section asks: 1.875 x 241.5 / 279 = 1.62298.
+  c.limits.details.net_area = 0.4;
+  CHECK(c.u("thermal restraint") == Approx(1.62298).epsilon(1e-5));
+  CHECK(all_text(state.explain(c.input())).find("the worst is net section") != std::string::npos);
+  // The factor of a load case scales with it.
+  c.factor = 3.0;
+  CHECK(c.u("thermal restraint") == Approx(2.0 * 1.62298).epsilon(1e-5));
+  c.factor = 1.5;
+  // Beside a weld: 260 x 0.5 = 130 MPa.
+  c.limits.details.net_area = 1.0;
+  c.limits.details.welded = true;
+  m.weld_yield_factor = 0.5;
+  m.weld_tensile_factor = 0.6;
+  CHECK(c.u("thermal restraint") == Approx(1.5 * 96.6 / 130.0).epsilon(1e-2));
+  const std::vector<Symbol> needs = state.needs(c.effects, m);
+  for (const Symbol symbol : {Symbol::tensile, Symbol::weld_yield, Symbol::weld_tensile}) {
+    CHECK(std::find(needs.begin(), needs.end(), symbol) != needs.end());
+  }
+  // Without the values of the weld zone it is left out here, and undecided there.
+  m.weld_tensile_factor.reset();
+  CHECK(all_text(state.explain(c.input())).find("lacks its values: weld zone") !=
+        std::string::npos);
+  const std::vector<Symbol> zone = limit_state("weld zone")->needs(c.effects, m);
+  CHECK(std::find(zone.begin(), zone.end(), Symbol::weld_tensile) != zone.end());
 }
 
 }  // namespace bismar

@@ -35,7 +35,9 @@ const std::map<Symbol, std::optional<double> MemberMaterial::*>& symbols() {
       {Symbol::flexural, &MemberMaterial::flexural},
       {Symbol::shear, &MemberMaterial::shear},
       {Symbol::alpha, &MemberMaterial::alpha},
-      {Symbol::K_Ic, &MemberMaterial::K_Ic}};
+      {Symbol::K_Ic, &MemberMaterial::K_Ic},
+      {Symbol::weld_yield, &MemberMaterial::weld_yield_factor},
+      {Symbol::weld_tensile, &MemberMaterial::weld_tensile_factor}};
   return list;
 }
 

@@ -145,6 +145,26 @@ TEST_CASE("Who does not turn aside") {
   CHECK(state.needs(effects, brittle(1e8)) == Symbols{Symbol::E, Symbol::G});
 }
 
+TEST_CASE("Timber twists with the 5 % shear modulus, in columns as in beams") {
+  // I 100 x 200, web 5, flange 10: N_T = (G I_t + pi^2 E_05 I_w / L^2) / i_0^2, G = E_05 / 16.
+  const SectionProperties s = i_section(0.1, 0.2, 0.005, 0.01, 0.0);
+  MemberMaterial wood = timber();
+  wood.G = 690e6;
+  wood.compressive = 21e6;
+  const double E = *wood.E_05;
+  REQUIRE(*wood.G > E / 16.0);
+  const double polar = (s.I_y + s.I_z) / s.area;
+  const double N_T = (E / 16.0 * s.I_t + 9.8696044 * E * s.I_w / 4.0) / polar;
+  MemberLimits limits;
+  limits.column_method = ColumnMethod::euler;
+  const LoadEffects effects = reduce(pinned_pinned({axial(-1000.0)}), 2.0);
+  const LimitState& state = *limit_state("torsional-flexural buckling");
+  const CheckInput input{s, wood, effects, limits, 2.0, 1.0};
+  CHECK(state.utilisation(input) == Approx(1000.0 / N_T).epsilon(1e-6));
+  wood.G = E / 20.0;
+  CHECK(state.utilisation(input) > 1000.0 / N_T);
+}
+
 TEST_CASE("Own mass bends a beam that turns aside, with C1 = 1") {
   const SectionProperties s = solid_rectangle(0.1, 0.01);
   const MemberMaterial s235 = metal(235e6, 360e6);
@@ -241,6 +261,80 @@ TEST_CASE("The net section is held against 0.9 of the tensile strength") {
         Approx(120.0 / 423.0).epsilon(1e-9));
   CHECK(state.explain({s, iron, tie(100e3), drilled, 1.0, 1.0}).line.find("u = 1.5") !=
         std::string::npos);
+}
+
+TEST_CASE("A net section of a brittle or anisotropic material is crushed too") {
+  // C24 post 100 x 100 with 0.3 of its area left, 60 kN: 20 MPa over 21 x 0.8 / 1.3 = 12.923 MPa.
+  const SectionProperties post = solid_square(0.1);
+  MemberLimits notched;
+  notched.details.net_area = 0.3;
+  MemberMaterial c24 = timber();
+  c24.tensile = 14.5e6 * 0.8 / 1.3;
+  c24.compressive = 21e6 * 0.8 / 1.3;
+  c24.shear = 4e6 * 0.8 / 1.3;
+  c24.k_cr = 0.67;
+  CHECK(u("net section", post, c24, tie(-60e3), 1.0, notched, 1.5) ==
+        Approx(1.5 * 20.0 / 12.9231).epsilon(1e-5));
+  const LimitState& state = *limit_state("net section");
+  CHECK(state.needs(tie(-1.0), c24) == Symbols{Symbol::compressive});
+  CHECK(state.needs(tie(1.0), c24) == Symbols{Symbol::tensile});
+  // Grey iron, 900 kN: 300 MPa over 600 MPa of compressive strength.
+  MemberMaterial iron = brittle(200e6);
+  iron.compressive = 600e6;
+  CHECK(u("net section", post, iron, tie(-900e3), 1.0, notched, 3.0) == Approx(1.5));
+  CHECK(state.explain({post, iron, tie(-900e3), notched, 1.0, 3.0}).line ==
+        "Net section: 3 x 300 MPa principal compression at the extreme fibre at x = 0 mm against "
+        "600 MPa: u = 1.5.");
+  CHECK(state.needs(tie(-1.0), iron) == Symbols{Symbol::tensile, Symbol::compressive});
+}
+
+TEST_CASE("A net section of timber has bending over its own strength and shear with its cracks") {
+  // 100 x 100, half of the modulus and of the area left.
+  const SectionProperties s = solid_square(0.1);
+  MemberLimits notched;
+  notched.details.net_area = 0.5;
+  notched.details.net_modulus = 0.5;
+  MemberMaterial m = timber();
+  m.tensile = 8e6;
+  m.compressive = 13e6;
+  m.flexural = 15e6;
+  m.shear = 2e6;
+  m.k_cr = 0.67;
+  // 500 N m on 83333 mm3: 6 MPa.
+  CHECK(u("net section", s, m, uniform(500.0, 1.0), 1.0, notched) == Approx(0.4).epsilon(1e-9));
+  // 4 kN: 1.5 x 0.8 MPa / 0.67 = 1.79104 MPa.
+  LoadCase across;
+  across.direct = InternalForces{.V_z = 4e3};
+  const LoadEffects sheared = reduce(across, 1.0);
+  CHECK(u("net section", s, m, sheared, 1.0, notched) == Approx(0.895522).epsilon(1e-6));
+  const LimitState& state = *limit_state("net section");
+  CHECK(state.needs(sheared, m) == Symbols{Symbol::shear});
+  CHECK(state.explain({s, m, sheared, notched, 1.0, 1.0}).line ==
+        "Net section: 1 x 1.791 MPa shear stress at x = 0 mm against 2 MPa: u = 0.8955.");
+}
+
+TEST_CASE("Compression raises the moments of a net section") {
+  // 50 x 50, 2 m, S355: N_cr = pi^2 x 210 GPa x 520833 mm4 / 4 m2 = 269.872 kN; 90 kN raise 1.25
+  // kN m by 1 / (1 - 0.333492) = 1.50036: 36 MPa and 60 x 1.50036 = 90.0216 MPa, over 0.5.
+  const SectionProperties s = solid_square(0.05);
+  const MemberMaterial s355 = metal(355e6, 470e6);
+  MemberLimits net;
+  net.details.net_area = 0.5;
+  net.details.net_modulus = 0.5;
+  const auto beam_column = [](double newtons) {
+    return reduce(pinned_pinned({axial(-newtons), force(2500.0, 1.0)}), 2.0);
+  };
+  CHECK(u("net section", s, s355, beam_column(90e3), 2.0, net) ==
+        Approx(2.0 * 126.0216 / 423.0).epsilon(1e-5));
+  // The factor counts in N: 3 x 90 kN is beyond.
+  CHECK(std::isinf(u("net section", s, s355, beam_column(90e3), 2.0, net, 3.0)));
+  const LimitState& state = *limit_state("net section");
+  CHECK(state.needs(beam_column(90e3), s355) == Symbols{Symbol::tensile, Symbol::E});
+  CHECK(state.explain({s, s355, beam_column(90e3), net, 2.0, 3.0}).line ==
+        "Net section: the factored compression 270 kN reaches N_cr = 269.9 kN, the deflection "
+        "grows without bound: u = infinity.");
+  // Without bending there is nothing to raise.
+  CHECK(std::isfinite(u("net section", s, s355, tie(-900e3), 2.0, net)));
 }
 
 TEST_CASE("Beside a weld the lower of yielding and rupture counts") {

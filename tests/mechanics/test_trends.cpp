@@ -55,7 +55,8 @@ bool holds(Trend trend, double before, double after) {
 /// Whether compression raises what the limit state looks at.
 bool is_amplified(std::string_view id) {
   return id == "deflection" || id == "deflection with shear" || id == "rotation" ||
-         id == "compression with bending" || id == "eccentric compression";
+         id == "compression with bending" || id == "eccentric compression" || id == "fatigue" ||
+         id == "crack" || id == "net section";
 }
 
 struct Trial {

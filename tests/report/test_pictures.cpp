@@ -3,11 +3,14 @@
 #include <bismar/report/pictures.hpp>
 #include <bismar/report/svg.hpp>
 
+#include <algorithm>
 #include <charconv>
 #include <cmath>
 #include <limits>
 #include <optional>
+#include <set>
 #include <string>
+#include <utility>
 #include <vector>
 
 #include "report/synthetic.hpp"
@@ -247,6 +250,44 @@ TEST_CASE("the ruler's scale can be set, and says what lies outside") {
   check_picture(ruler_svg(study.result, study.ruler, options));
 }
 
+TEST_CASE("every letter in the ruler's key stands in the picture, and every letter there is told") {
+  const synthetic::Study study = synthetic::lever();
+  // The whole scale, and windows that leave stretches and runners-up outside.
+  const std::vector<std::pair<double, double>> windows = {
+      {0.5, 500.0}, {5.0, 100.0}, {60.0, 100.0}, {200.0, 400.0}};
+  for (const auto& [low, high] : windows) {
+    PictureOptions options;
+    options.alpha_from = low;
+    options.alpha_to = high;
+    const std::string svg = ruler_svg(study.result, study.ruler, options);
+    INFO(low << " to " << high);
+    // Names follow their letters; what comes after the title of the axis is the key.
+    const auto is_letter = [](const std::string& text) {
+      return text.size() == 1 && text[0] >= 'A' && text[0] <= 'Z';
+    };
+    const auto is_name = [&](const std::string& text) {
+      return std::any_of(
+          study.result.designs.begin(), study.result.designs.end(), [&](const Design& d) {
+            return text.starts_with(d.material_name.substr(0, d.material_name.find(' ')));
+          });
+    };
+    std::set<std::string> shown;
+    std::set<std::string> told;
+    std::set<std::string> in_key;
+    bool key = false;
+    const std::vector<Drawn> texts = texts_of(xml::parse(svg));
+    for (std::size_t i = 0; i + 1 < texts.size(); ++i) {
+      key = key || texts[i].text.starts_with("alpha, the worth");
+      if (!is_letter(texts[i].text)) continue;
+      (key ? in_key : shown).insert(texts[i].text);
+      if (is_name(texts[i + 1].text)) told.insert(texts[i].text);
+    }
+    CHECK(shown.size() >= 2);
+    CHECK(shown == told);
+    CHECK(std::includes(shown.begin(), shown.end(), in_key.begin(), in_key.end()));
+  }
+}
+
 TEST_CASE("a section is drawn to scale with its load and dimensions") {
   SectionProperties ellipse;
   ellipse.family = SectionFamily::solid_ellipse;
@@ -290,6 +331,83 @@ TEST_CASE("every family of section has its drawing") {
   }
   s.family = SectionFamily::i_section;
   CHECK(words(section_svg(s)).find("root radii left out") != std::string::npos);
+}
+
+namespace {
+
+// A channel of three 10 mm walls, 100 x 60 mm, open upwards, with a square hole in its bottom. In
+// millimetres and away from the origin: the drawing scales it.
+const std::vector<SectionPoint> trough = {
+    {5, 7}, {65, 7}, {65, 107}, {55, 107}, {55, 17}, {15, 17}, {15, 107}, {5, 107}};
+const std::vector<std::vector<SectionPoint>> trough_holes = {
+    {{33, 10}, {37, 10}, {37, 14}, {33, 14}}};
+
+SectionProperties trough_section() {
+  SectionProperties s;
+  s.family = SectionFamily::polygon;
+  s.height = 0.100;
+  s.width = 0.060;
+  s.fibres = {{-0.030, -0.036}, {0.030, -0.036}, {0.030, 0.064}, {-0.030, 0.064}};
+  return s;
+}
+
+}  // namespace
+
+TEST_CASE("a polygon is drawn with its recesses and holes where its outline is given") {
+  const SectionProperties s = trough_section();
+  const std::string hull = section_svg(s);
+  check_picture(hull);
+  CHECK(words(hull).find("recesses and holes left out") != std::string::npos);
+  CHECK(hull.find("<path") == std::string::npos);
+
+  const std::string svg = section_svg(s, trough, trough_holes);
+  check_picture(svg);
+  CHECK(words(svg).find("left out") == std::string::npos);
+  CHECK(shows(svg, "100 mm"));
+  std::size_t paths = 0;
+  for (const xml::Element& e : xml::parse(svg).elements) {
+    if (e.name != "path") continue;
+    ++paths;
+    CHECK(e.attribute("fill-rule") == std::optional<std::string>("evenodd"));
+    const std::string d = e.attribute("d").value_or("");
+    CHECK(std::count(d.begin(), d.end(), 'M') == 2);   // outline and hole
+    CHECK(std::count(d.begin(), d.end(), 'L') == 10);  // 8 and 4 corners
+    // 210 px are 100 mm: the middle of the page is at x = 220 + 8, so the outline begins 30 mm =
+    // 63 px left of it and is 126 px wide, its recess 84 px.
+    CHECK(d.starts_with("M165 "));
+    CHECK(d.find("L291 ") != std::string::npos);
+    CHECK(d.find("L270 ") != std::string::npos);
+    CHECK(d.find("L186 ") != std::string::npos);
+    // The hole begins 28 mm = 58.8 px from the left edge.
+    CHECK(d.find("M223.8 ") != std::string::npos);
+  }
+  CHECK(paths == 1);
+}
+
+TEST_CASE("an outline that is not the section's is refused") {
+  const SectionProperties s = trough_section();
+  const auto fault_of = [&](const std::vector<SectionPoint>& outline,
+                            const std::vector<std::vector<SectionPoint>>& holes) {
+    try {
+      static_cast<void>(section_svg(s, outline, holes));
+    } catch (const Error& error) {
+      REQUIRE(error.faults().size() == 1);
+      return error.faults()[0];
+    }
+    FAIL("no error");
+    return Fault{};
+  };
+  CHECK(fault_of({{0, 0}, {1, 0}}, {}).code == Code::missing);
+  const Fault hole = fault_of(trough, {{{33, 10}}});
+  CHECK(hole.code == Code::missing);
+  CHECK(hole.where == "holes/0");
+  const double nan = std::numeric_limits<double>::quiet_NaN();
+  CHECK(fault_of({{0, 0}, {nan, 0}, {1, 1}}, {}).code == Code::not_finite);
+  CHECK(fault_of({{0, 0}, {1, 0}, {2, 0}}, {}).code == Code::conflict);          // no height
+  CHECK(fault_of({{0, 0}, {1, 0}, {1, 1}, {0, 1}}, {}).code == Code::conflict);  // a square
+  SectionProperties flat = s;
+  flat.height = 0.0;
+  CHECK_THROWS_AS(section_svg(flat, trough, trough_holes), Error);
 }
 
 TEST_CASE("a section without dimensions is refused, every fault at once") {

@@ -272,6 +272,55 @@ TEST_CASE("check reads the job back in the units of the shop") {
   }
 }
 
+TEST_CASE("check names sizes, supports, angles and what fatigue reads as the trade does") {
+  Part part;
+  part.quantity = 1;
+  part.body.length = 3.6;
+  part.body.shapes = {round(),
+                      square(),
+                      hexagon(),
+                      round_tube({.wall_to_height = 0.1}),
+                      polygon_shape({{0, 0}, {4, 0}, {4, 4}, {0, 4}}, {{{1, 1}, {2, 1}, {1, 2}}})};
+  part.body.load_cases = {fixed_pinned({force(-9000.0, 1.6)}, "raising"),
+                          pinned_pinned({force(-1000.0, 3.6)}, "step"),
+                          pinned_pinned({force(-1000.0, 3.6)}, "whole")};
+  part.body.load_cases[0].second_support = 3.2;
+  part.body.load_cases[1].second_support = 3.2;
+  part.body.load_cases[2].second_support = 3.6;  // the end: no overhang
+  // 0.5 degrees are pi / 360 = 0.0087266 rad.
+  part.limits.rotation = 0.0087266462599716;
+  part.limits.twist = 0.017453292519943;
+  const std::string text = unwrapped(check_text(part, {}));
+  for (const char* words : {"solid round, diameter 4.00 to 500 mm",
+                            "solid square, side 4.00 to 500 mm",
+                            "solid hexagon, width across flats 4.00 to 500 mm",
+                            "round tube, wall/diameter 0.1, diameter 4.00 to 500 mm",
+                            "polygon of 4 corners with 1 hole, height 4.00 to 500 mm",
+                            "load case raising fixed at x = 0, pinned at 3200 mm, overhang beyond",
+                            "load case step pinned at x = 0 and at 3200 mm, overhang beyond",
+                            "load case whole pinned at both ends force",
+                            "0.500 deg (0.00873 rad)",
+                            "1.00 deg (0.0175 rad)",
+                            "quantity 1 part "}) {
+    INFO(words);
+    CHECK(has(text, words));
+  }
+  CHECK_FALSE(has(text, "second support"));
+  // Static and by default: nothing of fatigue.
+  for (const char* words : {"surface", "reliability", "mean stress"}) CHECK_FALSE(has(text, words));
+
+  Part rough = part;
+  rough.body.details.surface = SurfaceFinish::hot_rolled;
+  CHECK(has(unwrapped(check_text(rough, {})), "surface hot rolled"));
+  CHECK_FALSE(has(check_text(rough, {}), "Goodman"));
+
+  part.body.load_cases[1].fatigue = FatigueLoading{};
+  const std::string swinging = unwrapped(check_text(part, {}));
+  CHECK(has(swinging, "surface machined"));
+  CHECK(has(swinging, "reliability in fatigue 0.99"));
+  CHECK(has(swinging, "mean stress in fatigue Goodman"));
+}
+
 TEST_CASE("the front as CSV reads back to the same numbers and texts") {
   synthetic::Study study = synthetic::lever();
   study.result.designs[0].material_name = "alloy \"X\", half; hard";

@@ -4,6 +4,7 @@
 #include "support/catch.hpp"
 
 #include <bismar/error.hpp>
+#include <bismar/sizing/existence.hpp>
 
 #include <algorithm>
 #include <cmath>
@@ -219,4 +220,72 @@ TEST_CASE("a weld across the member takes what the heat-affected zone of its tem
   part.body.stock = {"round-bar"};
   const auto unknown = front(part, test::starter());
   CHECK(unknown.front_count == 0);
+}
+
+TEST_CASE("a weld leaves full strength only to steels that owe none to hardening or cold work") {
+  Part part;
+  part.name = "welded";
+  part.quantity = 10.0;
+  part.body.length = 1.0;
+  part.body.shapes = {bismar::round(ShapeOptions{})};
+  part.body.load_cases = {cantilever({force(300.0, 1.0)})};
+  part.body.details.welded = true;
+  part.limits.classes = {"steel", "stainless steel"};
+  part.limits.allow_hard = true;
+  part.limits.routes = {"machining-from-bar"};
+  const auto result = front(part, test::starter());
+  REQUIRE(result.front_count > 0);
+  for (const Design& design : result.designs) {
+    INFO(design.material_name);
+    for (const char* lost : {"quenched", "hardened", "and aged", "cold drawn", "H900"}) {
+      CHECK(design.material_name.find(lost) == std::string::npos);
+    }
+  }
+}
+
+TEST_CASE("tubes rolled from strip lose what their seam loses") {
+  // Common practice, no source: strain-hardened and heat-treated strip softens at the weld.
+  const auto& table = test::starter().materials;
+  const auto route = std::find_if(test::starter().routes.begin(),
+                                  test::starter().routes.end(),
+                                  [](const Route& one) { return one.id == "roll-forming"; });
+  const auto admitted = [&](const char* id) {
+    return !route_rules(table.info(table.find(id).value()), *route).has_value();
+  };
+  CHECK(admitted("en-aw-5083-o-h111"));
+  CHECK_FALSE(admitted("en-aw-5083-h116-h321"));
+  CHECK_FALSE(admitted("en-aw-5754-h22"));
+}
+
+TEST_CASE("a thin polygon in bending is undecided, a stocky one is sized") {
+  Part part;
+  part.name = "polygon";
+  part.quantity = 100.0;
+  part.body.length = 0.5;
+  part.limits.classes = {"aluminium"};
+  part.limits.routes = {"extrusion"};
+  part.body.load_cases = {cantilever({force(100.0, 0.5)})};
+  const std::vector<SectionPoint> triangle = {{0.0, 0.0}, {1.0, 0.0}, {0.5, 0.9}};
+  part.body.shapes = {polygon_shape(triangle)};
+  const auto solid = front(part, test::starter());
+  CHECK(solid.front_count > 0);
+  const std::vector<SectionPoint> strip = {
+      {0.0, 0.0}, {0.5, 0.0}, {0.5, 0.02}, {0.02, 0.02}, {0.02, 1.0}, {0.0, 1.0}};
+  part.body.shapes = {polygon_shape(strip)};
+  const auto thin = front(part, test::starter());
+  CHECK(thin.front_count == 0);
+  CHECK_FALSE(thin.undecided.empty());
+}
+
+TEST_CASE("a crack in timber or a laminate is undecided") {
+  Part part;
+  part.name = "post";
+  part.quantity = 10.0;
+  part.body.length = 1.0;
+  part.body.stock = {"timber"};
+  part.body.load_cases = {cantilever({force(100.0, 1.0)})};
+  part.body.details.crack = Crack{.depth = 5e-3};
+  const auto result = front(part, test::starter());
+  CHECK(result.front_count == 0);
+  CHECK_FALSE(result.undecided.empty());
 }

@@ -69,6 +69,57 @@ TEST_CASE("each fault of a part has its code, its place and a remedy") {
        Code::out_of_range,
        "no bore",
        [](Part& p, Settings&) { p.body.shapes = {round_tube({.wall_to_height = 0.5})}; }},
+      {"/member/shapes/0/wall_to_height",
+       Code::out_of_range,
+       "wall_to_height does not fit the other ratios",
+       [](Part& p, Settings&) {
+         p.body.shapes = {angle({.height_to_width = 1.0, .wall_to_height = 1.5})};
+       }},
+      {"/member/shapes/0/root_radius_to_height",
+       Code::out_of_range,
+       "root_radius_to_height does not fit the other ratios",
+       [](Part& p, Settings&) {
+         p.body.shapes = {i_section({.height_to_width = 2.0,
+                                     .web_to_height = 0.1,
+                                     .flange_to_height = 0.1,
+                                     .root_radius_to_height = 0.6})};
+       }},
+      {"/member/shapes/0/outline",
+       Code::missing,
+       "at least 3",
+       [](Part& p, Settings&) {
+         p.body.shapes = {polygon_shape({{0, 0}, {1, 0}})};
+       }},
+      {"/member/shapes/0/outline",
+       Code::out_of_range,
+       "0 high",
+       [](Part& p, Settings&) {
+         p.body.shapes = {polygon_shape({{0, 1}, {1, 1}, {2, 1}})};
+       }},
+      {"/member/shapes/0/outline",
+       Code::out_of_range,
+       "mean thickness",
+       [](Part& p, Settings&) {
+         p.body.shapes = {polygon_shape({{0, 0}, {1, 0}, {0, 1e6}})};
+       }},
+      {"/member/shapes/0/outline/2",
+       Code::conflict,
+       "must not cross",
+       [](Part& p, Settings&) {
+         p.body.shapes = {polygon_shape({{0, 0}, {2, 1}, {2, 0}, {0, 1.5}})};
+       }},
+      {"/member/shapes/0/outline/1",
+       Code::not_finite,
+       "finite",
+       [&](Part& p, Settings&) {
+         p.body.shapes = {polygon_shape({{0, 0}, {1, nan}, {0, 1}})};
+       }},
+      {"/member/shapes/0/holes/0/0",
+       Code::conflict,
+       "holes need material",
+       [](Part& p, Settings&) {
+         p.body.shapes = {polygon_shape({{0, 0}, {1, 0}, {1, 1}}, {{{0, 0}, {1, 0}, {1, 1}}})};
+       }},
       {"/member/shapes/0/height",
        Code::conflict,
        "below the largest",

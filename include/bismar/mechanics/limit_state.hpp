@@ -133,7 +133,7 @@ struct MemberDetails {
 /// Limits that the user sets on one member.
 struct MemberLimits {
   std::optional<double> deflection;  ///< Largest deflection [m].
-  bool shear_deflection = false;     ///< Adds the deflection of shear.
+  bool shear_deflection = false;     ///< Shear counts in deflection and frequency.
   std::optional<double> rotation;    ///< Largest slope of the axis [rad].
   std::optional<double> twist;       ///< Largest twist over the length [rad].
   std::optional<double> frequency;   ///< Least first natural frequency [Hz].

@@ -27,6 +27,10 @@ struct MomentShape {
   std::optional<double> end_ratio =
       {};  ///< psi in [-1, 1], the end moment of lesser magnitude over
            ///< the other, where M is linear over the whole length.
+  /// How much of the loads twists a member that turns aside [N], >= 0: integral of w |q| dx, point
+  /// loads likewise, with w = sin^2(pi x/L) between supports at both ends, x/L of a cantilever,
+  /// and with an overhang x (s - x) / (s L) up to the second support at s, (x - s) / L beyond it.
+  double load_share = 0.0;
 };
 
 /// What 1 N/m of own mass does to one plane.
@@ -114,7 +118,7 @@ struct LoadEffects {
 ///
 /// Internal forces given directly are one more station, at x = 0, with their own N; own mass does
 /// not act there, they bring no deflection and no twist, and their moments are taken as uniform
-/// over the length.
+/// over the length; end_ratio is then 1, but empty where other loads act in the plane.
 ///
 /// Accuracy: relative error about 1e-12 of the largest force or moment; values below 1e-13 of the
 /// sum of all loads are taken as zero (the ends of a pinned member, loads that cancel).

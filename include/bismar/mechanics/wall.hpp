@@ -4,6 +4,8 @@
 #include <bismar/export.hpp>
 #include <bismar/mechanics/section.hpp>
 
+#include <cstdint>
+
 namespace bismar {
 
 /// Material factor of the wall limits [-].
@@ -89,5 +91,33 @@ namespace bismar {
 [[nodiscard]] BISMAR_API double aluminium_class_3_limit(PlateElement::Kind kind,
                                                         double epsilon,
                                                         bool class_a);
+
+/// Buckling coefficient k_tau of a long web in shear [-]: supported along both edges (5.34), or a
+/// stem with one edge free (1.2).
+/// Source: EN 1993-1-5:2006 (A.5) without stiffeners; stem: AISC 360-16 G3 (from memory).
+enum class WebEdges : std::uint8_t { both_held, one_free };
+[[nodiscard]] BISMAR_API double web_shear_coefficient(WebEdges edges);
+
+/// Relative slenderness of a web in shear [-].
+///
+///     lambda_w = 0.76 sqrt(f / tau_cr),   tau_cr = k_tau pi^2 E / (12 (1 - nu^2)) (t / h_w)^2
+///
+/// with nu = 0.3: h_w / (86.4 t epsilon) for steel held along both edges, and within 1 % the 0.35
+/// h_w / t sqrt(f_o / E) of aluminium. Long web without stiffeners between its supports.
+/// @param edges  How its long edges are held.  @param ratio  h_w / t [-], > 0.
+/// @param strength  f, yield or proof strength [Pa], > 0.  @param youngs_modulus  E [Pa], > 0.
+/// @throws bismar::Error  not_finite or out_of_range, place is the argument's name.
+/// Source: EN 1993-1-5:2006 5.3(3); EN 1999-1-1:2007 6.7.4.1 (both from memory).
+[[nodiscard]] BISMAR_API double web_shear_slenderness(WebEdges edges,
+                                                      double ratio,
+                                                      double strength,
+                                                      double youngs_modulus);
+
+/// Contribution of the web to the resistance to shear buckling chi_w [-], non-rigid end posts, eta
+/// = 1: 1 up to 0.83, 0.83 / lambda_w beyond.
+/// @param slenderness  lambda_w [-], >= 0.
+/// @throws bismar::Error  not_finite or out_of_range, place "slenderness".
+/// Source: EN 1993-1-5:2006 Table 5.1 (from memory).
+[[nodiscard]] BISMAR_API double web_shear_factor(double slenderness);
 
 }  // namespace bismar

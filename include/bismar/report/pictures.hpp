@@ -2,10 +2,13 @@
 #pragma once
 
 #include <bismar/export.hpp>
+#include <bismar/mechanics/section.hpp>
 #include <bismar/sizing/front.hpp>
 
 #include <optional>
+#include <span>
 #include <string>
+#include <vector>
 
 namespace bismar {
 
@@ -58,9 +61,24 @@ struct SectionPictureOptions {
 ///
 /// Corner radii of hollow sections follow from the perimeters; the flange thickness of I sections
 /// and channels follows from the area without root radii (the picture says so), so that it may
-/// differ by a few percent from the table.
+/// differ by a few percent from the table. A polygon is drawn as its convex outline, which is all
+/// that its properties tell; the overload below draws it whole.
 /// @throws bismar::Error  out_of_range: height or width not finite and > 0.
 [[nodiscard]] BISMAR_API std::string section_svg(const SectionProperties& section,
+                                                 const SectionPictureOptions& options = {});
+
+/// A polygon section as it is, recesses and holes included; the drawing above knows its convex
+/// outline only.
+///
+/// @param section  Of the polygon, at its real size.
+/// @param outline, holes  Corners as in Shape, in any scale and origin, either way round: drawn so
+///   that the outline is as high as the section.
+/// @throws bismar::Error  out_of_range: height or width not finite and > 0; missing: fewer than 3
+///   corners, place "outline" or "holes/0"; not_finite: a corner; conflict, place "outline": it has
+///   no height, or at the section's height another width than the section.
+[[nodiscard]] BISMAR_API std::string section_svg(const SectionProperties& section,
+                                                 std::span<const SectionPoint> outline,
+                                                 std::span<const std::vector<SectionPoint>> holes,
                                                  const SectionPictureOptions& options = {});
 
 /// The utilisations of a design as bars against the limit at 1. Bars beyond 1.25 are cut and

@@ -99,7 +99,7 @@ struct PropertyLimit {
 /// What the design must stay within.
 struct Limits {
   std::optional<double> deflection = {};  ///< [m]
-  bool shear_deflection = false;          ///< The deflection has its shear part.
+  bool shear_deflection = false;          ///< Shear counts in deflection and frequency.
   std::optional<double> rotation = {};    ///< Slope of the axis [rad]
   std::optional<double> twist = {};       ///< [rad]
   std::optional<double> frequency = {};   ///< Least first natural frequency [Hz].

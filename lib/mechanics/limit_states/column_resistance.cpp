@@ -130,6 +130,17 @@ double column_modulus(const MemberMaterial& material) {
   return material.E_axial ? std::min(E, *material.E_axial) : E;
 }
 
+double buckling_shear_modulus(const MemberMaterial& material) {
+  const double G = stability_shear_modulus(material);
+  return is_timber(material.column_law) ? std::min(G, needed(material.E_05, Symbol::E_05) / 16.0)
+                                        : G;
+}
+
+std::string buckling_shear_modulus_text(const MemberMaterial& material) {
+  return is_timber(material.column_law) ? gigapascals(buckling_shear_modulus(material))
+                                        : stability_shear_modulus_text(material);
+}
+
 ColumnResistance column_resistance(const CheckInput& input, BendingAxis axis) {
   const bool about_y = axis == BendingAxis::y;
   ColumnResistance r;
@@ -184,7 +195,7 @@ ColumnResistance twisting_resistance(const CheckInput& input) {
   r.critical =
       torsional_flexural_critical_load(section,
                                        {.youngs_modulus = E,
-                                        .shear_modulus = stability_shear_modulus(input.material),
+                                        .shear_modulus = buckling_shear_modulus(input.material),
                                         .length = r.effective_length},
                                        euler_critical_load(E, section.I_u(), length_u),
                                        euler_critical_load(E, section.I_v(), length_v));
@@ -212,7 +223,7 @@ std::string critical_load_step(const CheckInput& input, const ColumnResistance& 
   if (r.mode == ColumnMode::twisting) {
     return "N_cr by twisting = " + kilonewtons(r.critical) +
            ", the least root of the torsional-flexural equation with G I_t = " +
-           stability_shear_modulus_text(input.material) + " x " +
+           buckling_shear_modulus_text(input.material) + " x " +
            fourth_millimetres(input.section.I_t) +
            ", pi^2 E I_w / L_T^2 with L_T = " + millimetres(r.effective_length) +
            " and the shear centre at (" + millimetres(input.section.y_shear) + ", " +

@@ -31,6 +31,12 @@ namespace bismar::mechanics {
 /// A column buckles in bending; where the axial modulus is lower it is the safer one [Pa].
 [[nodiscard]] double column_modulus(const MemberMaterial& material);
 
+/// Shear modulus that torsion feels where a member buckles [Pa]: stability_shear_modulus(), of
+/// timber at most E_0.05 / 16.
+[[nodiscard]] double buckling_shear_modulus(const MemberMaterial& material);
+/// "80 GPa", with a word where the table has none.
+[[nodiscard]] std::string buckling_shear_modulus_text(const MemberMaterial& material);
+
 /// How a column gives way.
 enum class ColumnMode : std::uint8_t {
   about_y,

@@ -95,6 +95,15 @@ ColumnResistance weakest(const CheckInput& input) {
 
 double share(double demand, double resistance) { return demand > 0.0 ? demand / resistance : 0.0; }
 
+/// Shares that overflow: the rule has no number for them.
+Sum beyond_measure(const BeamColumnShares& shares) {
+  return {.rule = "EN 1993-1-1 (6.61)",
+          .axial = std::max(shares.axial_y, shares.axial_z),
+          .about_y = shares.moment_y,
+          .about_z = shares.moment_z,
+          .steps = {"A share is beyond all numbers."}};
+}
+
 /// Annex B of EN 1993-1-1, elastic columns of its tables, for ductile metals.
 Sum metal_sum(const CheckInput& input, const Moments& m, bool explained) {
   const double N = input.factor * input.effects.compression;
@@ -112,6 +121,11 @@ Sum metal_sum(const CheckInput& input, const Moments& m, bool explained) {
                                 .axial_z = N / z.load,
                                 .moment_y = share(input.factor * m.M_y, resistance.y),
                                 .moment_z = share(input.factor * m.M_z, resistance.z)};
+  for (const double part : {shares.axial_y, shares.axial_z, shares.moment_y, shares.moment_z}) {
+    if (!std::isfinite(part)) {
+      return beyond_measure(shares);
+    }
+  }
   InteractionFactors k = interaction_factors({.kind = BeamColumnKind::elastic,
                                               .twists = false,
                                               .lambda_y = y.slenderness,

@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/second_order.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -111,14 +112,17 @@ struct Worst {
   double intensity = -1.0;  ///< K [Pa m^0.5]
 };
 
-Worst worst_lie(const CheckInput& input) {
+/// Of a member that is not unstable.
+Worst worst_lie(const CheckInput& input, const Amplifications& raised) {
   Worst worst;
   for (const bool down : {true, false}) {
     const Lie one = lie(input, down);
     bool is_worst = false;
     for (const Station& station : input.effects.stations) {
-      const Opening here = opening(
-          input.section, station_stresses(input.section, acting_forces(input, station)), down);
+      const Opening here =
+          opening(input.section,
+                  station_stresses(input.section, amplified_forces(input, station, raised)),
+                  down);
       const double stress = one.stress(here);
       if (stress > worst.stress) {
         worst.station = &station;
@@ -162,23 +166,33 @@ class CrackFracture final : public LimitState {
            (effects.tension > 0.0 || effects.bends);
   }
   std::vector<Symbol> needs(const LoadEffects& effects, const MemberMaterial&) const override {
-    return own_mass_acts(effects) ? std::vector<Symbol>{Symbol::K_Ic, Symbol::rho}
-                                  : std::vector<Symbol>{Symbol::K_Ic};
+    std::vector<Symbol> symbols = {Symbol::K_Ic};
+    if (is_amplified(effects)) {
+      symbols.push_back(Symbol::E);
+    }
+    if (own_mass_acts(effects)) {
+      symbols.push_back(Symbol::rho);
+    }
+    return symbols;
   }
   /// The crack opens across the axis of the member at the most stressed station; shear and torsion
   /// are left out. The stresses are those of the section without crack, notch or hole; compression
-  /// closes nothing. A straight crack in a round or elliptical bar is taken as one in a flat of the
-  /// same depth. In tubes and profiles the crack goes into the wall, whose free bending is not held
-  /// by the rest of the section: on the safe side. Where the plastic zone is not small K_Ic is on
-  /// the safe side too, as long as the net section does not yield: yield is another limit state.
+  /// closes nothing, but raises the moments by 1 / (1 - N / N_cr). A straight crack in a round or
+  /// elliptical bar is taken as one in a flat of the same depth. In tubes and profiles the crack
+  /// goes into the wall, whose free bending is not held by the rest of the section: on the safe
+  /// side. Where the plastic zone is not small K_Ic is on the safe side too, as long as the net
+  /// section does not yield: yield is another limit state.
   double utilisation(const CheckInput& input) const override {
-    return input.factor * worst_lie(input).intensity / needed(input.material.K_Ic, Symbol::K_Ic);
+    const double least = needed(input.material.K_Ic, Symbol::K_Ic);
+    const Amplifications raised = amplifications(input);
+    return raised.unstable ? infinity : input.factor * worst_lie(input, raised).intensity / least;
   }
   Explanation explain(const CheckInput& input) const override;
   /// The crack stays and its relative depth falls, and with it the factor of tension. The factor of
   /// bending may rise meanwhile, but never faster than with the tenth part of the power of the
   /// scale (its logarithmic slope is above -0.1 everywhere) while the stress falls at least with
-  /// the first power (own weight; loads with the second and third). Of a surface crack the factors
+  /// the first power (own weight; loads with the second and third), and its rise by compression
+  /// falls. Of a surface crack the factors
   /// of Newman and Raju behave alike: their products with stresses that fall with the first power
   /// were found to fall over the whole range. A crack beyond the formulas' range is infinite, which
   /// only smaller sections can be.
@@ -186,6 +200,7 @@ class CrackFracture final : public LimitState {
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
       case Symbol::K_Ic:
+      case Symbol::E:
         return Trend::falls;
       case Symbol::rho:
         return Trend::rises;
@@ -198,7 +213,11 @@ class CrackFracture final : public LimitState {
 Explanation CrackFracture::explain(const CheckInput& input) const {
   const Crack& crack = *input.limits.details.crack;
   const double least = needed(input.material.K_Ic, Symbol::K_Ic);
-  const Worst worst = worst_lie(input);
+  const Amplifications raised = amplifications(input);
+  if (raised.unstable) {
+    return unstable_explanation("Crack", raised, input);
+  }
+  const Worst worst = worst_lie(input, raised);
   const double u = utilisation(input);
   const std::string what = crack.kind == Crack::Kind::edge
                                ? "an edge crack " + millimetres(crack.depth) + " deep"
@@ -237,6 +256,7 @@ Explanation CrackFracture::explain(const CheckInput& input) const {
                       "The surface crack is taken as one along the whole side: its own formula "
                       "does not hold for this size, or gives more.");
   }
+  add_amplification_step(raised, input, text.steps);
   return text;
 }
 

@@ -3,6 +3,7 @@
 #include "mechanics/limit_states/fatigue_severity.hpp"
 #include "mechanics/limit_states/list.hpp"
 #include "mechanics/limit_states/own_mass.hpp"
+#include "mechanics/limit_states/second_order.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/text.hpp"
 
@@ -10,6 +11,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <limits>
 #include <string>
 #include <string_view>
 #include <vector>
@@ -45,7 +47,8 @@ class Fatigue final : public LimitState {
   /// Every part of a load case swings together, from its value to stress_ratio times its value.
   /// Amplitude and mean are those of the net section with K_f, also the mean's, as von Mises
   /// stresses; for brittle materials that is on the safe side of the principal stress. Compression
-  /// adds to the amplitude but not to the mean, where it neither helps nor harms. The first cycle
+  /// adds to the amplitude but not to the mean, where it neither helps nor harms, and raises the
+  /// moments by 1 / (1 - N / N_cr) with this limit state's factor in N. The first cycle
   /// is held against yield, or tensile strength without yield, the notch included.
   ///
   /// Strength: f sigma_u to 1000 cycles, from there a straight line in the logarithms to S_e at the
@@ -61,20 +64,26 @@ class Fatigue final : public LimitState {
   /// varying ranges, and 1.5 f_y; gamma_Mf gamma_Ff is the factor; thickness reduction is left to
   /// the category. The standard is for steel: u of a weld in another material is infinite.
   double utilisation(const CheckInput& input) const override {
+    const Amplifications raised = amplifications(input);
+    if (raised.unstable) {
+      return std::numeric_limits<double>::infinity();
+    }
     const FatigueSeverity worst = is_welded_detail(input.limits.details)
-                                      ? worst_weld(input)
-                                      : worst_of(input, StressLife(input));
+                                      ? worst_weld(input, raised)
+                                      : worst_of(input, StressLife(input), raised);
     return input.factor * worst.share();
   }
   Explanation explain(const CheckInput& input) const override;
   /// Stresses fall at least with the first power of the scale, those of own mass; a shear force's
   /// may stay. The size factor divides bending and torsion only and falls with the power 0.157 at
-  /// most, or jumps up; all else depends on the material and the notch, which stay.
+  /// most, or jumps up; the rise by compression falls; all else depends on the material and the
+  /// notch, which stay.
   Trend trend_with_scale() const override { return Trend::falls; }
   /// A higher tensile strength raises the estimated endurance limit to its cap and lowers the
   /// surface factor, and with it S_e beyond the cap or of a table value; notches are felt more.
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
+      case Symbol::E:
       case Symbol::sigma_y:
       case Symbol::sigma_e:
       case Symbol::shear:
@@ -89,8 +98,8 @@ class Fatigue final : public LimitState {
   }
 
  private:
-  static Explanation explain_weld(const CheckInput& input);
-  static Explanation explain_life(const CheckInput& input);
+  static Explanation explain_weld(const CheckInput& input, const Amplifications& raised);
+  static Explanation explain_life(const CheckInput& input, const Amplifications& raised);
 };
 
 std::vector<Symbol> Fatigue::needs(const LoadEffects& effects,
@@ -104,6 +113,9 @@ std::vector<Symbol> Fatigue::needs(const LoadEffects& effects,
   }
   if (material.sigma_e || !material.steel) {
     symbols.push_back(Symbol::sigma_e);
+  }
+  if (is_amplified(effects)) {
+    symbols.push_back(Symbol::E);
   }
   if (own_mass_acts(effects)) {
     symbols.push_back(Symbol::rho);
@@ -132,6 +144,19 @@ void add_net_section_step(const MemberDetails& d, std::vector<std::string>& step
   }
 }
 
+/// What compression does to moments and, where R > 0, to their range.
+void add_swing_step(const Amplifications& raised,
+                    const CheckInput& input,
+                    std::vector<std::string>& steps) {
+  add_amplification_step(raised, input, steps);
+  const double R = input.effects.fatigue->stress_ratio;
+  if (is_amplified(input.effects) && R > 0.0) {
+    steps.push_back("Their range rises by 1 / [(1 - n) (1 - R n)], n = N / N_cr: by " +
+                    number(raised.y.range_factor(R)) + " for M_y and " +
+                    number(raised.z.range_factor(R)) + " for M_z where they act.");
+  }
+}
+
 std::string forces_step(const InternalForces& f) {
   return "Forces there: N = " + kilonewtons(f.N) + ", M_y = " + newton_metres(f.M_y) +
          ", M_z = " + newton_metres(f.M_z) + ", V_z = " + kilonewtons(f.V_z) +
@@ -139,12 +164,17 @@ std::string forces_step(const InternalForces& f) {
 }
 
 Explanation Fatigue::explain(const CheckInput& input) const {
-  return is_welded_detail(input.limits.details) ? explain_weld(input) : explain_life(input);
+  const Amplifications raised = amplifications(input);
+  if (raised.unstable) {
+    return unstable_explanation("Fatigue", raised, input);
+  }
+  return is_welded_detail(input.limits.details) ? explain_weld(input, raised)
+                                                : explain_life(input, raised);
 }
 
-Explanation Fatigue::explain_weld(const CheckInput& input) {
+Explanation Fatigue::explain_weld(const CheckInput& input, const Amplifications& raised) {
   const MemberDetails& d = input.limits.details;
-  const FatigueSeverity worst = worst_weld(input);
+  const FatigueSeverity worst = worst_weld(input, raised);
   const std::string u = number(input.factor * worst.share());
   const std::string place = " at x = " + millimetres(worst.station->x);
   Explanation text;
@@ -165,6 +195,7 @@ Explanation Fatigue::explain_weld(const CheckInput& input) {
   add_own_mass_step(input, text.steps);
   text.steps.push_back(forces_step(worst.forces));
   add_net_section_step(d, text.steps);
+  add_swing_step(raised, input, text.steps);
   text.steps.push_back(
       "Range of the von Mises stress, (1 - R) = " + number(2.0 * amplitude_share(input)) +
       " of the largest, = " + megapascals(worst.largest) + ".");
@@ -222,9 +253,9 @@ void add_strength_steps(const CheckInput& input,
                   number(r.place) + " = " + megapascals(r.strength) + ".");
 }
 
-Explanation Fatigue::explain_life(const CheckInput& input) {
+Explanation Fatigue::explain_life(const CheckInput& input, const Amplifications& raised) {
   const StressLife life(input);
-  const FatigueSeverity worst = worst_of(input, life);
+  const FatigueSeverity worst = worst_of(input, life, raised);
   const MemberMaterial& material = input.material;
   const double tensile = needed(material.tensile, Symbol::tensile);
   const double base = worst.shear ? needed(material.shear, Symbol::shear) : tensile;
@@ -253,6 +284,7 @@ Explanation Fatigue::explain_life(const CheckInput& input) {
   add_own_mass_step(input, text.steps);
   text.steps.push_back(forces_step(worst.forces));
   add_net_section_step(input.limits.details, text.steps);
+  add_swing_step(raised, input, text.steps);
   text.steps.push_back("Stress ratio R = " + number(input.effects.fatigue->stress_ratio) +
                        ": the amplitude is " + number(amplitude_share(input)) +
                        " of the largest stress, "

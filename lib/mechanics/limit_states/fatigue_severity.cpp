@@ -55,16 +55,22 @@ void judge(FatigueSeverity& s,
   s.first = ratio(s.largest, first_strength);
 }
 
+/// The stresses of one station.
+struct Swing {
+  StationStresses largest;  ///< Under the whole load case.
+  /// What amplitude_share() is of, and the same but for moments that compression raises.
+  StationStresses range;
+};
+
 /// Of both, the worse.
-FatigueSeverity anisotropic(const CheckInput& input,
-                            const StressLife& life,
-                            const StationStresses& s) {
+FatigueSeverity anisotropic(const CheckInput& input, const StressLife& life, const Swing& swing) {
   const MemberMaterial& m = input.material;
   const double tensile = needed(m.tensile, Symbol::tensile);
-  const StationStresses peak = multiplied(s, life.peak);
+  const StationStresses peak = multiplied(swing.largest, life.peak);
+  const StationStresses range = multiplied(swing.range, life.peak);
   FatigueSeverity direct;
   direct.largest = std::abs(peak.axial) + peak.bending;
-  direct.amplitude = part_of(amplitude_share(input), direct.largest);
+  direct.amplitude = part_of(amplitude_share(input), std::abs(range.axial) + range.bending);
   direct.mean = part_of(mean_share(input), (std::max(0.0, peak.axial) + peak.bending));
   judge(direct, life.line, life.resistance.strength, tensile, tensile);
   FatigueSeverity shear;
@@ -83,23 +89,22 @@ FatigueSeverity anisotropic(const CheckInput& input,
 
 /// Amplitude and mean may peak at different points of the section; both largest together are on the
 /// safe side, by nothing where they grow alike.
-FatigueSeverity isotropic(const CheckInput& input,
-                          const StressLife& life,
-                          const StationStresses& s) {
+FatigueSeverity isotropic(const CheckInput& input, const StressLife& life, const Swing& swing) {
+  const StationStresses& s = swing.largest;
   const bool ductile = input.material.rule == StressRule::von_mises_yield;
   const double tensile = needed(input.material.tensile, Symbol::tensile);
   const double yield = ductile ? needed(input.material.sigma_y, Symbol::sigma_y) : tensile;
-  const auto equivalent = [&](const StressMultipliers& by) {
-    return largest_equivalent(input.section, multiplied(s, by));
+  const auto equivalent = [&](const StationStresses& stresses, const StressMultipliers& by) {
+    return largest_equivalent(input.section, multiplied(stresses, by));
   };
   StressMultipliers tension = life.peak;
   if (s.axial < 0.0) {
     tension.axial = 0.0;
   }
   FatigueSeverity result;
-  result.amplitude = part_of(amplitude_share(input), equivalent(life.amplitude));
-  result.mean = part_of(mean_share(input), equivalent(tension));
-  result.largest = equivalent(life.peak);
+  result.amplitude = part_of(amplitude_share(input), equivalent(swing.range, life.amplitude));
+  result.mean = part_of(mean_share(input), equivalent(s, tension));
+  result.largest = equivalent(s, life.peak);
   judge(result,
         life.line,
         life.resistance.strength,
@@ -109,12 +114,12 @@ FatigueSeverity isotropic(const CheckInput& input,
 }
 
 /// The range of the von Mises stress, which is never below that of the largest principal stress.
-FatigueSeverity welded(const CheckInput& input, const StationStresses& s) {
+FatigueSeverity welded(const CheckInput& input, const Swing& swing) {
   const MemberDetails& d = input.limits.details;
   FatigueSeverity result;
   result.largest = part_of(2.0 * amplitude_share(input),
                            largest_equivalent(input.section,
-                                              multiplied(s,
+                                              multiplied(swing.range,
                                                          {.axial = 1.0 / d.net_area,
                                                           .bending = 1.0 / d.net_modulus,
                                                           .shear = 1.0 / d.net_area,
@@ -132,11 +137,21 @@ FatigueSeverity welded(const CheckInput& input, const StationStresses& s) {
 }
 
 template <typename AtStation>
-FatigueSeverity worst_station(const CheckInput& input, const AtStation& at_station) {
+FatigueSeverity worst_station(const CheckInput& input,
+                              const Amplifications& raised,
+                              const AtStation& at_station) {
+  const double stress_ratio = input.effects.fatigue->stress_ratio;
+  const bool differ = is_amplified(input.effects) && stress_ratio > 0.0;
   FatigueSeverity worst;
   for (const Station& station : input.effects.stations) {
-    const InternalForces forces = acting_forces(input, station);
-    FatigueSeverity here = at_station(station_stresses(input.section, forces));
+    const InternalForces forces = amplified_forces(input, station, raised);
+    Swing swing;
+    swing.largest = station_stresses(input.section, forces);
+    swing.range =
+        differ ? station_stresses(input.section,
+                                  amplified_range_forces(input, station, raised, stress_ratio))
+               : swing.largest;
+    FatigueSeverity here = at_station(swing);
     if (worst.station == nullptr || here.share() > worst.share()) {
       here.station = &station;
       here.forces = forces;
@@ -174,15 +189,17 @@ StressLife::StressLife(const CheckInput& input)
                .torsion = peak.torsion / resistance.size_at_life};
 }
 
-FatigueSeverity worst_of(const CheckInput& input, const StressLife& life) {
-  return worst_station(input, [&](const StationStresses& s) {
-    return input.material.rule == StressRule::direct_and_shear ? anisotropic(input, life, s)
-                                                               : isotropic(input, life, s);
+FatigueSeverity worst_of(const CheckInput& input,
+                         const StressLife& life,
+                         const Amplifications& raised) {
+  return worst_station(input, raised, [&](const Swing& swing) {
+    return input.material.rule == StressRule::direct_and_shear ? anisotropic(input, life, swing)
+                                                               : isotropic(input, life, swing);
   });
 }
 
-FatigueSeverity worst_weld(const CheckInput& input) {
-  return worst_station(input, [&](const StationStresses& s) { return welded(input, s); });
+FatigueSeverity worst_weld(const CheckInput& input, const Amplifications& raised) {
+  return worst_station(input, raised, [&](const Swing& swing) { return welded(input, swing); });
 }
 
 }  // namespace bismar::mechanics

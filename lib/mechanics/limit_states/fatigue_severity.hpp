@@ -2,6 +2,7 @@
 #pragma once
 
 #include "mechanics/limit_states/fatigue_resistance.hpp"
+#include "mechanics/limit_states/second_order.hpp"
 
 #include <bismar/mechanics/fatigue.hpp>
 #include <bismar/mechanics/limit_state.hpp>
@@ -22,7 +23,7 @@ struct StressMultipliers {
 /// The stresses that count at one station and what they use up, before the factor.
 struct FatigueSeverity {
   const Station* station = nullptr;
-  InternalForces forces;   ///< There, own mass included.
+  InternalForces forces;   ///< There, own mass and the rise by compression included.
   bool shear = false;      ///< Anisotropic: the shear part.
   double amplitude = 0.0;  ///< Size and load factors are in it [Pa].
   double mean = 0.0;       ///< Of tension [Pa].
@@ -48,8 +49,13 @@ struct StressLife {
   explicit StressLife(const CheckInput& input);
 };
 
-/// The station that uses up most.
-[[nodiscard]] FatigueSeverity worst_of(const CheckInput& input, const StressLife& life);
-[[nodiscard]] FatigueSeverity worst_weld(const CheckInput& input);
+/// The station that uses up most. Of a member that is not unstable.
+///
+/// The swing is that of the amplified moments between the whole load case and stress_ratio times
+/// it; where the other end is in tension as if the rise held there too, on the safe side.
+[[nodiscard]] FatigueSeverity worst_of(const CheckInput& input,
+                                       const StressLife& life,
+                                       const Amplifications& raised);
+[[nodiscard]] FatigueSeverity worst_weld(const CheckInput& input, const Amplifications& raised);
 
 }  // namespace bismar::mechanics

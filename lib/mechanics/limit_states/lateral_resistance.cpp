@@ -10,6 +10,8 @@
 
 #include <algorithm>
 #include <cmath>
+#include <limits>
+#include <numbers>
 #include <string>
 #include <vector>
 
@@ -34,6 +36,45 @@ double load_ratio(Support support) {
   throw InternalError("support without a load ratio");
 }
 
+/// How strongly the loads twist over how strongly they bend: load_share L / M_0 [-].
+double load_over_moment(const MomentShape& moment, double length) {
+  if (moment.largest <= 0.0 || moment.load_share <= 0.0 || std::isinf(moment.largest)) {
+    return 0.0;
+  }
+  // The quotient first: loads near the largest number must not overflow in a product.
+  return std::min(moment.load_share / moment.largest * length, std::numeric_limits<double>::max());
+}
+
+/// C2 over C1 of one term of Ritz's method over load_share L / M_0, set to a central load.
+constexpr double one_term = 1.153 / (std::numbers::pi * std::numbers::pi);
+
+/// C2 with C1 = 1 between supports where own mass joins loads whose own ratio is `loads`. Sums of
+/// both have at most the sum of the ratios, and where both bend the middle at most the larger ratio
+/// of load to moment there.
+double ratio_with_own_mass(const LoadEffects& effects, double loads) {
+  const double least = load_ratio(effects.support_z);
+  if (effects.support_z != Support::pinned_pinned) {
+    return std::max(least, loads);
+  }
+  constexpr double own = 4.0 * one_term;  // of q: load_share q L / 2, M_0 q L^2 / 8
+  const MomentShape& moment = effects.moment_y;
+  const double middle = std::abs(moment.quarters[1]);
+  const double at_middle =
+      middle > 0.0 ? loads * (moment.largest / middle) : std::numeric_limits<double>::infinity();
+  return std::max(least, std::min(loads + own, std::max(at_middle, own)));
+}
+
+/// load_share L / M_0 of own mass on a member with an overhang.
+double own_load_over_moment(const LoadEffects& effects, double length) {
+  double largest = 0.0;
+  for (const Station& station : effects.stations) {
+    largest = std::max(largest, station.own.M_y);
+  }
+  const double span = *effects.second_support;
+  const double beyond = length - span;
+  return largest > 0.0 ? (span * span / 6.0 + beyond * beyond / 2.0) / largest : 0.0;
+}
+
 std::string describe(const LateralShape& shape) {
   using Basis = LateralShape::Basis;
   const std::string C1 = number(shape.factors.C1);
@@ -42,9 +83,9 @@ std::string describe(const LateralShape& shape) {
     case Basis::falling_cantilever:
       return "Cantilever, moment falling from the root: k = 1, C1 = " + C1 + ", C2 = " + C2;
     case Basis::cantilever:
-      return "Cantilever, moment not falling from the root: k = 2, C1 = " + C1;
+      return "Cantilever, moment not falling from the root: k = 2, C1 = " + C1 + ", C2 = " + C2;
     case Basis::overhang:
-      return "Overhang: k = 2, C1 = 1 on the whole length, on the safe side";
+      return "Overhang: k = 2, C1 = 1, C2 = " + C2 + " on the whole length, on the safe side";
     case Basis::linear:
       return "Moment linear between the ends: C1 = " + C1;
     case Basis::quarters:
@@ -60,16 +101,10 @@ double lateral_modulus(const MemberMaterial& material) {
                                         : needed(material.E, Symbol::E);
 }
 
-double lateral_shear_modulus(const MemberMaterial& material) {
-  const double G = stability_shear_modulus(material);
-  return is_timber(material.column_law) ? std::min(G, needed(material.E_05, Symbol::E_05) / 16.0)
-                                        : G;
-}
-
 double critical_moment(const CheckInput& input, const LateralShape& shape) {
   const SectionProperties& section = input.section;
   const double E = lateral_modulus(input.material);
-  const double G = lateral_shear_modulus(input.material);
+  const double G = buckling_shear_modulus(input.material);
   if (section.family == SectionFamily::tee) {
     // The formula's constant holds E/G = 2.6; a lower G counts as a lower E.
     return tee_critical_moment(
@@ -137,41 +172,51 @@ LateralShape lateral_shape(const LoadEffects& effects, double length) {
   using Basis = LateralShape::Basis;
   const MomentShape& moment = effects.moment_y;
   const bool own_mass = effects.acceleration_z != 0.0;
+  const double loads = load_over_moment(moment, length);
   const auto shape = [](double of_shape, double of_load, double k, Basis basis) {
-    return LateralShape{.factors = {.C1 = of_shape, .C2 = of_load}, .k = k, .basis = basis};
+    const double finite = std::min(of_load, std::numeric_limits<double>::max());
+    return LateralShape{.factors = {.C1 = of_shape, .C2 = finite}, .k = k, .basis = basis};
   };
   if (effects.support_z == Support::cantilever) {
     return at_most(moment, 0.75, 0.5, 0.25)
-               ? shape(1.0, load_ratio(Support::cantilever), 1.0, Basis::falling_cantilever)
-               : shape(1.0, 0.0, 2.0, Basis::cantilever);
+               ? shape(1.0,
+                       load_ratio(Support::cantilever) * std::max(1.0, loads),
+                       1.0,
+                       Basis::falling_cantilever)
+               : shape(1.0, 0.5 * (loads + (own_mass ? 1.0 : 0.0)), 2.0, Basis::cantilever);
   }
   if (overhangs(effects, length)) {
-    return shape(1.0, 0.0, 2.0, Basis::overhang);
+    const double own = own_mass ? own_load_over_moment(effects, length) : 0.0;
+    return shape(1.0, 0.5 * (loads + own), 2.0, Basis::overhang);
   }
   if (own_mass) {
-    return shape(1.0, load_ratio(effects.support_z), 1.0, Basis::own_mass);
+    return shape(1.0, ratio_with_own_mass(effects, one_term * loads), 1.0, Basis::own_mass);
   }
   if (moment.end_ratio) {
     return shape(linear_moment_factor(*moment.end_ratio), 0.0, 1.0, Basis::linear);
   }
   double C1 = 1.0;
-  if (moment.largest > 0.0) {
-    const QuarterMoments quarters{.largest = moment.largest,
-                                  .quarter = moment.quarters[0],
-                                  .middle = moment.quarters[1],
-                                  .three_quarters = moment.quarters[2]};
+  if (moment.largest > 0.0 && std::isfinite(moment.largest)) {
+    const QuarterMoments quarters{.largest = 1.0,
+                                  .quarter = moment.quarters[0] / moment.largest,
+                                  .middle = moment.quarters[1] / moment.largest,
+                                  .three_quarters = moment.quarters[2] / moment.largest};
     C1 = std::clamp(
         std::min(quarter_point_moment_factor(quarters), quadratic_moment_factor(quarters)),
         1.0,
         2.6);
   }
-  return shape(C1, load_ratio(effects.support_z) * C1, 1.0, Basis::quarters);
+  const double ratio = std::max(load_ratio(effects.support_z), one_term * loads);
+  return shape(C1, ratio * C1, 1.0, Basis::quarters);
 }
 
 LateralResistance lateral_resistance(const CheckInput& input) {
   LateralResistance r;
   r.shape = lateral_shape(input.effects, input.length);
   r.critical = critical_moment(input, r.shape);
+  if (r.critical <= 0.0) {
+    return r;  // loads beyond all measure: nothing is carried
+  }
   const MemberMaterial& material = input.material;
   const bool timber = is_timber(material.column_law);
   if (!timber && !is_ductile_column(material)) {
@@ -213,10 +258,8 @@ std::vector<std::string> lateral_steps(const CheckInput& input, const LateralRes
              "(C2 z_g)^2) - C2 z_g] with k L = ") +
       millimetres(r.shape.k * input.length) +
       ", E = " + gigapascals(lateral_modulus(input.material)) + ", G = " +
-      (is_timber(input.material.column_law) ? gigapascals(lateral_shear_modulus(input.material))
-                                            : stability_shear_modulus_text(input.material)) +
-      ", I_z = " + fourth_millimetres(s.I_z) + ", I_t = " + fourth_millimetres(s.I_t) + ": " +
-      newton_metres(r.critical) + ".");
+      buckling_shear_modulus_text(input.material) + ", I_z = " + fourth_millimetres(s.I_z) +
+      ", I_t = " + fourth_millimetres(s.I_t) + ": " + newton_metres(r.critical) + ".");
   if (r.slenderness == 0.0) {
     steps.emplace_back("The material has no curve: M_cr itself is the limit.");
     return steps;

@@ -40,17 +40,21 @@ struct LateralShape {
 ///
 /// - Cantilever whose moment falls from the root at least like that of a tip load: k = 1, C1 = 1,
 ///   C2 = 1.6. Against critical_load_factor() with the load at the top edge safe by a factor of
-///   1.04 to 3 for a tip load, of up to 6 for others. Any other: k = 2, C1 = 1, exact for one
-///   moment over the length.
-/// - With an overhang: k = 2, C1 = 1 on the whole length, on the safe side.
+///   1.04 to 3 for a tip load, of up to 6 for others. Where the loads alone would bend it more (a
+///   moment of the other sense acts too) C2 rises with load_share L / M_0. Any other: k = 2, C1 =
+///   1, exact for one moment over the length, C2 = load_share L / (2 M_0): f^2 / f_M^2 + f / f_q =
+///   1 with the factors f_M of the moment and f_q of the torques alone is never above f, as the
+///   energies add; f_q by St Venant torsion to each load.
+/// - With an overhang: k = 2, C1 = 1 on the whole length, C2 likewise, on the safe side.
 /// - Linear moment without a load between the supports: C1 of linear_moment_factor(), C2 = 0.
 /// - Else the lesser C1 of quarter_point_moment_factor() and quadratic_moment_factor(), at most
-///   2.6, and C2 = r C1 with r = 0.54 (pinned_pinned), 0.65 (fixed_pinned), 0.98 (fixed_fixed): the
-///   largest of one load anywhere and of a uniform load, by C2 = C1 L / (pi^2 M_0) integral of
-///   q sin^2(pi x/L) (Ritz, one term) set to the tabulated 0.630 / 1.348 of a central load. At most
-///   2 % above critical_load_factor() in the tests. Loads that act against each other may have
-///   more.
-/// - Where own mass acts across, C1 = 1, as its share is not known before the size.
+///   2.6, and C2 = r C1 with r = 1.153 L load_share / (pi^2 M_0) (Ritz, one term, set to the
+///   tabulated 0.630 / 1.348 of a central load), at least 0.54 (pinned_pinned), 0.65
+///   (fixed_pinned), 0.98 (fixed_fixed): the largest of one load anywhere and of a uniform load
+///   without end moments. Loads that act against each other count with their magnitudes, on the
+///   safe side. At most 3 % above critical_load_factor() in the tests.
+/// - Where own mass acts across, C1 = 1, as its share is not known before the size; between pins r
+///   covers any share of it, with a fixed end it is the larger one of the loads and of own mass.
 [[nodiscard]] LateralShape lateral_shape(const LoadEffects& effects, double length);
 
 /// Resistance against turning aside.

@@ -21,6 +21,11 @@ bool bends_about_y(const LoadEffects& effects) {
   });
 }
 
+/// M_y over M_b: +infinity where nothing is carried.
+double share_about_y(const CheckInput& input, double moment) {
+  return moment > 0.0 ? input.factor * moment / lateral_resistance(input).load : 0.0;
+}
+
 /// What bending about the weak axis takes of the resistance. EN 1995-1-1 6.1.6 lets a rectangle
 /// count it with 0.7; a metal counts it whole, as in EN 1993-1-1 (6.61) with N = 0; where M_cr is
 /// the limit it is no part of it.
@@ -61,8 +66,7 @@ class LateralTorsionalBuckling final : public LimitState {
   }
   double utilisation(const CheckInput& input) const override {
     const PeakMoments moments = peak_moments(input);
-    return input.factor * moments.M_y / lateral_resistance(input).load +
-           share_about_z(input, moments.M_z);
+    return share_about_y(input, moments.M_y) + share_about_z(input, moments.M_z);
   }
   Explanation explain(const CheckInput& input) const override;
   /// M_cr / W = k^4 (a k^2 + b) / (k^3 [sqrt(c k^2 + b) + d k]) with positive constants, a rising
@@ -92,7 +96,7 @@ Explanation LateralTorsionalBuckling::explain(const CheckInput& input) const {
   const PeakMoments moments = peak_moments(input);
   const LateralResistance r = lateral_resistance(input);
   const double about_z = share_about_z(input, moments.M_z);
-  const double about_y = input.factor * moments.M_y / r.load;
+  const double about_y = share_about_y(input, moments.M_y);
   const double u = utilisation(input);
   Explanation text;
   text.line = "Lateral-torsional buckling: " + number(input.factor) + " x " +

@@ -20,6 +20,7 @@ const LimitState& lateral_torsional_buckling_limit_state();
 const LimitState& compression_bending_limit_state();
 const LimitState& eccentric_compression_limit_state();
 const LimitState& wall_slenderness_limit_state();
+const LimitState& shear_buckling_limit_state();
 const LimitState& slenderness_limit_state();
 const LimitState& net_section_limit_state();
 const LimitState& weld_zone_limit_state();

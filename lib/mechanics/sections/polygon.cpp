@@ -113,6 +113,11 @@ SectionProperties polygon(std::span<const SectionPoint> outer,
   return section;
 }
 
+void check_polygon(std::span<const SectionPoint> outer,
+                   std::span<const std::vector<SectionPoint>> holes) {
+  static_cast<void>(mechanics::checked_rings(outer, holes));
+}
+
 SectionPoint polygon_centroid(std::span<const SectionPoint> outer,
                               std::span<const std::vector<SectionPoint>> holes) {
   const SectionPoint centroid = centroid_of(mechanics::checked_rings(outer, holes));

@@ -441,6 +441,10 @@ std::string why_text(const Answer& answer, std::string_view currency, const Text
                      2);
     out += "\n" + report::utilisation_table(d, options);
     out += listed("How they come about", answer.checks, options);
+    if (!answer.index.empty()) {
+      out += listed(
+          "Its index: what a better material or the next size would bring", answer.index, options);
+    }
     out += "\n" + report::cost_table(d, currency, options);
     if (!d.cost_breakdown.blank.empty()) {
       out += paragraph("Bought as " + d.cost_breakdown.blank + ".", options.width);

@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/explain.hpp"
+#include "sizing/index_lines.hpp"
 #include "sizing/words.hpp"
 
 #include <bismar/error.hpp>
@@ -238,6 +239,8 @@ class Asked {
         });
     answer_.checks = limit_lines(*solved_.problem, found->group, design);
     answer_.sources = provenance_lines(*solved_.problem, found->group, design);
+    answer_.index = index_lines(
+        design, solved_.problem->part(), solved_.problem->catalogue(), solved_.problem->settings());
   }
 
   void infeasible() {

@@ -135,3 +135,16 @@ TEST_CASE("why answers for every material of the starter table") {
   }
   CHECK(met.size() >= 3);
 }
+
+TEST_CASE("why tells the index of the best design") {
+  Part part = test::small_lever();
+  part.limits.routes = {"forging"};
+  part.limits.materials = {"steel-a"};
+  part.limits.deflection.reset();
+  const auto free = why("steel-a", part, test::small_catalogue());
+  REQUIRE(free.index.size() == 1);
+  // A bar in bending held by strength: mass goes with rho / sigma^(2/3).
+  CHECK(free.index[0].find("Held by yield") == 0);
+  CHECK(free.index[0].find("density, exponent 1.00") != std::string::npos);
+  CHECK(free.index[0].find("yield strength, exponent -0.667") != std::string::npos);
+}

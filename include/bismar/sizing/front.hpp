@@ -77,6 +77,8 @@ struct Answer {
   /// How each limit state of that design comes about, a line each; the steps of the governing one
   /// follow its line, indented by two spaces.
   std::vector<std::string> checks;
+  /// What a better material or the next size would bring (see design_indices), a sentence each.
+  std::vector<std::string> index;
   /// The numbers that the design rests on, each with its table, line, source, basis and evidence.
   std::vector<std::string> sources;
 };

@@ -1,4 +1,5 @@
 // SPDX-License-Identifier: MIT
+#include "mechanics/limit_states/direct_stress.hpp"
 #include "mechanics/limit_states/list.hpp"
 #include "mechanics/limit_states/own_mass.hpp"
 #include "mechanics/limit_states/value.hpp"
@@ -28,24 +29,6 @@ bool is_sheared(const LoadEffects& effects) {
            return station.forces.V_y != 0.0 || station.forces.V_z != 0.0 ||
                   station.own.V_y != 0.0 || station.own.V_z != 0.0;
          });
-}
-
-double direct_ratio(const StationStresses& s, const MemberMaterial& material) {
-  double ratio = 0.0;
-  if (s.axial > 0.0) {
-    ratio += s.axial / needed(material.tensile, Symbol::tensile);
-  } else if (s.axial < 0.0) {
-    ratio -= s.axial / needed(material.compressive, Symbol::compressive);
-  }
-  if (s.bending > 0.0) {
-    ratio += s.bending / bending_strength(material);
-  }
-  return ratio;
-}
-
-/// Cracks narrow the section for the shear of bending only.
-double shear_stress(const StationStresses& s, const MemberMaterial& material) {
-  return std::sqrt(s.shear_y * s.shear_y + s.shear_z * s.shear_z) / material.k_cr + s.torsion;
 }
 
 double shear_ratio(const StationStresses& s, const MemberMaterial& material) {

@@ -1,4 +1,5 @@
 // SPDX-License-Identifier: MIT
+#include "mechanics/limit_states/direct_stress.hpp"
 #include "mechanics/limit_states/list.hpp"
 #include "mechanics/limit_states/own_mass.hpp"
 #include "mechanics/limit_states/second_order.hpp"
@@ -124,18 +125,9 @@ Worst worst_point(const CheckInput& input, const StationStresses& stresses) {
 
 /// Of one station, anisotropic: as direct and shear strength have it for the full section.
 Worst worst_part(const MemberMaterial& material, const StationStresses& s) {
-  Worst direct{.mode = Mode::direct, .stresses = s, .ratio = 0.0};
-  if (s.axial > 0.0) {
-    direct.ratio += s.axial / needed(material.tensile, Symbol::tensile);
-  } else if (s.axial < 0.0) {
-    direct.ratio -= s.axial / needed(material.compressive, Symbol::compressive);
-  }
-  if (s.bending > 0.0) {
-    direct.ratio += s.bending / bending_strength(material);
-  }
+  Worst direct{.mode = Mode::direct, .stresses = s, .ratio = direct_ratio(s, material)};
   Worst shear{.mode = Mode::shear, .stresses = s};
-  shear.stress =
-      std::sqrt(s.shear_y * s.shear_y + s.shear_z * s.shear_z) / material.k_cr + s.torsion;
+  shear.stress = shear_stress(s, material);
   if (shear.stress > 0.0) {
     shear.strength = needed(material.shear, Symbol::shear);
     shear.ratio = shear.stress / shear.strength;

@@ -59,14 +59,19 @@ int run(const Options& options) {
     require_writable(options.output);
   }
 
+  // Every reason can only be told of candidates that were examined.
+  Settings settings = job.settings;
+  if (options.explain && options.format == "text") {
+    settings.explain = Explain::full;
+  }
   std::vector<PartResult> results;
   {
     ProgressLine progress;
     for (const std::size_t index : parts) {
       const Part& part = job.parts[index];
       PartResult found;
-      found.result = front(part, job.catalogue, job.settings, progress.run_options());
-      found.ruler = exchange_ruler(found.result, part, job.catalogue, Per::material, job.settings);
+      found.result = front(part, job.catalogue, settings, progress.run_options());
+      found.ruler = exchange_ruler(found.result, part, job.catalogue, Per::material, settings);
       results.push_back(std::move(found));
     }
   }

@@ -40,6 +40,9 @@ void check_variable(const Variable& variable, const std::string& where, FaultLis
     faults.add(Code::not_finite, where, "A bound is not finite. Bound the variable on both sides.");
   } else if (variable.lower > variable.upper) {
     faults.add(Code::out_of_range, where, "The lower bound lies above the upper one.");
+  } else if (variable.kind == Variable::Kind::integer &&
+             std::ceil(variable.lower) > std::floor(variable.upper)) {
+    faults.add(Code::out_of_range, where, "No whole number lies between the bounds.");
   }
 }
 

@@ -24,6 +24,11 @@ double value_at(const Variable& variable, double share) {
   }
   const double lower = variable.lower;
   const double upper = variable.upper;
+  if (variable.kind == Variable::Kind::integer) {
+    const double first = std::ceil(lower);
+    const double last = std::floor(upper);
+    return std::clamp(first + std::floor(share * (last - first + 1.0)), first, last);
+  }
   const double x = lower > 0.0 && upper > widest_linear_ratio * lower
                        ? lower * std::pow(upper / lower, share)
                        : lower * (1.0 - share) + upper * share;

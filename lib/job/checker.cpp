@@ -43,7 +43,11 @@ std::string describe(const Format& format) {
                                               : " as a text with its unit, such as ") +
              '"' + std::string(example_of(format.kind)) + '"';
     case Type::range:
-      return "a range of " + std::string(usual_units(format.kind)) + " as a text \"low..high\"";
+      return takes_plain_number(format.kind)
+                 ? std::string(phrase_of(format.kind)) +
+                       ", such as 0.5, or a range as a text \"low..high\""
+                 : "a range of " + std::string(usual_units(format.kind)) +
+                       " as a text \"low..high\"";
     case Type::word:
       return in_words(views(format.words));
     case Type::list:
@@ -67,13 +71,13 @@ bool takes(const Format& format, Kind kind) {
   switch (format.type) {
     case Type::text:
     case Type::word:
-    case Type::range:
       return kind == Kind::text;
     case Type::boolean:
       return kind == Kind::boolean;
     case Type::whole:
       return kind == Kind::number;
     case Type::quantity:
+    case Type::range:
       return kind == Kind::text || (kind == Kind::number && takes_plain_number(format.kind));
     case Type::list:
       return kind == Kind::list;

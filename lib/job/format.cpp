@@ -167,6 +167,20 @@ Format settings() {
            word(ends,
                 "Which value of a range of routes, finishes and operations is used; default "
                 "geometric mid.")),
+       key("explain",
+           word({"front", "full"},
+                "front (default): what cannot come near the front is not examined further; full: "
+                "every candidate is, so that each exclusion has its reason.")),
+       key("epsilon",
+           quantity(QuantityKind::ratio,
+                    Sign::positive,
+                    "How far, in mass and in cost, a design of shapes with several free sizes may "
+                    "lie before the front; up to 0.1, default 0.001.")),
+       key("delta",
+           quantity(QuantityKind::ratio,
+                    Sign::positive,
+                    "The margin to every limit of the designs that this holds for; up to 0.01, "
+                    "default 1e-6.")),
        key("near", ratio("Designs within this of the front are kept; default 5 %.")),
        key("fold", ratio("Designs within this are shown as one; default 2 %.")),
        key("doubtful_sizes", yes_or_no("Offers stock sizes that are marked doubtful.")),

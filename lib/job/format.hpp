@@ -32,7 +32,7 @@ struct Format {
     boolean,
     whole,     ///< One of `numbers`, as a plain number.
     quantity,  ///< A number with its unit, as text; ratios and counts also as a plain number.
-    range,     ///< "low..high" with a unit, as text.
+    range,     ///< "low..high" with a unit, as text; of a ratio also one value, as of a quantity.
     word,      ///< One of `words`.
     list,      ///< Of `item`.
     object,    ///< With `keys`.

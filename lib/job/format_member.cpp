@@ -5,6 +5,8 @@
 #include "member_words.hpp"
 
 #include <bismar/mechanics/limit_state.hpp>
+#include <bismar/quantity/format.hpp>
+#include <bismar/sizing/part.hpp>
 
 #include <utility>
 
@@ -32,7 +34,7 @@ Format sizes() {
                       QuantityKind::length, Sign::positive, "Sizes are whole multiples of this."))},
               "Sizes in steps."),
        list_of(quantity(QuantityKind::length, Sign::positive, "One size."), "These sizes only.")},
-      "Which sizes can be made or bought.");
+      "Which sizes can be made or bought: each free dimension of the shape is taken from them.");
 }
 
 Format corners(std::string about) {
@@ -41,14 +43,22 @@ Format corners(std::string about) {
       std::move(about));
 }
 
+/// A ratio: fixed, a range, or left out and free.
+Format ratio(const RatioWords& words, SectionFamily family) {
+  if (words.free_key.empty()) {
+    return quantity(QuantityKind::ratio, Sign::not_negative, std::string(words.about));
+  }
+  const Ratio usual = default_ratio(family, words.free_key);
+  return range(QuantityKind::ratio,
+               std::string(words.about) +
+                   " A number fixes it, in a range \"low..high\" the sizing is free; default " +
+                   format_number(usual.low) + ".." + format_number(usual.high) + ".");
+}
+
 Format::Variant shape(const ShapeWords& words) {
   std::vector<Key> keys;
-  for (const RatioWords& ratio : words.ratios) {
-    Format format = quantity(QuantityKind::ratio,
-                             ratio.required ? Sign::positive : Sign::not_negative,
-                             std::string(ratio.about));
-    keys.push_back(ratio.required ? required(std::string(ratio.key), std::move(format))
-                                  : key(std::string(ratio.key), std::move(format)));
+  for (const RatioWords& one : words.ratios) {
+    keys.push_back(key(std::string(one.key), ratio(one, words.family)));
   }
   if (words.family == SectionFamily::polygon) {
     keys.push_back(
@@ -59,7 +69,11 @@ Format::Variant shape(const ShapeWords& words) {
                      range(QuantityKind::length, "Allowed outside size: \"low..high\".")));
   keys.push_back(key("sizes", sizes()));
   const std::string tag(words.tag);
-  return {tag, {required(tag, object(std::move(keys), "A shape of one free size."))}};
+  const std::string about = words.ratios.empty()
+                                ? "A shape of one free size."
+                                : "A shape; its size is free, and so is each ratio that is a range "
+                                  "or left out.";
+  return {tag, {required(tag, object(std::move(keys), about))}};
 }
 
 Format shapes() {

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "job_reader.hpp"
 
+#include <bismar/quantity/format.hpp>
 #include <bismar/quantity/parse.hpp>
 
 #include <algorithm>
@@ -125,6 +126,24 @@ void JobReader::read_settings(const JsonValue* value) {
   }
   if (const std::optional<std::string> end = text(*value, "route_end")) {
     settings.route_end = range_end_of(*end);
+  }
+  if (const std::optional<std::string> explain = text(*value, "explain")) {
+    settings.explain = *explain == "full" ? Explain::full : Explain::front;
+  }
+  set(settings.epsilon, *value, "epsilon", QuantityKind::ratio);
+  set(settings.delta, *value, "delta", QuantityKind::ratio);
+  for (const auto& [key, largest] : {std::pair<std::string_view, double>{"epsilon", 0.1},
+                                     std::pair<std::string_view, double>{"delta", 0.01}}) {
+    const std::optional<double> read = quantity(*value, key, QuantityKind::ratio);
+    if (read.has_value() && *read > largest) {
+      const JsonValue& found = *value->find(key);
+      const std::string most = format_number(largest);
+      checker_.add(Code::out_of_range,
+                   found,
+                   shown(found),
+                   "above 0, at most " + most,
+                   shown(found) + " is too wide a margin. Write a number up to " + most + '.');
+    }
   }
   set(settings.near, *value, "near", QuantityKind::ratio);
   set(settings.fold, *value, "fold", QuantityKind::ratio);

@@ -54,6 +54,8 @@ class JobReader {
   [[nodiscard]] Part read_part(const JsonValue& value);
   void read_member(const JsonValue& value, Member& member);
   void read_shape(const JsonValue& value, Member& member);
+  /// One number, or a range as text.
+  [[nodiscard]] static Ratio read_ratio(const JsonValue& value);
   void read_sizes(const JsonValue* value, const Shape& shape, Sizes& sizes);
   void read_load_case(const JsonValue& value, const Member& member, LoadCase& load_case);
   void read_load(const JsonValue& value, double length, LoadCase& load_case);

@@ -103,18 +103,12 @@ void JobReader::read_details(const JsonValue& value, double length, MemberDetail
 
 namespace {
 
-/// The ratio of a shape that a key fixes.
-std::optional<double>& ratio_field(Shape& shape, std::string_view key) {
-  if (key == "height_to_width") {
-    return shape.height_to_width;
-  }
-  if (key == "web_to_height") {
-    return shape.web_to_height;
-  }
-  if (key == "flange_to_height") {
-    return shape.flange_to_height;
-  }
-  return key == "root_radius_to_height" ? shape.root_radius_to_height : shape.wall_to_height;
+/// The ratio of a shape by its key there.
+std::optional<Ratio>& ratio_field(Shape& shape, std::string_view key) {
+  return key == "height_to_width"    ? shape.height_to_width
+         : key == "web_to_height"    ? shape.web_to_height
+         : key == "flange_to_height" ? shape.flange_to_height
+                                     : shape.wall_to_height;
 }
 
 }  // namespace
@@ -131,7 +125,11 @@ void JobReader::read_shape(const JsonValue& value, Member& member) {
     Shape shape;
     shape.family = words.family;
     for (const RatioWords& ratio : words.ratios) {
-      set(ratio_field(shape, ratio.key), *options, ratio.key, QuantityKind::ratio);
+      if (ratio.free_key.empty()) {
+        set(shape.root_radius_to_height, *options, ratio.key, QuantityKind::ratio);
+      } else if (const JsonValue* given = get(*options, ratio.key); given != nullptr) {
+        ratio_field(shape, ratio.free_key) = read_ratio(*given);
+      }
     }
     if (const JsonValue* outline = get(*options, "outline"); outline != nullptr) {
       shape.outline = read_corners(*outline);
@@ -149,6 +147,14 @@ void JobReader::read_shape(const JsonValue& value, Member& member) {
     read_sizes(get(*options, "sizes"), shape, shape.sizes);
     member.shapes.push_back(std::move(shape));
   }
+}
+
+Ratio JobReader::read_ratio(const JsonValue& value) {
+  if (value.is(Kind::number)) {
+    return value.number;
+  }
+  const QuantityRange read = parse_range(value.text, QuantityKind::ratio);
+  return {read.low, read.high};
 }
 
 std::vector<SectionPoint> JobReader::read_corners(const JsonValue& value) {

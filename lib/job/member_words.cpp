@@ -6,11 +6,12 @@ namespace bismar::detail {
 namespace {
 
 constexpr RatioWords proportion{
-    "height_to_width", true, "Height over width, both outside; height is along z."};
-constexpr RatioWords wall{"wall_to_height", true, "Wall thickness over height."};
-constexpr RatioWords web{"web_to_height", true, "Web thickness over height."};
-constexpr RatioWords flange{"flange_to_height", true, "Flange thickness over height."};
-constexpr RatioWords root{"root_radius_to_height", false, "Root radius over height; default 0."};
+    "height_to_width", "height_to_width", "Height over width, both outside; height is along z."};
+constexpr RatioWords wall{"wall_to_height", "wall_to_height", "Wall thickness over height."};
+constexpr RatioWords web{"web_to_height", "web_to_height", "Web thickness over height."};
+constexpr RatioWords flange{
+    "flange_to_height", "flange_to_height", "Flange thickness over height."};
+constexpr RatioWords root{"root_radius_to_height", "", "Root radius over height; default 0."};
 
 }  // namespace
 
@@ -24,7 +25,7 @@ std::span<const ShapeWords> shape_words() {
       {"round_tube",
        SectionFamily::round_tube,
        "diameter",
-       {{"wall_to_diameter", true, "Wall thickness over diameter."}}},
+       {{"wall_to_diameter", "wall_to_height", "Wall thickness over diameter."}}},
       {"elliptical_tube", SectionFamily::elliptical_tube, "height", {proportion, wall}},
       {"rectangular_tube", SectionFamily::rectangular_tube, "height", {proportion, wall}},
       {"i_section", SectionFamily::i_section, "height", {proportion, web, flange, root}},

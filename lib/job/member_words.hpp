@@ -12,10 +12,11 @@
 /// Words of the job format for members, in one place for the loader, the schema and the writer.
 namespace bismar::detail {
 
-/// A ratio that fixes a dimension of a shape.
+/// A ratio of a dimension of a shape to its height.
 struct RatioWords {
   std::string_view key;
-  bool required = true;
+  /// Its key in Shape and default_ratio(); empty for the root radius, which is never free.
+  std::string_view free_key;
   std::string_view about;
 };
 

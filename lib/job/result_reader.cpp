@@ -10,6 +10,7 @@
 #include <algorithm>
 #include <cmath>
 #include <filesystem>
+#include <limits>
 #include <utility>
 
 namespace bismar {
@@ -76,6 +77,12 @@ class ResultReader {
   double number(const JsonValue& object, const std::string& key) {
     const JsonValue* value = get(object, key, Kind::number);
     return value == nullptr ? 0.0 : value->number;
+  }
+  /// Null stands for infinity.
+  double bound(const JsonValue& object, const std::string& key) {
+    const JsonValue* value = object.find(key);
+    return value != nullptr && value->is(Kind::null) ? std::numeric_limits<double>::infinity()
+                                                     : number(object, key);
   }
   bool boolean(const JsonValue& object, const std::string& key) {
     const JsonValue* value = get(object, key, Kind::boolean);
@@ -157,8 +164,8 @@ class ResultReader {
     }
     if (row[1].is(Kind::text)) {
       candidate.stock = index_of(catalogue.stock, row[1], "stock list");
-    } else if (row[1].is(Kind::number) && row[1].number >= 0.0 &&
-               row[1].number < static_cast<double>(shapes_)) {
+    } else if (row[1].is(Kind::number) && row[1].number >= 0.0 && part_ != nullptr &&
+               row[1].number < static_cast<double>(part_->body.shapes.size())) {
       candidate.shape = static_cast<std::uint32_t>(row[1].number);
     } else {
       add(Code::out_of_range, place, "candidate", "a shape of the part");
@@ -193,6 +200,26 @@ class ResultReader {
     return static_cast<double>(item);
   }
 
+  /// As many as the shape has free dimensions; none of stock, or of a shape that is not known.
+  FreeSizes free_sizes(const Candidate& candidate, const JsonValue& value) {
+    FreeSizes sizes{};
+    if (candidate.shape == Candidate::none || part_ == nullptr) {
+      return sizes;
+    }
+    const std::size_t count = free_dimensions(part_->body.shapes[candidate.shape]).size();
+    if (!value.is(Kind::list) || value.items.size() != count) {
+      add(Code::wrong_type, value, "free_sizes", "a list of " + std::to_string(count) + " sizes");
+      return sizes;
+    }
+    for (std::size_t i = 0; i < count; ++i) {
+      if (!value.items[i].is(Kind::number)) {
+        add(Code::wrong_type, value.items[i], "free_sizes", "a list of numbers");
+      }
+      sizes[i] = value.items[i].number;
+    }
+    return sizes;
+  }
+
   SectionProperties section(const JsonValue& value) {
     SectionProperties section;
     const std::string family = text(value, "family");
@@ -223,6 +250,9 @@ class ResultReader {
       design.size = size(design.candidate, *stored);
     } else {
       add(Code::missing, value, "size", "a number or the id of a stock size");
+    }
+    if (const JsonValue* stored = get(value, "free_sizes", Kind::list); stored != nullptr) {
+      design.free_sizes = free_sizes(design.candidate, *stored);
     }
     design.material = text(value, "material");
     design.material_name = text(value, "material_name");
@@ -316,13 +346,15 @@ class ResultReader {
   void read_part(const JsonValue& value, PartResult& part) {
     Result& result = part.result;
     result.part = text(value, "part");
-    shapes_ = 0;
+    part_ = nullptr;
     for (const Part& known : stored_.job.parts) {
       if (known.name == result.part) {
-        shapes_ = known.body.shapes.size();
+        part_ = &known;
       }
     }
     result.exact = boolean(value, "exact");
+    result.epsilon_reached = bound(value, "epsilon_reached");
+    result.delta = number(value, "delta");
     for (const JsonValue& item : list(value, "designs")) {
       result.designs.push_back(design(item));
     }
@@ -346,15 +378,16 @@ class ResultReader {
     result.undecided = texts(value, "undecided");
     result.notes = texts(value, "notes");
     for (const JsonValue& row : list(value, "others")) {
-      if (row.items.size() != 8) {
-        add(Code::wrong_type, row, "others", "a list of eight entries");
+      if (row.items.size() != 9) {
+        add(Code::wrong_type, row, "others", "a list of nine entries");
         continue;
       }
       FeasiblePoint point;
       point.candidate = candidate(row.items, row);
       point.size = size(point.candidate, row.items[5]);
-      point.mass = row.items[6].number;
-      point.cost = row.items[7].number;
+      point.free_sizes = free_sizes(point.candidate, row.items[6]);
+      point.mass = row.items[7].number;
+      point.cost = row.items[8].number;
       result.others.push_back(point);
     }
   }
@@ -364,7 +397,11 @@ class ResultReader {
       const std::string name = text(item, "part");
       for (PartResult& part : stored_.results) {
         if (part.result.part == name) {
-          part.result.telemetry = {whole(item, "evaluations"), number(item, "seconds")};
+          part.result.telemetry = {.evaluations = whole(item, "evaluations"),
+                                   .boxes = whole(item, "boxes"),
+                                   .skipped = whole(item, "skipped"),
+                                   .dominated = whole(item, "dominated"),
+                                   .seconds = number(item, "seconds")};
         }
       }
     }
@@ -373,7 +410,7 @@ class ResultReader {
   const JsonDocument& document_;
   FaultList& faults_;
   StoredResult& stored_;
-  std::size_t shapes_ = 0;
+  const Part* part_ = nullptr;  ///< The part that is read; null where the job has none such.
   bool resolved_ = true;
 };
 

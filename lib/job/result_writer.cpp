@@ -9,6 +9,8 @@
 #include <nlohmann/json.hpp>
 
 #include <cmath>
+#include <cstddef>
+#include <limits>
 #include <utility>
 
 namespace bismar {
@@ -73,10 +75,11 @@ Json cost_json(const CostBreakdown& cost) {
           {"blank", cost.blank}};
 }
 
-/// Names candidates by ids, so that a stored result outlives a change of the tables' order.
+/// Names candidates of a part by ids, so that a stored result outlives a change of the tables'
+/// order.
 class Naming {
  public:
-  explicit Naming(const Catalogue& catalogue) : catalogue_(catalogue) {}
+  Naming(const Catalogue& catalogue, const Part& part) : catalogue_(catalogue), part_(part) {}
 
   /// Material, shape (its index in the part) or stock list, route, treatment, finish.
   [[nodiscard]] Json row(const Candidate& candidate) const {
@@ -100,8 +103,21 @@ class Naming {
     return catalogue_.stock.at(candidate.stock).items.at(static_cast<std::size_t>(size)).id;
   }
 
+  /// The free dimensions beside the height, as many as the shape has.
+  [[nodiscard]] Json free_sizes(const Candidate& candidate, const FreeSizes& sizes) const {
+    Json all = Json::array();
+    if (candidate.stock == Candidate::none) {
+      const std::size_t count = free_dimensions(part_.body.shapes.at(candidate.shape)).size();
+      for (std::size_t i = 0; i < count; ++i) {
+        all.push_back(number(sizes.at(i)));
+      }
+    }
+    return all;
+  }
+
  private:
   const Catalogue& catalogue_;
+  const Part& part_;
 };
 
 Json design_json(const Design& design, const Naming& naming) {
@@ -115,6 +131,7 @@ Json design_json(const Design& design, const Naming& naming) {
   Json json{{"id", design.id},
             {"candidate", naming.row(design.candidate)},
             {"size", naming.size(design.candidate, design.size)},
+            {"free_sizes", naming.free_sizes(design.candidate, design.free_sizes)},
             {"material", design.material},
             {"material_name", design.material_name},
             {"shape", design.shape},
@@ -192,6 +209,21 @@ Json funnel_json(const Funnel& funnel) {
           {"lines", std::move(lines)}};
 }
 
+/// Null for infinity: a search that was not finished proves no bound.
+Json bound_json(double bound) {
+  return bound == std::numeric_limits<double>::infinity() ? Json(nullptr) : number(bound);
+}
+
+Json telemetry_json(const Result& result) {
+  const Telemetry& work = result.telemetry;
+  return {{"part", result.part},
+          {"evaluations", work.evaluations},
+          {"boxes", work.boxes},
+          {"skipped", work.skipped},
+          {"dominated", work.dominated},
+          {"seconds", number(work.seconds)}};
+}
+
 Json part_json(const PartResult& part, const Naming& naming) {
   const Result& result = part.result;
   Json designs = Json::array();
@@ -202,12 +234,15 @@ Json part_json(const PartResult& part, const Naming& naming) {
   for (const FeasiblePoint& point : result.others) {
     Json row = naming.row(point.candidate);
     row.push_back(naming.size(point.candidate, point.size));
+    row.push_back(naming.free_sizes(point.candidate, point.free_sizes));
     row.push_back(number(point.mass));
     row.push_back(number(point.cost));
     others.push_back(std::move(row));
   }
   Json json{{"part", result.part},
             {"exact", result.exact},
+            {"epsilon_reached", bound_json(result.epsilon_reached)},
+            {"delta", number(result.delta)},
             {"front_count", result.front_count},
             {"designs", std::move(designs)}};
   if (part.ruler.has_value()) {
@@ -217,7 +252,7 @@ Json part_json(const PartResult& part, const Naming& naming) {
   json["undecided"] = names_of(result.undecided);
   json["notes"] = names_of(result.notes);
   json["others_columns"] = {
-      "material", "shape", "route", "treatment", "finish", "size", "mass", "cost"};
+      "material", "shape", "route", "treatment", "finish", "size", "free_sizes", "mass", "cost"};
   json["others"] = std::move(others);
   return json;
 }
@@ -250,7 +285,6 @@ void write_lines(const Json& json, std::size_t indent, std::string& out) {
 }  // namespace
 
 std::string result_json(const Job& job, std::span<const PartResult> results) {
-  const Naming naming(job.catalogue);
   Json sources = Json::array();
   for (const CatalogueSource& source : job.sources) {
     sources.push_back({{"kind", source.kind}, {"file", source.file}, {"digest", source.digest}});
@@ -258,11 +292,9 @@ std::string result_json(const Job& job, std::span<const PartResult> results) {
   Json parts = Json::array();
   Json telemetry = Json::array();
   for (const PartResult& part : results) {
-    static_cast<void>(find_part(job, part.result.part));
-    parts.push_back(part_json(part, naming));
-    telemetry.push_back({{"part", part.result.part},
-                         {"evaluations", part.result.telemetry.evaluations},
-                         {"seconds", number(part.result.telemetry.seconds)}});
+    const Part& of = job.parts[find_part(job, part.result.part)];
+    parts.push_back(part_json(part, Naming(job.catalogue, of)));
+    telemetry.push_back(telemetry_json(part.result));
   }
   Json json{{"bismar_result", result_format_version},
             {"library", std::string(version())},

@@ -34,8 +34,12 @@ std::string quantity_pattern(const Format& format) {
   const std::string number = number_pattern(format.sign == detail::Sign::any);
   const bool plain = detail::takes_plain_number(format.kind);
   if (format.type == Type::range) {
-    return "^[ \\t]*" + number + "(" + unit_pattern() + ")?([.][.]|\xE2\x80\xA6)[ \\t]*" + number +
-           unit_pattern() + "$";
+    const std::string start = "^(?!.*[.][.][.])[ \\t]*" + number;  // three points are no mark
+    const std::string dots = "[ \\t]*([.][.]|\xE2\x80\xA6)[ \\t]*";
+    const std::string unit = "(" + unit_pattern() + ")?";
+    // A unit may hold any character, points too: the order of the ends is the loader's business.
+    return plain ? start + unit + "(" + dots + number + unit + ")?[ \\t]*$"
+                 : start + unit + dots + number + unit_pattern() + "$";
   }
   return "^[ \\t]*" + number + (plain ? "(" + unit_pattern() + ")?" : unit_pattern()) + "$";
 }
@@ -72,8 +76,9 @@ Json schema_of_number(const Format& format) {
 
 Json schema_of_quantity(const Format& format) {
   Json text{{"type", "string"}, {"pattern", quantity_pattern(format)}};
-  text["examples"] = {std::string(example_of(format.kind))};
-  if (format.type == Type::range || !detail::takes_plain_number(format.kind)) {
+  const bool ratio_range = format.type == Type::range && detail::takes_plain_number(format.kind);
+  text["examples"] = {ratio_range ? "0.5..2" : std::string(example_of(format.kind))};
+  if (!detail::takes_plain_number(format.kind)) {
     return text;
   }
   return Json{{"anyOf", {schema_of_number(format), std::move(text)}}};

@@ -21,11 +21,14 @@ std::string starter_job() {
       "member": {
         "length": "300 mm",
 
-        // What to try. Shapes are made to size; each has one free size, ratios are fixed.
+        // What to try. Shapes are made to size: their height (diameter, side) is free. A ratio is
+        // fixed by a number (2), free inside a range ("0.5..2"), and free inside a usual range
+        // where it is left out: then the front proves its answer within settings.epsilon.
         "shapes": [
           { "round": { "diameter": "8 mm..60 mm" } },
           // height is along z (up), width along y; "sizes" may be "continuous", "R20",
-          // { "step": "0.5 mm" } or a list such as ["20 mm", "25 mm"]
+          // { "step": "0.5 mm" } or a list such as ["20 mm", "25 mm"]: each free dimension of the
+          // shape, not only its height, is taken from them
           { "rectangle": { "height_to_width": 2, "height": "8 mm..80 mm", "sizes": { "step": "1 mm" } } }
         ],
         // Stock sizes as they are bought: lists by id, or "all".
@@ -53,6 +56,15 @@ std::string starter_job() {
       "finishes": ["none"]
     }
   ],
+
+  // How the tables are read and what is kept; left out, each has its default.
+  "settings": {
+    "near": "5 %",          // designs within this of the front are kept
+    "explain": "front"      // "full": also what cannot come near the front is examined
+    // For shapes with several free sizes: no design that holds every limit by the margin "delta"
+    // is better than the front by more than "epsilon".
+    // "epsilon": "0.1 %", "delta": 1e-6
+  },
 
   // Between which worths of a saved kilogram the choice is of interest.
   "exchange": { "mass": "0.5 EUR/kg..500 EUR/kg" }

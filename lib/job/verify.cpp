@@ -93,8 +93,12 @@ class Verifier {
     ++found_.designs;
     Design now;
     try {
-      now = evaluate(
-          part, stored_.job.catalogue, design.candidate, design.size, stored_.job.settings);
+      now = evaluate(part,
+                     stored_.job.catalogue,
+                     design.candidate,
+                     design.size,
+                     design.free_sizes,
+                     stored_.job.settings);
     } catch (const Error& error) {
       add(where, "a design", error.what());
       return;

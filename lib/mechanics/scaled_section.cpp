@@ -4,7 +4,13 @@
 namespace bismar {
 
 SectionProperties scaled(const SectionProperties& section, double factor) {
-  SectionProperties out = section;
+  SectionProperties out;
+  scale_into(section, factor, out);
+  return out;
+}
+
+void scale_into(const SectionProperties& section, double factor, SectionProperties& out) {
+  out = section;
   const double square = factor * factor;
   const double cube = square * factor;
   const double fourth = square * square;
@@ -38,7 +44,6 @@ SectionProperties scaled(const SectionProperties& section, double factor) {
     fibre.y *= factor;
     fibre.z *= factor;
   }
-  return out;
 }
 
 }  // namespace bismar

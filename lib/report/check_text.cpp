@@ -53,20 +53,38 @@ std::string sizes_text(const Sizes& sizes) {
   return {};
 }
 
+// ", height/width 1.25" where the ratio is fixed; a free one is told with the free sizes.
+std::string fixed_ratio(const std::string& what, const std::optional<Ratio>& ratio) {
+  if (!ratio || !ratio->is_fixed()) return {};
+  return ", " + what + " " + report::exact(ratio->low);
+}
+
+// "height 8.00 to 40.0 mm", and every dimension that is free beside it: "width 0.500 to 2.00 times
+// the height".
+std::string free_sizes_text(const Shape& shape, const std::string& size) {
+  const std::vector<FreeDimension> free = free_dimensions(shape);
+  std::string out = free.empty() ? "" : counted(free.size() + 1, "free size") + ": ";
+  out += size + " " + number(shape.height_min * 1e3) + " to " + mm(shape.height_max);
+  for (const FreeDimension& one : free) {
+    out += ", " + std::string(one.name) + " " + number(one.to_height.low) + " to " +
+           number(one.to_height.high) + " times the " + size;
+  }
+  return out + (free.empty() ? ", " : ", each ") + sizes_text(shape.sizes);
+}
+
 std::string shape_text(const Shape& shape) {
   std::string out(name(shape.family));
   const std::string size = size_word(shape.family);
-  if (shape.height_to_width) out += ", height/width " + report::exact(*shape.height_to_width);
-  if (shape.wall_to_height) out += ", wall/" + size + " " + report::exact(*shape.wall_to_height);
-  if (shape.web_to_height) out += ", web/height " + report::exact(*shape.web_to_height);
-  if (shape.flange_to_height) out += ", flange/height " + report::exact(*shape.flange_to_height);
+  out += fixed_ratio("height/width", shape.height_to_width);
+  out += fixed_ratio("wall/" + size, shape.wall_to_height);
+  out += fixed_ratio("web/height", shape.web_to_height);
+  out += fixed_ratio("flange/height", shape.flange_to_height);
   if (shape.root_radius_to_height) {
     out += ", root radius/height " + report::exact(*shape.root_radius_to_height);
   }
   if (!shape.outline.empty()) out += " of " + counted(shape.outline.size(), "corner");
   if (!shape.holes.empty()) out += " with " + counted(shape.holes.size(), "hole");
-  return out + ", " + size + " " + number(shape.height_min * 1e3) + " to " + mm(shape.height_max) +
-         ", " + sizes_text(shape.sizes);
+  return out + ", " + free_sizes_text(shape, size);
 }
 
 std::string support_text(Support support, const std::optional<double>& second) {

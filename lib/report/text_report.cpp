@@ -187,7 +187,10 @@ std::string cost_cell(const Design& design) {
 std::string size_cell(const Design& design, const std::string& currency) {
   std::string text = shape_and_size(design);
   if (design.buyable_size) {
-    text += "\nnext size " + number(*design.buyable_size * 1e3, 3) + " mm: ";
+    // Free dimensions beside the height keep their proportion to it.
+    const bool several = design.free_sizes[0] > 0.0;
+    text += "\nnext size " + number(*design.buyable_size * 1e3, 3) + " mm" +
+            (several ? ", same proportions: " : ": ");
     text += design.buyable_feasible ? number(design.buyable_mass) + " kg, " +
                                           money(design.buyable_cost) + " " + currency
                                     : std::string("does not pass");
@@ -346,6 +349,8 @@ std::string front_text(const Result& result,
                                                            : std::string("see the notes below.")),
                      options.width);
   }
+  const std::string promise = report::promise_line(result);
+  if (!promise.empty()) out += paragraph(promise, options.width, 2);
   out += paragraph(funnel_line(result.funnel), options.width, 2);
   if (options.reasons || options.all || result.front_count == 0) {
     const std::string reasons = reason_table(result.funnel, options.width);

@@ -2,7 +2,9 @@
 #include "report/words.hpp"
 
 #include <algorithm>
+#include <cmath>
 
+#include <bismar/quantity/format.hpp>
 #include <bismar/report/table.hpp>
 
 namespace bismar::report {
@@ -178,6 +180,37 @@ std::string cost_table(const Design& design,
   table.add_row({"total", money(cost.lines.empty() ? design.cost : cost.total), how});
   return table.text(
       options.width, 0, options.colour ? bold_on : "", options.colour ? emphasis_off : "");
+}
+
+namespace {
+
+// A share in per cent with two digits, rounded up: no bound is stated tighter than it is.
+std::string percent_up(double share) {
+  const double percent = 100.0 * share;
+  if (!(percent > 0.0)) return "0 %";
+  const double unit = std::pow(10.0, std::floor(std::log10(percent)) - 1.0);
+  return number(std::ceil(percent / unit * (1.0 - 1e-12)) * unit, 2) + " %";
+}
+
+}  // namespace
+
+std::string promise_line(const Result& result) {
+  if (!(result.delta > 0.0)) return {};
+  const std::string boxes = count(result.telemetry.boxes);
+  const std::string margin = " with a margin of " + format_number(result.delta);
+  if (!result.exact || !std::isfinite(result.epsilon_reached)) {
+    return "Front not proven complete: the search of shapes with several free sizes was not "
+           "finished. Boxes examined: " +
+           boxes + ".";
+  }
+  if (result.front_count == 0) {
+    return "Proven: no decided candidate has a design" + margin + "; boxes examined: " + boxes +
+           ".";
+  }
+  const std::string within =
+      result.epsilon_reached > 0.0 ? " within " + percent_up(result.epsilon_reached) : "";
+  return "Front complete" + within + " for every design" + margin + "; boxes examined: " + boxes +
+         ".";
 }
 
 }  // namespace bismar::report

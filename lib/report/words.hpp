@@ -36,6 +36,10 @@ std::string material_of(const Design& design);
 /// id.
 std::string choice_name(const Result& result, const std::string& choice);
 
+/// What the search of shapes with several free sizes promises, in one sentence; empty where none
+/// was made.
+std::string promise_line(const Result& result);
+
 std::string ruler_table(const Result& result,
                         const ExchangeRuler& ruler,
                         const TextOptions& options);

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/blank.hpp"
 
+#include "sizing/strength.hpp"
 #include "sizing/words.hpp"
 
 #include <bismar/sizing/cost.hpp>
@@ -135,31 +136,64 @@ std::vector<Blank> blanks(const SectionProperties& unit,
     blank.largest_size = height_max;
     return {blank};
   }
-  const double allowance = settings.machining_allowance;
+  auto all = all_blanks(length, stock, settings);
+  for (Blank& blank : all) {
+    blank.largest_size = room_in(blank, unit, settings);
+  }
+  return lightest(std::move(all));
+}
+
+std::vector<Blank> all_blanks(double length,
+                              std::span<const UsableItem> stock,
+                              const Settings& settings) {
   std::vector<Blank> bars;
   std::vector<Blank> plates;
   for (const auto& [item, list] : stock) {
     Blank blank;
     blank.item = item;
     blank.plate = list->sheet;
-    if (list->sheet) {
-      const double smaller = std::min(unit.height, unit.width);
-      blank.largest_size = (item->thickness - allowance) / smaller;
-      blank.ruling_dimension = item->thickness;
-      blank.area = item->thickness;  // per metre of width: the order of plates is that of thickness
-    } else {
-      blank.largest_size = largest_size_in(*item, unit, list->family, allowance);
-      blank.ruling_dimension = item->section.ruling_dimension;
-      blank.area = item->section.area;
-    }
+    blank.ruling_dimension = list->sheet ? item->thickness : item->section.ruling_dimension;
+    // Per metre of width: the order of plates is that of thickness.
+    blank.area = list->sheet ? item->thickness : item->section.area;
     const bool long_enough =
         item->lengths.empty() ||
         *std::max_element(item->lengths.begin(), item->lengths.end()) >= length;
-    if (blank.largest_size > 0.0 && long_enough) {
+    const double smallest =
+        list->sheet ? item->thickness : std::min(item->section.height, item->section.width);
+    if (smallest > settings.machining_allowance && long_enough) {
       (list->sheet ? plates : bars).push_back(blank);
     }
   }
-  return lightest(bars.empty() ? std::move(plates) : std::move(bars));
+  auto& out = bars.empty() ? plates : bars;
+  std::sort(out.begin(), out.end(), [](const Blank& a, const Blank& b) {
+    return a.area != b.area ? a.area < b.area : a.item->id < b.item->id;
+  });
+  return out;
+}
+
+double room_in(const Blank& blank, const SectionProperties& section, const Settings& settings) {
+  const double allowance = settings.machining_allowance;
+  return blank.plate ? (blank.item->thickness - allowance) / std::min(section.height, section.width)
+                     : largest_size_in(*blank.item, section, blank.item->section.family, allowance);
+}
+
+double strength_thickness(const SectionProperties& section, const MaterialInfo& material) {
+  // EN 10083 and its kin give the steps of hardened bar by diameter; other solids count by their
+  // equivalent diameter 4 A / U, which for a wide flat is twice its thickness (EN 10083-2, "d <= 16
+  // or t <= 8"; from memory). Walls, plates and rows that are only sold as plate count by
+  // thickness.
+  const bool solid = section.inner_perimeter == 0.0 && section.plates.empty();
+  if (solid && is_hardened_bar_grade(material)) {
+    return 4.0 * section.area / section.perimeter;
+  }
+  return section.ruling_dimension;
+}
+
+double blank_thickness(const Blank& blank, const MaterialInfo& material) {
+  if (blank.plate) {
+    return is_hardened_bar_grade(material) ? 2.0 * blank.item->thickness : blank.item->thickness;
+  }
+  return strength_thickness(blank.item->section, material);
 }
 
 std::optional<Purchase> buy(const Blank& blank,

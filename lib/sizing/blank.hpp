@@ -56,6 +56,24 @@ struct UsableItem {
                                                   const Catalogue& catalogue,
                                                   const Settings& settings);
 
+/// The dimension that the strength steps of a material are read at [m]: 4 A / U of a solid of a
+/// hardened bar grade, else the ruling dimension.
+[[nodiscard]] double strength_thickness(const SectionProperties& section,
+                                        const MaterialInfo& material);
+/// The same of a blank.
+[[nodiscard]] double blank_thickness(const Blank& blank, const MaterialInfo& material);
+
+/// Every bar that is long enough, or every plate where there is none, by rising area;
+/// `largest_size` is unset. Not for an empty stock.
+[[nodiscard]] std::vector<Blank> all_blanks(double length,
+                                            std::span<const UsableItem> stock,
+                                            const Settings& settings);
+/// How often the section, allowance included, could be enlarged and still fit into the blank; below
+/// 1 it does not fit.
+[[nodiscard]] double room_in(const Blank& blank,
+                             const SectionProperties& section,
+                             const Settings& settings);
+
 /// Blanks for a machined part of these proportions (`unit`: its section at height 1 m) and length,
 /// by rising largest size, each the lightest that holds every size up to it. Bars first; plate
 /// where the material has no bar that is long enough.

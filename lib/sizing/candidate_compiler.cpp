@@ -1,6 +1,9 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/candidate_compiler.hpp"
 
+#include "sizing/gaps.hpp"
+
+#include "sizing/bought_sizes.hpp"
 #include "sizing/derating.hpp"
 #include "sizing/words.hpp"
 
@@ -13,51 +16,23 @@
 
 namespace bismar {
 
-namespace {
-
-/// Sorts and makes unique, where values closer than a billionth are one.
-void tidy(std::vector<double>& values) {
-  std::sort(values.begin(), values.end());
-  values.erase(
-      std::unique(
-          values.begin(), values.end(), [](double a, double b) { return b - a <= 1e-9 * b; }),
-      values.end());
-}
-
-}  // namespace
-
-std::optional<Range> limited_value(const MaterialTable& table,
-                                   const PropertyLimit& limit,
-                                   std::size_t row) {
-  if (const auto known = property(limit.property)) {
-    return table.value(*known, row);
-  }
-  return table.extra(limit.property, row);
-}
-
-double limited_end(const PropertyReader& reader,
-                   const PropertyLimit& limit,
-                   const Range& range,
-                   bool at_least) {
-  if (const auto known = property(limit.property)) {
-    const auto& ends = reader.settings().range_ends;
-    if (const auto own = ends.find(*known); own != ends.end()) {
-      return range.at(own->second);
-    }
-    if (*known == Property::price || *known == Property::density) {
-      return range.at(reader.end(*known));
-    }
-  }
-  return at_least ? range.low : range.high;
-}
-
-CandidateCompiler::CandidateCompiler(SizingProblem& problem, const Candidate& candidate)
+CandidateCompiler::CandidateCompiler(SizingProblem& problem,
+                                     const Candidate& candidate,
+                                     double size,
+                                     const FreeSizes& free_sizes)
     : problem_(problem),
       out_(std::make_unique<CompiledCandidate>()),
       material_(problem.catalogue().materials.info(candidate.material)),
       route_(problem.catalogue().routes[candidate.route]) {
   out_->candidate = candidate;
   out_->cost.emplace(problem.part(), problem.catalogue(), problem.settings(), candidate);
+  if (candidate.shape != Candidate::none) {
+    out_->shape = with_ratios(problem.part().body.shapes[candidate.shape], size, free_sizes);
+    if (!free_dimensions(problem.part().body.shapes[candidate.shape]).empty()) {
+      out_->own_size = size;
+      out_->free_sizes = free_sizes;
+    }
+  }
 }
 
 std::unique_ptr<CompiledCandidate> CandidateCompiler::run() {
@@ -83,22 +58,7 @@ const StepState* CandidateCompiler::state_at(double thickness) const {
 }
 
 double CandidateCompiler::strength_thickness(const SectionProperties& section) const {
-  // EN 10083 and its kin give the steps of hardened bar by diameter; other solids count by their
-  // equivalent diameter 4 A / U, which for a wide flat is twice its thickness (EN 10083-2, "d <= 16
-  // or t <= 8"; from memory). Walls, plates and rows that are only sold as plate count by
-  // thickness.
-  const bool solid = section.inner_perimeter == 0.0 && section.plates.empty();
-  if (solid && is_hardened_bar_grade(material_)) {
-    return 4.0 * section.area / section.perimeter;
-  }
-  return section.ruling_dimension;
-}
-
-double CandidateCompiler::blank_thickness(const Blank& blank) const {
-  if (blank.plate) {
-    return is_hardened_bar_grade(material_) ? 2.0 * blank.item->thickness : blank.item->thickness;
-  }
-  return strength_thickness(blank.item->section);
+  return bismar::strength_thickness(section, material_);
 }
 
 void CandidateCompiler::stock_pieces() {
@@ -124,11 +84,11 @@ void CandidateCompiler::stock_pieces() {
 }
 
 void CandidateCompiler::shape_pieces() {
-  const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
+  const Shape& shape = *out_->shape;
   const double lower = shape.height_min;
   const double upper = shape.height_max;
   // Its ratios, with sharp corners: whatever corners the real wall allows.
-  const auto unit = problem_.section_of(out_->candidate.shape, Route{}, 1.0);
+  const auto unit = problem_.section_of(*out_, Route{}, 1.0);
   const double thickness_per_height = strength_thickness(unit);
   const bool machined = machines_blank(route_);
 
@@ -173,7 +133,7 @@ void CandidateCompiler::shape_pieces() {
     piece.upper = to;
     piece.size = to;
     try {
-      piece.section = problem_.section_of(out_->candidate.shape, route_, to);
+      piece.section = problem_.section_of(*out_, route_, to);
     } catch (const Error&) {
       // The corner radii that the standard gives this wall leave no flat side: all sizes of the
       // piece have the same ratios, so none of them exists.
@@ -193,7 +153,7 @@ void CandidateCompiler::shape_pieces() {
           });
       piece.blank = fits == out_->blanks.end() ? nullptr : &*fits;
       if (piece.blank != nullptr && piece.blank->item != nullptr) {
-        thickness = blank_thickness(*piece.blank);
+        thickness = blank_thickness(*piece.blank, material_);
       }
     }
     piece.step = state_at(thickness);
@@ -204,54 +164,21 @@ void CandidateCompiler::shape_pieces() {
 }
 
 std::vector<double> CandidateCompiler::sheet_sizes() const {
-  const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
   // The wall of a rolled tube, or the smaller dimension of a flat part, is the thickness of the
   // sheet.
+  const Shape& shape = *out_->shape;
   const auto& wall = shape.wall_to_height ? shape.wall_to_height : shape.web_to_height;
   const double height_per_thickness =
-      wall ? 1.0 / *wall : std::max(shape.height_to_width.value_or(1.0), 1.0);
-  std::vector<double> out;
-  for (const auto& list : problem_.catalogue().stock) {
-    if (!list.sheet) {
-      continue;
-    }
-    for (const auto& item : list.items) {
-      if (is_offered(item, problem_.settings()) && suits(item, material_, route_)) {
-        out.push_back(item.thickness * height_per_thickness);
-      }
-    }
+      wall ? 1.0 / wall->low : std::max(shape.height_to_width.value_or(1.0).low, 1.0);
+  auto out = sheet_thicknesses(problem_.catalogue(), problem_.settings(), material_, route_);
+  for (double& size : out) {
+    size *= height_per_thickness;
   }
-  tidy(out);
-  return out;
-}
-
-std::vector<double> CandidateCompiler::wanted_sizes(double lower, double upper) const {
-  const auto& sizes = problem_.part().body.shapes[out_->candidate.shape].sizes;
-  std::vector<double> out;
-  switch (sizes.kind) {
-    case Sizes::Kind::continuous:
-      break;
-    case Sizes::Kind::step: {
-      const auto first = std::llround(std::ceil(lower / sizes.step * (1.0 - 1e-12)));
-      const auto last = std::llround(std::floor(upper / sizes.step * (1.0 + 1e-12)));
-      for (auto k = first; k <= last; ++k) {
-        out.push_back(static_cast<double>(k) * sizes.step);
-      }
-      break;
-    }
-    case Sizes::Kind::series:
-      out = preferred_numbers(sizes.series, lower, upper);
-      break;
-    case Sizes::Kind::list:
-      out = sizes.values;
-      break;
-  }
-  tidy(out);
   return out;
 }
 
 void CandidateCompiler::set_sizes() {
-  const auto& shape = problem_.part().body.shapes[out_->candidate.shape];
+  const Shape& shape = *out_->shape;
   auto& variable = out_->variable;
   variable.lower = shape.height_min;
   variable.upper = shape.height_max;
@@ -259,7 +186,7 @@ void CandidateCompiler::set_sizes() {
   if (!wanted && !takes_sheet_thickness(route_)) {
     return;
   }
-  auto values = wanted ? wanted_sizes(variable.lower, variable.upper) : sheet_sizes();
+  auto values = wanted ? wanted_sizes(shape.sizes, variable.lower, variable.upper) : sheet_sizes();
   if (wanted && takes_sheet_thickness(route_)) {
     const auto bought = sheet_sizes();
     std::erase_if(values, [&](double value) {
@@ -267,6 +194,12 @@ void CandidateCompiler::set_sizes() {
         return std::abs(value - other) <= 1e-9 * other;
       });
     });
+  }
+  // A size made of a sheet and the ratios of a design that has just this sheet is the design's own.
+  for (double& value : values) {
+    if (std::abs(value - out_->own_size) <= 1e-9 * out_->own_size) {
+      value = out_->own_size;
+    }
   }
   std::erase_if(values, [&](double value) {
     return value < variable.lower * (1.0 - 1e-12) || value > variable.upper * (1.0 + 1e-12);
@@ -350,9 +283,8 @@ void CandidateCompiler::add_limit_states() {
   if (first == out_->pieces.end()) {
     return;
   }
-  const auto& cases = problem_.part().body.load_cases;
   for (const LimitState* state : limit_states()) {
-    for (std::size_t c = 0; c < cases.size(); ++c) {
+    for (std::size_t c = 0; c < problem_.effects().size(); ++c) {
       if (c > 0 && !state->reads_loads()) {
         break;
       }
@@ -366,84 +298,26 @@ void CandidateCompiler::add_limit_states() {
       if (!anywhere) {
         continue;
       }
-      Constraint constraint;
-      constraint.state = state;
-      constraint.load_case = c;
-      constraint.trend = state->trend_with_scale();
-      constraint.label = std::string(state->id());
-      auto own = cases[c].factors.find(constraint.label);
-      if (own == cases[c].factors.end() && constraint.label == "deflection with shear") {
-        own = cases[c].factors.find("deflection");  // the same limit, its shear part included
-      }
-      constraint.factor = own != cases[c].factors.end()
-                              ? own->second
-                              : state->default_factor(first->step->cases[c].member);
-      out_->constraints.push_back(std::move(constraint));
+      out_->constraints.push_back(
+          problem_.limit_constraint(*state, c, first->step->cases[c].member));
     }
   }
 }
 
 bool CandidateCompiler::thin_polygon() const {
-  const auto shape = out_->candidate.shape;
-  if (shape == Candidate::none ||
-      problem_.part().body.shapes[shape].family != SectionFamily::polygon) {
+  if (!out_->shape || out_->shape->family != SectionFamily::polygon) {
     return false;
   }
   // The limit states of walls and of twisting know no polygons. Up to this ratio no wall buckles in
   // any usual metal: an outstand of EN 1993-1-1 Table 5.2 is class 3 up to 14 epsilon.
   constexpr double stocky = 10.0;
-  const auto unit = problem_.section_of(shape, route_, 1.0);
+  const auto unit = problem_.section_of(*out_, route_, 1.0);
   const bool thin = std::max(unit.height, unit.width) > stocky * unit.wall;
   const auto effects = problem_.effects();
   return thin && std::any_of(effects.begin(), effects.end(), [](const LoadEffects& one) {
            return one.bends || one.compression > 0.0 || one.twists || one.acceleration_z != 0.0 ||
                   one.acceleration_y != 0.0;
          });
-}
-
-std::vector<std::string> CandidateCompiler::open_limits(const StepState& step) const {
-  const auto& limits = problem_.part().limits;
-  std::vector<std::string> out;
-  for (const auto& limit : limits.properties) {
-    if (!limited_value(problem_.catalogue().materials, limit, step.row)) {
-      out.push_back(limit.property);
-    }
-  }
-  if (limits.medium && !material_.corrosion.contains(*limits.medium)) {
-    out.push_back("corrosion in " + *limits.medium);
-  }
-  if (limits.medium && problem_.reader().value(Property::gamma_M, step.row)) {
-    // Timber in or at water is service class 3 of EN 1995-1-1, for which the table has no factors.
-    out.emplace_back("k_mod in service class 3");
-  }
-  const MemberDetails& details = problem_.part().body.details;
-  const auto& cases = problem_.part().body.load_cases;
-  if (details.crack && !material_.isotropic) {
-    out.emplace_back("fracture toughness along and across the grain");
-  }
-  if (thin_polygon()) {
-    out.emplace_back("local and torsional buckling of a thin polygon");
-  }
-  const bool weld_tires = (details.welded || details.detail_category) &&
-                          std::any_of(cases.begin(), cases.end(), [](const LoadCase& one) {
-                            return one.fatigue.has_value();
-                          });
-  if (weld_tires && !is_steel(material_)) {
-    out.emplace_back("fatigue strength of a weld");  // EN 1993-1-9 is for steel
-  }
-  if (limits.temperature) {
-    const auto highest = highest_temperature(problem_.reader(),
-                                             material_,
-                                             step.row,
-                                             *limits.temperature,
-                                             problem_.part().body.load_cases);
-    if (!highest) {
-      out.emplace_back("maximum loaded temperature");
-    } else if (*limits.temperature > *highest && *highest == room_values_up_to) {
-      out.emplace_back("strength above 100 C");
-    }
-  }
-  return out;
 }
 
 void CandidateCompiler::find_undecided() {
@@ -475,9 +349,12 @@ void CandidateCompiler::find_undecided() {
     if (!piece.step->priced) {
       missing.insert(Property::price);
     }
-    for (auto& text : open_limits(*piece.step)) {
+    for (auto& text : open_limits(problem_, out_->candidate.material, *piece.step)) {
       open.insert(std::move(text));
     }
+  }
+  if (thin_polygon()) {
+    open.emplace("local and torsional buckling of a thin polygon");
   }
   out_->undecided_limits.assign(open.begin(), open.end());
   out_->undecided.assign(missing.begin(), missing.end());

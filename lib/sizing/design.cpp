@@ -196,6 +196,18 @@ std::string size_text(const SectionProperties& section) {
   }
 }
 
+Design make_design(SizingProblem& problem,
+                   const Outcome& outcome,
+                   const Outcome::Point& point,
+                   std::size_t& group) {
+  group = outcome.group;
+  if (outcome.group == Outcome::no_group) {
+    problem.add(outcome.candidate, point.size, point.free_sizes);
+    group = problem.groups() - 1;
+  }
+  return make_design(problem, group, point.size);
+}
+
 Design make_design(const SizingProblem& problem, std::size_t group, double size) {
   const auto& compiled = problem.compiled(group);
   const auto& catalogue = problem.catalogue();
@@ -223,6 +235,7 @@ Design make_design(const SizingProblem& problem, std::size_t group, double size)
   design.treatment = labels.treatment;
   design.finish = labels.finish;
   design.size = size;
+  design.free_sizes = compiled.free_sizes;
   design.section = detail.section;
   if (piece.item != nullptr) {
     design.stock_item = piece.item->id;

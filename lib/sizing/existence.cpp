@@ -2,6 +2,7 @@
 #include <bismar/sizing/existence.hpp>
 
 #include "sizing/blank.hpp"
+#include "sizing/shape_section.hpp"
 #include "sizing/strength.hpp"
 #include "sizing/words.hpp"
 
@@ -306,7 +307,11 @@ std::optional<Exclusion> drawn_form_rules(const MaterialInfo& material,
 }
 
 std::optional<Exclusion> proportion_rules(const Route& route, const Shape& shape) {
-  if (bends_sheet(route) && shape.web_to_height != shape.flange_to_height) {
+  const auto range = [&](std::string_view dimension) { return ratio_range(shape, dimension); };
+  const bool has_flange = shape.family == SectionFamily::channel;
+  const bool differ = has_flange && (range("web").high < range("flange").low ||
+                                     range("flange").high < range("web").low);
+  if (bends_sheet(route) && differ) {
     return Exclusion{Rule::output_form,
                      "The route \"" + route.title +
                          "\" bends sheet of one thickness; web and flange of this " +

@@ -110,10 +110,13 @@ std::string with_load_cases(const Account& account, const std::vector<LoadCase>&
 std::optional<double> factor_needed(SizingProblem& problem, const Outcome& outcome, Symbol symbol) {
   const auto material = outcome.candidate.material;
   std::size_t evaluations = 0;
+  Solved solved;  // its counts are not asked for
   const auto feasible_at = [&](double factor) {
     const auto before = problem.multiply(material, symbol, factor);
-    const bool good =
-        solve_group(problem, outcome.group, evaluations).kind == Outcome::Kind::feasible;
+    const auto again = outcome.group == Outcome::no_group
+                           ? solve_free(problem, outcome.candidate, {}, nullptr, solved)
+                           : solve_group(problem, outcome.group, evaluations);
+    const bool good = again.kind == Outcome::Kind::feasible;
     problem.restore(material, before);
     return good;
   };
@@ -216,8 +219,19 @@ std::vector<std::string> limit_lines(const SizingProblem& problem,
   return out;
 }
 
-std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome& outcome) {
-  const auto& compiled = problem.compiled(outcome.group);
+std::vector<std::string> infeasible_lines(SizingProblem& problem, const Outcome& asked) {
+  Outcome outcome = asked;
+  const bool free = asked.group == Outcome::no_group;
+  const auto& compiled =
+      free ? problem.add(asked.candidate,
+                         1.0,
+                         middle_sizes(problem.part().body.shapes[asked.candidate.shape]))
+           : problem.compiled(asked.group);
+  for (std::size_t i = 0; free && i < compiled.constraints.size(); ++i) {
+    if (compiled.constraints[i].label == outcome.reason) {
+      outcome.failed.push_back(i);
+    }
+  }
   const auto labels = names(outcome.candidate, problem.part(), problem.catalogue());
   std::string how = labels.shape + ", " + labels.route +
                     (labels.treatment.empty() ? "" : " and " + labels.treatment) +

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include <bismar/sizing/front.hpp>
 
+#include "sizing/front_search.hpp"
 #include "sizing/study.hpp"
 #include "sizing/words.hpp"
 
@@ -11,6 +12,7 @@
 #include <algorithm>
 #include <chrono>
 #include <cmath>
+#include <limits>
 #include <set>
 #include <tuple>
 
@@ -29,8 +31,8 @@ struct Ranked {
 };
 
 bool before(const Ranked& a, const Ranked& b) {
-  return std::tie(a.point.mass, a.point.cost, *a.names, a.item, a.point.size) <
-         std::tie(b.point.mass, b.point.cost, *b.names, b.item, b.point.size);
+  return std::tie(a.point.mass, a.point.cost, *a.names, a.item, a.point.size, a.point.free_sizes) <
+         std::tie(b.point.mass, b.point.cost, *b.names, b.item, b.point.size, b.point.free_sizes);
 }
 
 std::string item_id(const Solved& solved, const Outcome& outcome, double size) {
@@ -82,6 +84,19 @@ class FrontBuilder {
     fill_funnel(result);
     add_notes(result);
     result.telemetry.evaluations = solved_.evaluations;
+    result.telemetry.boxes = solved_.boxes;
+    if (solved_.searched) {
+      result.delta = settings_.delta;
+    }
+    if (solved_.incomplete) {
+      result.exact = false;
+      result.epsilon_reached = std::numeric_limits<double>::infinity();
+      result.notes.emplace_back(
+          "A search ran out of boxes: designs shown are sound, but lighter or cheaper ones may be "
+          "missing.");
+    }
+    result.telemetry.skipped = solved_.skipped;
+    result.telemetry.dominated = solved_.dominated;
     return result;
   }
 
@@ -102,6 +117,7 @@ class FrontBuilder {
     result.designs.clear();
     result.others.clear();
     stage_.clear();
+    result.epsilon_reached = 0.0;
     std::vector<double> objectives;
     for (const auto& one : ranked_) {
       objectives.insert(objectives.end(), {one.point.mass, one.point.cost});
@@ -129,9 +145,10 @@ class FrontBuilder {
           return false;
         }
         stage_.try_emplace(one.outcome, FunnelLine::Stage::near);
-      } else {
+      } else if (settings_.explain == Explain::full) {
         result.others.push_back({solved_.outcomes[one.outcome].candidate,
                                  one.point.size,
+                                 one.point.free_sizes,
                                  one.point.mass,
                                  one.point.cost});
       }
@@ -141,9 +158,11 @@ class FrontBuilder {
 
   bool add_design(std::size_t row, Result& result) {
     const auto& one = ranked_[row];
-    const auto group = solved_.outcomes[one.outcome].group;
-    auto design = make_design(*solved_.problem, group, one.point.size);
-    if (!is_confirmed(design, *solved_.problem, group)) {
+    std::size_t group = 0;
+    auto design = make_design(*solved_.problem, solved_.outcomes[one.outcome], one.point, group);
+    const bool confirmed = is_confirmed(design, *solved_.problem, group);
+    solved_.problem->remove_last();
+    if (!confirmed) {
       result.exact = false;
       result.notes.push_back(
           "INTERNAL FAULT: " + design.id +
@@ -152,6 +171,7 @@ class FrontBuilder {
       ranked_.erase(ranked_.begin() + static_cast<std::ptrdiff_t>(row));
       return false;
     }
+    result.epsilon_reached = std::max(result.epsilon_reached, one.point.epsilon);
     result.designs.push_back(std::move(design));
     return true;
   }
@@ -164,29 +184,12 @@ class FrontBuilder {
     for (const auto& [rule, count] : solved_.cannot_exist) {
       funnel.lines.push_back({Stage::cannot_exist, std::string(name(rule)), count});
     }
-    std::map<std::string, std::size_t> excluded;
-    std::map<std::string, std::size_t> undecided;
-    std::map<std::string, std::size_t> infeasible;
-    std::set<std::string> undecided_text;
     std::size_t front = 0;
     std::size_t near = 0;
-    std::size_t not_better = 0;
-    for (std::size_t o = 0; o < solved_.outcomes.size(); ++o) {
-      const auto& outcome = solved_.outcomes[o];
-      const auto stage = stage_.find(o);
-      if (outcome.kind == Outcome::Kind::undecided) {
-        ++undecided[outcome.reason];
-        undecided_text.insert(names_[o].material + ": " + outcome.reason);
-      } else if (outcome.kind == Outcome::Kind::excluded) {
-        ++excluded["value missing: " + outcome.reason];
-      } else if (outcome.kind == Outcome::Kind::infeasible) {
-        ++infeasible[outcome.reason];
-      } else if (stage == stage_.end()) {
-        ++not_better;
-      } else {
-        ++(stage->second == Stage::front ? front : near);
-      }
+    for (const auto& [outcome, stage] : stage_) {
+      ++(stage == Stage::front ? front : near);
     }
+    const std::size_t not_better = solved_.not_better + solved_.outcomes.size() - stage_.size();
     const auto add = [&](Stage stage_of, const std::map<std::string, std::size_t>& counts) {
       std::vector<std::pair<std::string, std::size_t>> sorted(counts.begin(), counts.end());
       std::stable_sort(sorted.begin(), sorted.end(), [](const auto& a, const auto& b) {
@@ -196,13 +199,13 @@ class FrontBuilder {
         funnel.lines.push_back({stage_of, reason, count});
       }
     };
-    add(Stage::cannot_exist, excluded);
-    add(Stage::undecided, undecided);
-    add(Stage::infeasible, infeasible);
+    add(Stage::cannot_exist, solved_.excluded);
+    add(Stage::undecided, solved_.undecided);
+    add(Stage::infeasible, solved_.infeasible);
     funnel.lines.push_back({Stage::not_better, "", not_better});
     funnel.lines.push_back({Stage::near, "", near});
     funnel.lines.push_back({Stage::front, "", front});
-    result.undecided.assign(undecided_text.begin(), undecided_text.end());
+    result.undecided.assign(solved_.undecided_text.begin(), solved_.undecided_text.end());
   }
 
   void add_notes(Result& result) const {
@@ -294,12 +297,47 @@ void check_candidate(const Candidate& candidate, const Part& part, const Catalog
   faults.throw_if_any();
 }
 
+/// Free dimensions where the shape has them, inside the ranges of their ratios.
+void check_free_sizes(const Candidate& candidate,
+                      double size,
+                      const FreeSizes& free_sizes,
+                      const Part& part) {
+  const auto free = candidate.shape == Candidate::none
+                        ? std::vector<FreeDimension>{}
+                        : free_dimensions(part.body.shapes[candidate.shape]);
+  FaultList faults;
+  for (std::size_t f = 0; f < free_sizes.size(); ++f) {
+    const bool used = f < free.size();
+    const double low = used ? free[f].to_height.low * size * (1.0 - 1e-9) : 0.0;
+    const double high = used ? free[f].to_height.high * size * (1.0 + 1e-9) : 0.0;
+    if (!(free_sizes[f] >= low && free_sizes[f] <= high)) {
+      const std::string name = used ? std::string(free[f].name) : "dimension";
+      faults.add({Code::out_of_range,
+                  "free_sizes[" + std::to_string(f) + "]",
+                  plain(free_sizes[f]),
+                  used ? plain(low) + " to " + plain(high) : "0",
+                  used ? "The " + name + " is not inside the range of its ratio to the height."
+                       : "The shape has no further free dimension: leave it 0."});
+    }
+  }
+  faults.throw_if_any();
+}
+
 /// The functions that the guard protects are compiled apart from it (see FloatingPointGuard).
 Result build_front(const Part& part,
                    const Catalogue& catalogue,
                    const Settings& settings,
                    const RunOptions& run) {
-  auto solved = solve_candidates(part, catalogue, settings, run);
+  const bool full = settings.explain == Explain::full;
+  auto solved = full ? solve_candidates(part, catalogue, settings, run)
+                     : search_front(part, catalogue, settings, run);
+  if (!full && solved.outcomes.empty() && !solved.stopped) {
+    // Nothing is feasible: then the reasons are the answer.
+    Settings examined = settings;
+    examined.explain = Explain::full;
+    solved = solve_candidates(part, catalogue, examined, run);
+    return FrontBuilder(part, examined, solved).run();
+  }
   return FrontBuilder(part, settings, solved).run();
 }
 
@@ -346,8 +384,11 @@ std::vector<GroupedFront> fronts(const Part& part,
     GroupedFront group{label, {}};
     for (const auto row : front_2d(objectives)) {
       const auto& one = points[row];
-      group.points.push_back(
-          {solved.outcomes[one.outcome].candidate, one.point.size, one.point.mass, one.point.cost});
+      group.points.push_back({solved.outcomes[one.outcome].candidate,
+                              one.point.size,
+                              one.point.free_sizes,
+                              one.point.mass,
+                              one.point.cost});
     }
     out.push_back(std::move(group));
   }
@@ -359,6 +400,15 @@ Design evaluate(const Part& part,
                 const Candidate& candidate,
                 double size,
                 const Settings& settings) {
+  return evaluate(part, catalogue, candidate, size, {}, settings);
+}
+
+Design evaluate(const Part& part,
+                const Catalogue& catalogue,
+                const Candidate& candidate,
+                double size,
+                const FreeSizes& free_sizes,
+                const Settings& settings) {
   const FloatingPointGuard guard;
   validate(part, catalogue, settings);
   check_candidate(candidate, part, catalogue);
@@ -366,7 +416,8 @@ Design evaluate(const Part& part,
     throw Error({Code::conflict, std::string(name(broken->rule)), {}, {}, broken->text});
   }
   SizingProblem problem(part, catalogue, settings);
-  const auto& compiled = problem.add(candidate);
+  check_free_sizes(candidate, size, free_sizes, part);
+  const auto& compiled = problem.add(candidate, size, free_sizes);
   FaultList faults;
   for (const Property property : compiled.undecided) {
     faults.add({Code::missing,
@@ -384,11 +435,7 @@ Design evaluate(const Part& part,
                 "The material has no value for " + limit + ", on which the part has a limit."});
   }
   faults.throw_if_any();
-  const auto& variable = compiled.variable;
-  const bool listed = variable.kind == Variable::Kind::continuous
-                          ? size >= variable.lower && size <= variable.upper
-                          : std::find(variable.values.begin(), variable.values.end(), size) !=
-                                variable.values.end();
+  const auto listed = listed_size(compiled.variable, size);
   if (!listed) {
     throw Error({Code::out_of_range,
                  "size",
@@ -396,7 +443,7 @@ Design evaluate(const Part& part,
                  "a size that the part asks for",
                  "The size is not one of those that the part asks for."});
   }
-  return make_design(problem, 0, size);
+  return make_design(problem, 0, *listed);
 }
 
 }  // namespace bismar

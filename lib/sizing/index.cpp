@@ -56,7 +56,7 @@ class Asked {
         const Catalogue& catalogue,
         const Settings& settings)
       : problem_(part, catalogue, settings),
-        compiled_(problem_.add(design.candidate)),
+        compiled_(problem_.add(design.candidate, design.size, design.free_sizes)),
         detail_(problem_.detail(0, design.size)),
         size_(design.size) {}
 
@@ -362,7 +362,8 @@ DesignIndices design_indices(const Design& design,
                              const Settings& settings) {
   const FloatingPointGuard guard;
   // Checks part, candidate and size, and throws what is wrong with them.
-  static_cast<void>(evaluate(part, catalogue, design.candidate, design.size, settings));
+  static_cast<void>(
+      evaluate(part, catalogue, design.candidate, design.size, design.free_sizes, settings));
   return Asked(design, part, catalogue, settings).run();
 }
 

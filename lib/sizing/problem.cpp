@@ -2,6 +2,8 @@
 #include "sizing/problem.hpp"
 
 #include "sizing/candidate_compiler.hpp"
+#include "sizing/gaps.hpp"
+#include "sizing/stock_solver.hpp"
 
 #include <bismar/mechanics/scaled_section.hpp>
 #include <bismar/sizing/existence.hpp>
@@ -60,11 +62,32 @@ SizingProblem::SizingProblem(const Part& part, const Catalogue& catalogue, const
   for (const auto& load_case : part.body.load_cases) {
     effects_.push_back(reduce(load_case, part.body.length));
   }
+  stock_solver_ = std::make_unique<const StockSolver>(*this);
 }
 
+SizingProblem::~SizingProblem() = default;
+
 const CompiledCandidate& SizingProblem::add(const Candidate& candidate) {
-  groups_.push_back(CandidateCompiler(*this, candidate).run());
+  return add(candidate, 0.0, {});
+}
+
+const CompiledCandidate& SizingProblem::add(const Candidate& candidate,
+                                            double size,
+                                            const FreeSizes& free_sizes) {
+  groups_.push_back(CandidateCompiler(*this, candidate, size, free_sizes).run());
   return *groups_.back();
+}
+
+SectionProperties SizingProblem::section_of(const CompiledCandidate& group,
+                                            const Route& route,
+                                            double height) const {
+  FreeSizes sizes = group.free_sizes;
+  if (height != group.own_size) {
+    for (double& size : sizes) {
+      size *= height / group.own_size;
+    }
+  }
+  return sections_.at(group.candidate.shape, route, height, sizes);
 }
 
 std::span<const Variable> SizingProblem::variables(std::size_t group) const {
@@ -185,10 +208,24 @@ void SizingProblem::restore(std::size_t material, const std::vector<StepState>& 
   std::copy(states.begin(), states.end(), states_[material].begin());
 }
 
-const Piece& SizingProblem::piece_at(const CompiledCandidate& group, double x) const {
+std::optional<double> listed_size(const Variable& variable, double size) {
+  if (variable.kind == Variable::Kind::continuous) {
+    return size >= variable.lower && size <= variable.upper ? std::optional(size) : std::nullopt;
+  }
+  for (const double value : variable.values) {
+    if (std::abs(value - size) <= 1e-12 * size) {
+      return value;
+    }
+  }
+  return std::nullopt;
+}
+
+const Piece& SizingProblem::piece_at(const CompiledCandidate& group, double at) const {
+  // A bought thickness at the end of a step stays in it, whichever way its ratio was rounded.
+  const double x = group.own_size > 0.0 ? at * (1.0 - 5e-13) : at;
   const auto found = std::lower_bound(
-      group.pieces.begin(), group.pieces.end(), x, [](const Piece& piece, double at) {
-        return piece.upper < at;
+      group.pieces.begin(), group.pieces.end(), x, [](const Piece& piece, double size) {
+        return piece.upper < size;
       });
   return found == group.pieces.end() ? group.pieces.back() : *found;
 }
@@ -242,8 +279,16 @@ double SizingProblem::material_utilisation(const CompiledCandidate& group,
     return pass((!lowest || service >= *lowest) && (!highest || service <= *highest) &&
                 finish_stands);
   }
-  const auto& limit = part_.limits.properties[constraint.property_limit];
-  const auto range = limited_value(catalogue_.materials, limit, step.row);
+  return *property_utilisation(constraint.property_limit, step.row);
+}
+
+std::optional<double> SizingProblem::property_utilisation(std::size_t index,
+                                                          std::size_t row) const {
+  const auto& limit = part_.limits.properties[index];
+  const auto range = limited_value(catalogue_.materials, limit, row);
+  if (!range) {
+    return std::nullopt;
+  }
   double u = 0.0;
   if (limit.at_least) {
     const double value = limited_end(reader_, limit, *range, true);
@@ -259,7 +304,44 @@ double SizingProblem::material_utilisation(const CompiledCandidate& group,
   return u;
 }
 
+double SizingProblem::least_wall(const CompiledCandidate& group) const {
+  const Route& route = catalogue_.routes[group.candidate.route];
+  return by_class(route.min_wall_by_class,
+                  catalogue_.materials.info(group.candidate.material),
+                  route.section_min);
+}
+
+double SizingProblem::least_mass(const CompiledCandidate& group) const {
+  const Route& route = catalogue_.routes[group.candidate.route];
+  return route.rate_basis == RateBasis::metre ? 0.0 : route.mass_min;
+}
+
+double SizingProblem::largest_wall(const CompiledCandidate& group) const {
+  const Route& route = catalogue_.routes[group.candidate.route];
+  return by_class(route.max_wall_by_class,
+                  catalogue_.materials.info(group.candidate.material),
+                  route.section_max);
+}
+
+Constraint SizingProblem::limit_constraint(const LimitState& state,
+                                           std::size_t load_case,
+                                           const MemberMaterial& material) const {
+  const auto& factors = part_.body.load_cases[load_case].factors;
+  Constraint constraint;
+  constraint.state = &state;
+  constraint.load_case = load_case;
+  constraint.trend = state.trend_with_scale();
+  constraint.label = std::string(state.id());
+  auto own = factors.find(constraint.label);
+  if (own == factors.end() && constraint.label == "deflection with shear") {
+    own = factors.find("deflection");  // the same limit, its shear part included
+  }
+  constraint.factor = own != factors.end() ? own->second : state.default_factor(material);
+  return constraint;
+}
+
 void SizingProblem::evaluate_section(const CompiledCandidate& group,
+                                     std::span<const Constraint> constraints,
                                      const Piece& piece,
                                      const SectionProperties& section,
                                      std::span<double> objectives,
@@ -282,9 +364,8 @@ void SizingProblem::evaluate_section(const CompiledCandidate& group,
   objectives[1] = cost;
 
   const Route& route = catalogue_.routes[group.candidate.route];
-  const auto& material = catalogue_.materials.info(group.candidate.material);
-  for (std::size_t i = 0; i < group.constraints.size(); ++i) {
-    const auto& constraint = group.constraints[i];
+  for (std::size_t i = 0; i < constraints.size(); ++i) {
+    const auto& constraint = constraints[i];
     double u = 0.0;
     if (constraint.kind == Constraint::Kind::thickness_limit) {
       u = pass(piece.step != nullptr || piece.impossible);
@@ -304,13 +385,15 @@ void SizingProblem::evaluate_section(const CompiledCandidate& group,
           u = material_utilisation(group, constraint, *piece.step, section);
           break;
         case Constraint::Kind::limit_state:
-          u = piece.applies[i] ? limit_utilisation(constraint, *piece.step, section) : 0.0;
+          u = applies(constraint, i, piece, section)
+                  ? limit_utilisation(constraint, *piece.step, section)
+                  : 0.0;
           break;
         case Constraint::Kind::route_wall:
-          u = by_class(route.min_wall_by_class, material, route.section_min) / section.wall;
+          u = least_wall(group) / section.wall;
           break;
         case Constraint::Kind::route_section:
-          u = section.wall / by_class(route.max_wall_by_class, material, route.section_max);
+          u = section.wall / largest_wall(group);
           break;
         case Constraint::Kind::route_mass_min:
           u = route.mass_min / net_mass;
@@ -328,6 +411,19 @@ void SizingProblem::evaluate_section(const CompiledCandidate& group,
     }
     utilisations[i] = u;
   }
+}
+
+bool SizingProblem::applies(const Constraint& constraint,
+                            std::size_t index,
+                            const Piece& piece,
+                            const SectionProperties& section) const {
+  if (!constraint.by_section) {
+    return piece.applies[index];
+  }
+  return constraint.state->applies(effects_[constraint.load_case],
+                                   member_limits_,
+                                   piece.step->cases[constraint.load_case].member,
+                                   section);
 }
 
 double SizingProblem::limit_utilisation(const Constraint& constraint,
@@ -354,10 +450,15 @@ void SizingProblem::evaluate(std::size_t group,
   const auto& compiled = *groups_[group];
   const Piece& piece = piece_at(compiled, x[0]);
   if (piece.item != nullptr || piece.impossible || x[0] == piece.size) {
-    evaluate_section(compiled, piece, piece.section, objectives, utilisations);
-  } else {
     evaluate_section(
-        compiled, piece, scaled(piece.section, x[0] / piece.size), objectives, utilisations);
+        compiled, compiled.constraints, piece, piece.section, objectives, utilisations);
+  } else {
+    evaluate_section(compiled,
+                     compiled.constraints,
+                     piece,
+                     scaled(piece.section, x[0] / piece.size),
+                     objectives,
+                     utilisations);
   }
 }
 
@@ -366,17 +467,18 @@ void SizingProblem::evaluate_plain(std::size_t group,
                                    std::span<double> objectives,
                                    std::span<double> utilisations) const {
   const auto one = detail(group, x);
-  evaluate_section(*groups_[group], *one.piece, one.section, objectives, utilisations);
+  const auto& compiled = *groups_[group];
+  evaluate_section(
+      compiled, compiled.constraints, *one.piece, one.section, objectives, utilisations);
 }
 
 SizingProblem::Detail SizingProblem::detail(std::size_t group, double x) const {
   const auto& compiled = *groups_[group];
   Detail out;
   out.piece = &piece_at(compiled, x);
-  out.section =
-      out.piece->item != nullptr || out.piece->impossible
-          ? out.piece->section
-          : section_of(compiled.candidate.shape, catalogue_.routes[compiled.candidate.route], x);
+  out.section = out.piece->item != nullptr || out.piece->impossible
+                    ? out.piece->section
+                    : section_of(compiled, catalogue_.routes[compiled.candidate.route], x);
   if (out.piece->step != nullptr) {
     out.net_mass = out.piece->step->density * out.section.area * part_.body.length;
     out.purchase = purchase(compiled, *out.piece, out.section, out.net_mass);

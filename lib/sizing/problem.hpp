@@ -19,6 +19,8 @@
 
 namespace bismar {
 
+class StockSolver;
+
 /// A material at one thickness step, as the limit states see it in each load case.
 struct StepState {
   std::size_t row = 0;
@@ -52,7 +54,8 @@ struct Constraint {
   double factor = 1.0;
   std::size_t property_limit = 0;
   Trend trend = Trend::constant;
-  std::string label;  ///< As results and messages call it.
+  bool by_section = false;  ///< Limit state: whether it applies depends on the ratios.
+  std::string label;        ///< As results and messages call it.
 };
 
 /// A stretch of sizes over which everything but the size stays: strength step, blank, corner rule.
@@ -71,6 +74,12 @@ struct Piece {
 /// A candidate made ready for solving.
 struct CompiledCandidate {
   Candidate candidate;
+  /// The part's shape, with the ratios of one design where it has free dimensions; absent for
+  /// stock.
+  std::optional<Shape> shape;
+  /// The free dimensions at `own_size`, of which the ratios are made.
+  FreeSizes free_sizes = {};
+  double own_size = 0.0;
   Variable variable;
   std::vector<Piece> pieces;  ///< Ascending; one a value for stock.
   std::vector<Constraint> constraints;
@@ -81,6 +90,10 @@ struct CompiledCandidate {
       undecided_limits;  ///< Limits of the job that a missing value leaves open.
 };
 
+/// The size of a list that this one is but for rounding; a size between the ends where there is no
+/// list; else nothing.
+[[nodiscard]] std::optional<double> listed_size(const Variable& variable, double size);
+
 /// A part's sizing as the solver sees it. One group a candidate; the variable is the height of the
 /// section [m], or the index of the item for stock. Objectives: mass [kg], unit cost.
 ///
@@ -90,9 +103,27 @@ struct CompiledCandidate {
 class BISMAR_API SizingProblem : public BoxProblem {
  public:
   SizingProblem(const Part& part, const Catalogue& catalogue, const Settings& settings);
+  ~SizingProblem() override;
+  SizingProblem(const SizingProblem&) = delete;
+  SizingProblem& operator=(const SizingProblem&) = delete;
+  SizingProblem(SizingProblem&&) = delete;
+  SizingProblem& operator=(SizingProblem&&) = delete;
 
   /// Adds a candidate as the last group; the returned reference holds as long as the problem.
   const CompiledCandidate& add(const Candidate& candidate);
+  /// The same for a shape with free dimensions: its ratios are those of this design.
+  const CompiledCandidate& add(const Candidate& candidate,
+                               double size,
+                               const FreeSizes& free_sizes);
+  /// Solves candidates out of stock.
+  [[nodiscard]] const StockSolver& stock_solver() const { return *stock_solver_; }
+  /// Lets go of a material's states; no group of it may be left.
+  void forget(std::size_t material) { states_.erase(material); }
+  /// Utilisation of the part's property limit `index` in a table row; nothing where it is missing.
+  [[nodiscard]] std::optional<double> property_utilisation(std::size_t index,
+                                                           std::size_t row) const;
+  /// Takes the last group away.
+  void remove_last() { groups_.pop_back(); }
   [[nodiscard]] const CompiledCandidate& compiled(std::size_t group) const {
     return *groups_[group];
   }
@@ -138,20 +169,30 @@ class BISMAR_API SizingProblem : public BoxProblem {
   [[nodiscard]] const PropertyReader& reader() const { return reader_; }
   [[nodiscard]] std::span<const LoadEffects> effects() const { return effects_; }
   [[nodiscard]] const MemberLimits& member_limits() const { return member_limits_; }
-  /// Section of a free shape at one height, by its own formulas.
-  [[nodiscard]] SectionProperties section_of(std::size_t shape,
+  /// Section of a candidate's shape at one height, by its own formulas.
+  [[nodiscard]] SectionProperties section_of(const CompiledCandidate& group,
                                              const Route& route,
-                                             double height) const {
-    return sections_.at(shape, route, height);
-  }
+                                             double height) const;
+  [[nodiscard]] const ShapeSections& sections() const { return sections_; }
+  /// States of a material at each of its thickness steps, made once.
+  const std::vector<StepState>& states(std::size_t material);
+  /// Least and largest section that the route makes of the candidate's material [m].
+  [[nodiscard]] double least_wall(const CompiledCandidate& group) const;
+  [[nodiscard]] double largest_wall(const CompiledCandidate& group) const;
+  /// Least net mass that the route makes [kg]: what comes by the metre is cut to length and has
+  /// none.
+  [[nodiscard]] double least_mass(const CompiledCandidate& group) const;
+  /// The constraint that a limit state makes in a load case, with the factor used there.
+  [[nodiscard]] Constraint limit_constraint(const LimitState& state,
+                                            std::size_t load_case,
+                                            const MemberMaterial& material) const;
+  /// What a material and route can be machined from, looked up once.
+  const std::vector<UsableItem>& blank_stock_of(std::uint32_t material, std::uint32_t route);
 
  private:
   friend class CandidateCompiler;
+  friend class FreeSizeProblem;
 
-  /// States of a material at each of its thickness steps, made once.
-  const std::vector<StepState>& states(std::size_t material);
-  /// What a material and route can be machined from, looked up once.
-  const std::vector<UsableItem>& blank_stock_of(std::uint32_t material, std::uint32_t route);
   [[nodiscard]] StepState make_state(std::size_t material, std::size_t row) const;
   [[nodiscard]] ResolvedMaterial resolve_case(std::size_t material,
                                               std::size_t row,
@@ -162,6 +203,7 @@ class BISMAR_API SizingProblem : public BoxProblem {
                                                  const SectionProperties& section,
                                                  double net_mass) const;
   void evaluate_section(const CompiledCandidate& group,
+                        std::span<const Constraint> constraints,
                         const Piece& piece,
                         const SectionProperties& section,
                         std::span<double> objectives,
@@ -170,6 +212,10 @@ class BISMAR_API SizingProblem : public BoxProblem {
                                             const Constraint& constraint,
                                             const StepState& step,
                                             const SectionProperties& section) const;
+  [[nodiscard]] bool applies(const Constraint& constraint,
+                             std::size_t index,
+                             const Piece& piece,
+                             const SectionProperties& section) const;
   [[nodiscard]] double limit_utilisation(const Constraint& constraint,
                                          const StepState& step,
                                          const SectionProperties& section) const;
@@ -184,6 +230,7 @@ class BISMAR_API SizingProblem : public BoxProblem {
   std::map<std::size_t, std::vector<StepState>> states_;
   std::map<std::pair<std::uint32_t, std::uint32_t>, std::vector<UsableItem>> blank_stock_;
   std::vector<std::unique_ptr<CompiledCandidate>> groups_;
+  std::unique_ptr<const StockSolver> stock_solver_;
 };
 
 }  // namespace bismar

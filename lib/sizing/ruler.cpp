@@ -20,6 +20,7 @@ namespace {
 struct Row {
   Candidate candidate;
   double size = 0.0;
+  FreeSizes free_sizes = {};
   double mass = 0.0;
   double cost = 0.0;
 };
@@ -87,7 +88,7 @@ class Band {
 
  private:
   std::array<Corner, 4> corners(const Row& row) {
-    const auto& compiled = problem_.add(row.candidate);
+    const auto& compiled = problem_.add(row.candidate, row.size, row.free_sizes);
     const auto detail = problem_.detail(problem_.groups() - 1, row.size);
     if (detail.piece->step == nullptr || !detail.purchase) {
       throw Error(
@@ -130,10 +131,10 @@ ExchangeRuler exchange_ruler(const Result& result,
   const FloatingPointGuard guard;
   std::vector<Row> rows;
   for (const auto& design : result.designs) {
-    rows.push_back({design.candidate, design.size, design.mass, design.cost});
+    rows.push_back({design.candidate, design.size, design.free_sizes, design.mass, design.cost});
   }
   for (const auto& point : result.others) {
-    rows.push_back({point.candidate, point.size, point.mass, point.cost});
+    rows.push_back({point.candidate, point.size, point.free_sizes, point.mass, point.cost});
   }
   std::vector<double> objectives;
   std::vector<std::uint32_t> labels;

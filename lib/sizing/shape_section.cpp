@@ -17,9 +17,12 @@
 
 namespace bismar {
 
-std::optional<double> ratio_of(const Shape& shape, std::string_view dimension) {
+namespace {
+
+/// The ratio that the shape gives for a dimension, as its key has it (a width by h/b).
+std::optional<Ratio> given_ratio(const Shape& shape, std::string_view dimension) {
   if (dimension == "width") {
-    return shape.height_to_width ? std::optional(1.0 / *shape.height_to_width) : std::nullopt;
+    return shape.height_to_width;
   }
   if (dimension == "wall") {
     return shape.wall_to_height;
@@ -33,7 +36,106 @@ std::optional<double> ratio_of(const Shape& shape, std::string_view dimension) {
   return dimension == "root radius" ? shape.root_radius_to_height : std::nullopt;
 }
 
-namespace {
+std::string_view key_of(std::string_view dimension) {
+  return dimension == "width"  ? "height_to_width"
+         : dimension == "wall" ? "wall_to_height"
+         : dimension == "web"  ? "web_to_height"
+                               : "flange_to_height";
+}
+
+}  // namespace
+
+std::optional<double> ratio_of(const Shape& shape, std::string_view dimension) {
+  const auto given = given_ratio(shape, dimension);
+  if (!given || !given->is_fixed()) {
+    return std::nullopt;
+  }
+  return dimension == "width" ? 1.0 / given->low : given->low;
+}
+
+Ratio ratio_range(const Shape& shape, std::string_view dimension) {
+  const Ratio ratio =
+      given_ratio(shape, dimension).value_or(default_ratio(shape.family, key_of(dimension)));
+  return dimension == "width" ? Ratio(1.0 / ratio.high, 1.0 / ratio.low) : ratio;
+}
+
+Shape with_ratios(const Shape& shape, double height, const FreeSizes& free_sizes) {
+  Shape out = shape;
+  const auto free = free_dimensions(shape);
+  for (std::size_t i = 0; i < free.size(); ++i) {
+    const double ratio = free_sizes[i] / height;
+    if (free[i].name == "width") {
+      out.height_to_width = height / free_sizes[i];
+    } else if (free[i].name == "wall") {
+      out.wall_to_height = ratio;
+    } else {
+      (free[i].name == "web" ? out.web_to_height : out.flange_to_height) = ratio;
+    }
+  }
+  return out;
+}
+
+std::vector<FreeSizes> sample_sizes(const Shape& shape) {
+  const auto free = free_dimensions(shape);
+  const std::size_t corners = std::size_t{1} << free.size();
+  std::vector<FreeSizes> out;
+  for (std::size_t corner = corners + 1; corner-- > 0;) {
+    FreeSizes sizes{};
+    for (std::size_t f = 0; f < free.size(); ++f) {
+      const Ratio& range = free[f].to_height;
+      sizes[f] = corner == corners            ? std::sqrt(range.low * range.high)
+                 : ((corner >> f) & 1U) != 0U ? range.high
+                                              : range.low;
+    }
+    try {
+      static_cast<void>(ShapeSections({&shape, 1}).at(0, Route{}, 1.0, sizes));
+      out.push_back(sizes);
+    } catch (const Error&) {
+      continue;
+    }
+  }
+  return out;
+}
+
+FreeSizes middle_sizes(const Shape& shape) {
+  const auto samples = sample_sizes(shape);
+  if (samples.empty()) {
+    throw InternalError("middle_sizes: no proportions of the shape make a section");
+  }
+  return samples.front();
+}
+
+bool may_be_usual(const SizesBox& box) {
+  const auto& s = box.sizes;
+  const auto within = [](const Interval& part, const Interval& whole, double low, double high) {
+    return part.upper() >= low * whole.lower() && part.lower() <= high * whole.upper();
+  };
+  const auto smaller = [&] { return std::min(s[0].upper(), s[1].upper()); };
+  switch (box.family) {
+    case SectionFamily::rectangular_tube:
+    case SectionFamily::elliptical_tube:
+      return within(s[1], s[0], 1.0 / 16.0, 16.0);
+    case SectionFamily::i_section:
+    case SectionFamily::channel:
+    case SectionFamily::tee:
+      return within(s[1], s[0], 0.12, 2.5) && s[3].lower() <= 0.12 * smaller() &&
+             within(s[2], s[3], 0.07, 1.5) && box.root_radius.lower() <= 1.6 * s[3].upper();
+    case SectionFamily::angle:
+      return within(s[1], s[0], 0.4, 2.5) && s[2].lower() <= 0.2 * smaller() &&
+             box.root_radius.lower() <= s[2].upper();
+    default:
+      return true;
+  }
+}
+
+double rough_area(const SizesBox& box) {
+  // A wall as high as the section is part of every tube and profile; half of it to be safe, as the
+  // walls of a round tube are bent.
+  const auto& s = box.sizes;
+  const bool round = box.family == SectionFamily::round_tube;
+  const bool walls = s.size() > 2 || round;
+  return 0.5 * s[0].lower() * (walls ? s[round ? 1 : 2].lower() : s.back().lower());
+}
 
 Forming forming_of(const Route& route) {
   if (contains_word(route.leaves, "welded tube")) {
@@ -41,6 +143,8 @@ Forming forming_of(const Route& route) {
   }
   return contains_word(route.leaves, "tube") ? Forming::extruded : Forming::unknown;
 }
+
+namespace {
 
 std::vector<SectionPoint> enlarged(const std::vector<SectionPoint>& points, double factor) {
   std::vector<SectionPoint> out;
@@ -134,6 +238,13 @@ ShapeSections::ShapeSections(std::span<const Shape> shapes) : shapes_(shapes) {
 }
 
 SectionProperties ShapeSections::at(std::size_t index, const Route& route, double height) const {
+  return at(index, route, height, {});
+}
+
+SectionProperties ShapeSections::at(std::size_t index,
+                                    const Route& route,
+                                    double height,
+                                    const FreeSizes& free_sizes) const {
   const Shape& shape = shapes_[index];
   if (shape.family == SectionFamily::polygon) {
     return scaled(polygons_[index], height);
@@ -141,9 +252,12 @@ SectionProperties ShapeSections::at(std::size_t index, const Route& route, doubl
   const auto names = dimensions(shape.family);
   std::vector<std::optional<double>> sizes(names.size());
   sizes[0] = height;
+  std::size_t free = 0;
   for (std::size_t i = 1; i < names.size(); ++i) {
     if (const auto ratio = ratio_of(shape, names[i].name)) {
       sizes[i] = *ratio * height;
+    } else if (!names[i].optional) {
+      sizes[i] = free_sizes[free++];
     }
   }
   return make_section(shape.family, sizes, forming_of(route));

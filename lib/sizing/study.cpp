@@ -1,6 +1,8 @@
 // SPDX-License-Identifier: MIT
 #include "sizing/study.hpp"
 
+#include "sizing/stock_solver.hpp"
+
 #include "sizing/words.hpp"
 
 #include <bismar/error.hpp>
@@ -38,122 +40,6 @@ std::vector<std::size_t> failed_constraints(const GroupSolution& solution) {
   return {solution.clash_falling, solution.clash_rising};
 }
 
-/// Calls back at most about twenty times a second.
-class Progress {
- public:
-  explicit Progress(const RunOptions& run) : run_(run) {}
-  void at(double share) {
-    const auto now = std::chrono::steady_clock::now();
-    if (run_.progress && now - last_ >= std::chrono::milliseconds(50)) {
-      last_ = now;
-      run_.progress(share);
-    }
-  }
-
- private:
-  const RunOptions& run_;
-  std::chrono::steady_clock::time_point last_ = std::chrono::steady_clock::now();
-};
-
-/// Walks through all combinations and counts what cannot exist, rule by rule.
-class Enumeration {
- public:
-  Enumeration(const Part& part, const Catalogue& catalogue, Solved& solved)
-      : part_(part),
-        catalogue_(catalogue),
-        solved_(solved),
-        lists_(stock_lists(part, catalogue)),
-        finishes_(finish_choices(part, catalogue)),
-        routes_(route_choices(part, catalogue)) {
-    const std::size_t sections = part.body.shapes.size() + lists_.size();
-    per_route_ = sections * finishes_.size();
-    per_material_ = per_route_ * routes_.size();
-    for (const auto route : routes_) {
-      std::vector<bool> can;
-      for (const auto& shape : part.body.shapes) {
-        can.push_back(!shape_rules(catalogue.routes[route], shape.family, false) &&
-                      !proportion_rules(catalogue.routes[route], shape));
-      }
-      for (const auto list : lists_) {
-        can.push_back(!shape_rules(catalogue.routes[route], catalogue.stock[list].family, true));
-      }
-      can_leave_.push_back(std::move(can));
-    }
-  }
-
-  template <class Take>
-  void material(std::uint32_t material, Take&& take) {
-    const auto& info = catalogue_.materials.info(material);
-    solved_.considered += per_material_;
-    if (const auto broken = material_rules(info, part_.limits)) {
-      solved_.cannot_exist[broken->rule] += per_material_;
-      return;
-    }
-    for (std::size_t r = 0; r < routes_.size(); ++r) {
-      route(material, info, r, take);
-    }
-  }
-
- private:
-  template <class Take>
-  void route(std::uint32_t material, const MaterialInfo& info, std::size_t r, Take&& take) {
-    const auto& route = catalogue_.routes[routes_[r]];
-    if (const auto broken = route_rules(info, route)) {
-      solved_.cannot_exist[broken->rule] += per_route_;
-      return;
-    }
-    const auto treatments = needed_treatments(info, route, catalogue_);
-    if (treatments.empty()) {
-      solved_.cannot_exist[Rule::condition_lost] += per_route_;
-      return;
-    }
-    solved_.considered += per_route_ * (treatments.size() - 1);
-    Candidate candidate;
-    candidate.material = material;
-    candidate.route = routes_[r];
-    const std::size_t each = finishes_.size() * treatments.size();
-    for (std::size_t s = 0; s < can_leave_[r].size(); ++s) {
-      const bool from_stock = s >= part_.body.shapes.size();
-      candidate.shape = from_stock ? Candidate::none : static_cast<std::uint32_t>(s);
-      candidate.stock = from_stock ? lists_[s - part_.body.shapes.size()] : Candidate::none;
-      if (!can_leave_[r][s]) {
-        solved_.cannot_exist[Rule::output_form] += each;
-      } else if (!from_stock && drawn_form_rules(info, route, part_.body.shapes[s].family)) {
-        solved_.cannot_exist[Rule::input_form] += each;
-      } else if (from_stock && !any_suits(catalogue_.stock[candidate.stock], info, route)) {
-        solved_.cannot_exist[Rule::stock_family] += each;
-      } else {
-        for (const auto treatment : treatments) {
-          candidate.treatment = treatment;
-          finishes(candidate, info, take);
-        }
-      }
-    }
-  }
-
-  template <class Take>
-  void finishes(Candidate candidate, const MaterialInfo& info, Take&& take) {
-    for (const auto finish : finishes_) {
-      candidate.finish = finish;
-      if (finish != Candidate::none && finish_rules(info, catalogue_.finishes[finish])) {
-        ++solved_.cannot_exist[Rule::finish];
-      } else {
-        take(candidate);
-      }
-    }
-  }
-
-  const Part& part_;
-  const Catalogue& catalogue_;
-  Solved& solved_;
-  std::vector<std::uint32_t> lists_;
-  std::vector<std::uint32_t> finishes_;
-  std::vector<std::uint32_t> routes_;
-  std::vector<std::vector<bool>> can_leave_;
-  std::size_t per_route_ = 0;
-  std::size_t per_material_ = 0;
-};
-
 }  // namespace
 
 CandidateNames names(const Candidate& candidate, const Part& part, const Catalogue& catalogue) {
@@ -167,50 +53,6 @@ CandidateNames names(const Candidate& candidate, const Part& part, const Catalog
       candidate.treatment == Candidate::none ? "" : catalogue.routes[candidate.treatment].id;
   out.finish =
       candidate.finish == Candidate::none ? "none" : catalogue.finishes[candidate.finish].id;
-  return out;
-}
-
-std::vector<std::uint32_t> stock_lists(const Part& part, const Catalogue& catalogue) {
-  std::vector<std::uint32_t> out;
-  const bool all = contains_word(part.body.stock, "all");
-  for (std::size_t i = 0; i < catalogue.stock.size(); ++i) {
-    const auto& list = catalogue.stock[i];
-    if (!list.sheet && (all || contains_word(part.body.stock, list.id))) {
-      out.push_back(static_cast<std::uint32_t>(i));
-    }
-  }
-  return out;
-}
-
-std::vector<std::uint32_t> finish_choices(const Part& part, const Catalogue& catalogue) {
-  std::vector<std::uint32_t> out;
-  for (const auto& id : part.finishes) {
-    if (id == "none") {
-      out.push_back(Candidate::none);
-      continue;
-    }
-    for (std::size_t i = 0; i < catalogue.finishes.size(); ++i) {
-      if (catalogue.finishes[i].id == id) {
-        out.push_back(static_cast<std::uint32_t>(i));
-      }
-    }
-  }
-  return out;
-}
-
-std::vector<std::uint32_t> route_choices(const Part& part, const Catalogue& catalogue) {
-  const auto& limits = part.limits;
-  std::vector<std::uint32_t> out;
-  for (std::size_t i = 0; i < catalogue.routes.size(); ++i) {
-    const auto& route = catalogue.routes[i];
-    const bool asked = limits.routes.empty() || contains_word(limits.routes, route.id);
-    // A route that runs after another one (bending after cutting) leaves no prismatic shape of its
-    // own.
-    if (route.kind == RouteKind::primary && asked &&
-        !contains_word(limits.forbidden_routes, route.id)) {
-      out.push_back(static_cast<std::uint32_t>(i));
-    }
-  }
   return out;
 }
 
@@ -230,7 +72,9 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
     out.least_utilisation = infinity;
     return out;
   }
-  const auto solution = solve_exact(problem, group);
+  const auto solution = compiled.candidate.stock == Candidate::none
+                            ? solve_exact(problem, group)
+                            : problem.stock_solver().solve(group);
   evaluations += solution.evaluations;
   if (!solution.solved) {
     throw InternalError("sizing: a candidate with one size is not solvable exactly");
@@ -261,13 +105,60 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
       step *= 2.0;
     }
     if (*std::max_element(utilisations.begin(), utilisations.end()) <= 1.0) {
-      out.points.push_back({x, objectives[0], objectives[1]});
+      out.points.push_back({x, {}, objectives[0], objectives[1]});
     } else {
       out.reason = "INTERNAL: the plain path does not confirm it";
     }
   }
   out.kind = out.points.empty() ? Outcome::Kind::infeasible : Outcome::Kind::feasible;
   return out;
+}
+
+std::optional<Outcome> solve_candidate(SizingProblem& problem,
+                                       const Candidate& candidate,
+                                       const RunOptions& run,
+                                       Incumbent* incumbent,
+                                       bool keep_group,
+                                       Solved& solved) {
+  if (candidate.shape != Candidate::none &&
+      !free_dimensions(problem.part().body.shapes[candidate.shape]).empty()) {
+    return solve_free(problem, candidate, run, incumbent, solved);
+  }
+  const auto& compiled = problem.add(candidate);
+  const bool bought_thickness = candidate.shape != Candidate::none &&
+                                takes_sheet_thickness(problem.catalogue().routes[candidate.route]);
+  if (bought_thickness && compiled.variable.values.empty()) {
+    ++solved.cannot_exist[Rule::stock_thickness];
+    problem.remove_last();
+    return std::nullopt;
+  }
+  auto outcome = solve_group(problem, problem.groups() - 1, solved.evaluations);
+  if (!keep_group) {
+    problem.remove_last();
+    outcome.group = Outcome::no_group;
+  }
+  return outcome;
+}
+
+void keep_or_count(Outcome outcome, const Part& part, const Catalogue& catalogue, Solved& solved) {
+  switch (outcome.kind) {
+    case Outcome::Kind::undecided:
+      ++solved.undecided[outcome.reason];
+      solved.undecided_text.insert(names(outcome.candidate, part, catalogue).material + ": " +
+                                   outcome.reason);
+      return;
+    case Outcome::Kind::excluded:
+      ++solved.excluded["value missing: " + outcome.reason];
+      return;
+    case Outcome::Kind::infeasible:
+      ++solved.infeasible[outcome.reason];
+      return;
+    case Outcome::Kind::skipped:
+      ++solved.not_better;
+      return;
+    case Outcome::Kind::feasible:
+      solved.outcomes.push_back(std::move(outcome));
+  }
 }
 
 Solved solve_candidates(const Part& part,
@@ -277,8 +168,10 @@ Solved solve_candidates(const Part& part,
                         std::uint32_t material) {
   Solved solved;
   solved.problem = std::make_unique<SizingProblem>(part, catalogue, settings);
-  Enumeration enumeration(part, catalogue, solved);
+  Enumeration enumeration(part, catalogue);
   Progress progress(run);
+  Incumbent* incumbent = nullptr;
+  const bool keep_all = material != Candidate::none;
   const auto count = static_cast<std::uint32_t>(catalogue.materials.size());
   const std::uint32_t from = material == Candidate::none ? 0 : material;
   const std::uint32_t to = material == Candidate::none ? count : material + 1;
@@ -287,17 +180,19 @@ Solved solve_candidates(const Part& part,
       solved.stopped = true;
       break;
     }
-    enumeration.material(m, [&](const Candidate& candidate) {
-      const auto& compiled = solved.problem->add(candidate);
-      const bool bought_thickness = candidate.shape != Candidate::none &&
-                                    takes_sheet_thickness(catalogue.routes[candidate.route]);
-      if (bought_thickness && compiled.variable.values.empty()) {
-        ++solved.cannot_exist[Rule::stock_thickness];
-        return;
+    const auto& kind = enumeration.of(m);
+    solved.considered += kind.considered;
+    for (const auto& [rule, number] : kind.cannot_exist) {
+      solved.cannot_exist[rule] += number;
+    }
+    for (Candidate candidate : kind.candidates) {
+      candidate.material = m;
+      if (auto outcome =
+              solve_candidate(*solved.problem, candidate, run, incumbent, keep_all, solved)) {
+        keep_all ? solved.outcomes.push_back(std::move(*outcome))
+                 : keep_or_count(std::move(*outcome), part, catalogue, solved);
       }
-      solved.outcomes.push_back(
-          solve_group(*solved.problem, solved.problem->groups() - 1, solved.evaluations));
-    });
+    }
     progress.at(static_cast<double>(m - from + 1) / static_cast<double>(to - from));
   }
   if (!settings.doubtful_sizes) {

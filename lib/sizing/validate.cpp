@@ -242,6 +242,18 @@ class PartCheck {
     share(settings_.near, "/settings/near", "margin of near designs");
     share(settings_.fold, "/settings/fold", "margin of folding");
     share(settings_.scrap_credit, "/settings/scrap_credit", "scrap credit");
+    const auto margin = [&](double value, double most, const std::string& key) {
+      if (!(value > 0.0 && value <= most)) {
+        faults_.fault(Code::out_of_range,
+                      "/settings/" + key,
+                      plain(value),
+                      "above 0, at most " + plain(most),
+                      "The margin " + key + " must lie above 0 and be at most " + plain(most) +
+                          "; it is " + plain(value) + ".");
+      }
+    };
+    margin(settings_.epsilon, 0.1, "epsilon");
+    margin(settings_.delta, 0.01, "delta");
     const auto length = [&](double value, const std::string& where, const std::string& what) {
       if (!(value >= 0.0) || !std::isfinite(value)) {
         faults_.fault(Code::out_of_range,

@@ -4,8 +4,12 @@
 
 #include <bismar/mechanics/section_builder.hpp>
 #include <bismar/sizing/existence.hpp>
+#include <bismar/sizing/result.hpp>
 
 #include <algorithm>
+#include <cstddef>
+#include <optional>
+#include <span>
 #include <string_view>
 
 namespace bismar {
@@ -58,10 +62,13 @@ class ShapeCheck {
     const std::string word(name(shape.family));
     const auto names = dimensions(shape.family);
     for (const auto& [key, dimension] : ratio_keys) {
-      const auto known = std::find_if(
+      const bool known = std::any_of(
           names.begin(), names.end(), [&](const auto& one) { return one.name == dimension; });
-      ratio(shape, where, key, dimension, known == names.end() ? nullptr : &*known, word);
+      if (const auto given = given_ratio(shape, key)) {
+        ratio(*given, where + "/" + std::string(key), key, known, word);
+      }
     }
+    root_radius(shape, where + "/root_radius_to_height", names, word);
     const bool bounds = faults_.positive(shape.height_min, where + "/height", "least height") &&
                         faults_.positive(shape.height_max, where + "/height", "largest height");
     if (bounds && shape.height_min >= shape.height_max) {
@@ -80,39 +87,61 @@ class ShapeCheck {
     }
   }
 
-  void ratio(const Shape& shape,
-             const std::string& where,
+  /// A ratio as the shape gives it, one number or a range; the root radius is no ratio of this
+  /// kind.
+  static std::optional<Ratio> given_ratio(const Shape& shape, std::string_view key) {
+    return key == "height_to_width"    ? shape.height_to_width
+           : key == "wall_to_height"   ? shape.wall_to_height
+           : key == "web_to_height"    ? shape.web_to_height
+           : key == "flange_to_height" ? shape.flange_to_height
+                                       : std::nullopt;
+  }
+
+  void no_such_ratio(const std::string& found,
+                     const std::string& place,
+                     std::string_view key,
+                     const std::string& word) {
+    faults_.fault(
+        Code::conflict, place, found, "nothing", "A " + word + " has no " + std::string(key) + ".");
+  }
+
+  void ratio(const Ratio& given,
+             const std::string& place,
              std::string_view key,
-             std::string_view dimension,
-             const SectionDimension* known,
+             bool known,
              const std::string& word) {
-    const auto value =
-        key == "height_to_width" ? shape.height_to_width : ratio_of(shape, dimension);
-    const std::string place = where + "/" + std::string(key);
-    if (value && known == nullptr) {
+    const std::string found = plain(given.low) + (given.is_fixed() ? "" : ".." + plain(given.high));
+    if (!known) {
+      no_such_ratio(found, place, key, word);
+    } else if (faults_.positive(given.low, place, std::string(key)) &&
+               faults_.positive(given.high, place, std::string(key)) && given.low > given.high) {
       faults_.fault(Code::conflict,
                     place,
-                    plain(*value),
-                    "nothing",
-                    "A " + word + " has no " + std::string(key) + ".");
-    } else if (value && !known->optional) {
-      faults_.positive(*value, place, std::string(key));
-    } else if (value && !(*value >= 0.0 && std::isfinite(*value))) {
+                    found,
+                    "the smaller end first",
+                    "The range of " + std::string(key) + " runs from high to low.");
+    }
+  }
+
+  void root_radius(const Shape& shape,
+                   const std::string& place,
+                   std::span<const SectionDimension> names,
+                   const std::string& word) {
+    if (!shape.root_radius_to_height) {
+      return;
+    }
+    const double given = *shape.root_radius_to_height;
+    const std::string_view key = "root_radius_to_height";
+    if (std::none_of(names.begin(), names.end(), [](const auto& one) {
+          return one.name == "root radius";
+        })) {
+      no_such_ratio(plain(given), place, key, word);
+    } else if (!(given >= 0.0 && std::isfinite(given))) {
       faults_.fault(Code::out_of_range,
                     place,
-                    plain(*value),
+                    plain(given),
                     "zero or more",
                     "The ratio " + std::string(key) + " cannot be negative.");
-    } else if (!value && known != nullptr && !known->optional) {
-      faults_.fault(
-          Code::unsupported,
-          where,
-          "",
-          "a fixed " + std::string(key),
-          "A " + word + " without " + std::string(key) +
-              " has two or more free sizes, which needs a solver that proves its bounds; this "
-              "version does not have it. Fix the ratio \"" +
-              std::string(key) + "\", or give several shapes with different ratios.");
     }
   }
 
@@ -130,14 +159,25 @@ class ShapeCheck {
     }
   }
 
+  /// The free dimensions at a height of 1 m that make a section wherever any do: every condition of
+  /// a section asks for thin walls and a large width.
+  static FreeSizes slenderest(const Shape& shape) {
+    FreeSizes sizes{};
+    std::size_t i = 0;
+    for (const auto& [dimension, range] : free_dimensions(shape)) {
+      sizes[i++] = dimension == "width" ? range.high : range.low;
+    }
+    return sizes;
+  }
+
   /// Ratios that make no section: a wall without a bore, a flange beyond the width, an outline that
-  /// crosses itself.
+  /// crosses itself. Of a range some part must make one.
   void proportions(const Shape& shape, const std::string& where) {
     try {
       if (shape.family == SectionFamily::polygon) {
         check_outline(shape);
       } else {
-        static_cast<void>(ShapeSections({&shape, 1}).at(0, Route{}, 1.0));
+        static_cast<void>(ShapeSections({&shape, 1}).at(0, Route{}, 1.0, slenderest(shape)));
       }
     } catch (const Error& error) {
       for (Fault fault : error.faults()) {
@@ -180,7 +220,7 @@ class ShapeCheck {
         return;
       case Sizes::Kind::step:
         if (faults_.positive(sizes.step, where + "/step", "size step") &&
-            (shape.height_max - shape.height_min) / sizes.step > 1e5) {
+            widest(shape) / sizes.step > 1e5) {
           faults_.fault(
               Code::out_of_range,
               where + "/step",
@@ -219,6 +259,16 @@ class ShapeCheck {
         return;
       }
     }
+  }
+
+  /// The widest span of a free size [m]: of the height, or of a free dimension over all heights.
+  static double widest(const Shape& shape) {
+    double span = shape.height_max - shape.height_min;
+    for (const auto& [dimension, range] : free_dimensions(shape)) {
+      const double own = range.high * shape.height_max - range.low * shape.height_min;
+      span = std::isfinite(own) ? std::max(span, own) : span;  // otherwise the ratio has a fault
+    }
+    return span;
   }
 
   void no_size(const std::string& where) {

@@ -217,7 +217,8 @@ class Asked {
       }
     }
     answer_.standing = Answer::Standing::dominated;
-    answer_.design = make_design(*solved_.problem, best->group, point.size);
+    std::size_t group = 0;
+    answer_.design = make_design(*solved_.problem, *best, point, group);
     answer_.headline = "Feasible, but beaten: " + what(*answer_.design) + ", " +
                        mass_text(point.mass) + ", " + money_text(point.cost, result_.currency) +
                        ".";
@@ -237,8 +238,13 @@ class Asked {
         std::find_if(solved_.outcomes.begin(), solved_.outcomes.end(), [&](const Outcome& outcome) {
           return outcome.candidate == design.candidate;
         });
-    answer_.checks = limit_lines(*solved_.problem, found->group, design);
-    answer_.sources = provenance_lines(*solved_.problem, found->group, design);
+    const bool own_ratios = found->group == Outcome::no_group;
+    if (own_ratios) {
+      solved_.problem->add(design.candidate, design.size, design.free_sizes);
+    }
+    const auto group = own_ratios ? solved_.problem->groups() - 1 : found->group;
+    answer_.checks = limit_lines(*solved_.problem, group, design);
+    answer_.sources = provenance_lines(*solved_.problem, group, design);
     answer_.index = index_lines(
         design, solved_.problem->part(), solved_.problem->catalogue(), solved_.problem->settings());
   }

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
-#include <bismar/numeric/root.hpp>
 #include <bismar/solver/box_problem.hpp>
+
+#include "solver/pieces.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -112,23 +113,18 @@ class OneVariable {
   }
 
   void solve_piece(double from, double to) {
-    evaluate(to);
-    if (largest_falling() > 1.0) {
-      consider_clash(to);
-      return;
-    }
-    const auto bracket = smallest_feasible(
+    const auto least = least_on_piece(
         [this](double x) {
           evaluate(x);
           return largest_falling();
         },
         from,
         to);
-    evaluate(*bracket.x);
-    if (feasible()) {
-      add(*bracket.x);
+    evaluate(least.value_or(to));
+    if (least && feasible()) {
+      add(*least);
     } else {
-      consider_clash(*bracket.x);
+      consider_clash(least.value_or(to));
     }
   }
 
@@ -230,8 +226,8 @@ bool solvable(const BoxProblem& problem, std::size_t group) {
   if (variables.size() != 1) {
     return false;
   }
-  if (variables[0].kind == Variable::Kind::ordered_set) {
-    return true;
+  if (variables[0].kind != Variable::Kind::continuous) {
+    return variables[0].kind == Variable::Kind::ordered_set;
   }
   for (std::size_t i = 0; i < problem.objectives(); ++i) {
     const Trend trend = problem.objective_trend(group, i, 0);

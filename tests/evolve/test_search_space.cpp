@@ -66,3 +66,19 @@ TEST_CASE("the last number chooses among the groups asked for, a fraction by its
   CHECK(one.numbers() == 1);
   CHECK(one.decode(std::vector<double>{0.0}, x) == 1);
 }
+
+TEST_CASE("shares reach every whole number evenly, and only numbers between the bounds") {
+  Variable bars;
+  bars.kind = Variable::Kind::integer;
+  bars.lower = 1.5;
+  bars.upper = 4.2;
+  const FunctionProblem problem(1, {{{bars}, 0, {}}});
+  const SearchSpace space(problem, {0});
+  std::vector<double> x;
+  std::vector<double> seen;
+  for (const double share : {0.0, 0.33, 0.34, 0.66, 0.67, 1.0}) {
+    space.decode(std::vector<double>{share}, x);
+    seen.push_back(x[0]);
+  }
+  CHECK(seen == std::vector<double>{2.0, 2.0, 3.0, 3.0, 4.0, 4.0});
+}

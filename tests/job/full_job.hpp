@@ -25,6 +25,9 @@ inline const std::string full_job = R"json({
     "missing": "exclude",
     "range_ends": { "price": "high", "yield strength": "mid" },
     "route_end": "low",
+    "explain": "full",
+    "epsilon": "0.5 %",
+    "delta": 1e-5,
     "near": "10 %",
     "fold": 0.01,
     "doubtful_sizes": true,
@@ -46,7 +49,7 @@ inline const std::string full_job = R"json({
                            "sizes": ["20 mm", "25 mm"] } },
           { "ellipse": { "height_to_width": 1.25, "sizes": "continuous" } },
           { "round_tube": { "wall_to_diameter": "10 %", "diameter": "1 in..2 in" } },
-          { "rectangular_tube": { "height_to_width": 1.5, "wall_to_height": 0.08 } }
+          { "rectangular_tube": { "height_to_width": 1.5, "wall_to_height": "0.02..8 %" } }
         ],
         "stock": ["round-bar", "chs"],
         "load_cases": [
@@ -98,7 +101,7 @@ inline const std::string full_job = R"json({
         "length": "2 m",
         "shapes": [
           { "hexagon": { "width_across_flats": "10 mm..60 mm" } },
-          { "elliptical_tube": { "height_to_width": 2, "wall_to_height": 0.06 } },
+          { "elliptical_tube": { "height_to_width": "0.5..2", "wall_to_height": "6 %" } },
           { "i_section": { "height_to_width": 2, "web_to_height": 0.05, "flange_to_height": 0.08,
                            "root_radius_to_height": 0.03 } },
           { "channel": { "height_to_width": 2, "web_to_height": 0.06, "flange_to_height": 0.06 } },

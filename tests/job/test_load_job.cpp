@@ -45,6 +45,9 @@ TEST_CASE("a small job takes the documented defaults") {
   CHECK(service.loads[0].at == 0.3);
   CHECK(service.factors.empty());
   CHECK(job.settings.near == 0.05);
+  CHECK(job.settings.explain == Explain::front);
+  CHECK(job.settings.epsilon == 1e-3);
+  CHECK(job.settings.delta == 1e-6);
 }
 
 TEST_CASE("shapes and sizes of a job are read in SI units") {
@@ -69,8 +72,34 @@ TEST_CASE("shapes and sizes of a job are read in SI units") {
   CHECK(member.shapes[4].height_max == Approx(0.0508).epsilon(1e-15));
   CHECK(member.shapes[5].family == SectionFamily::rectangular_tube);
   CHECK(member.shapes[5].height_to_width == 1.5);
-  CHECK(member.shapes[5].wall_to_height == 0.08);
+  CHECK(member.shapes[5].wall_to_height == Ratio(0.0002, 0.08));  // the unit behind counts for both
   CHECK(member.stock == std::vector<std::string>{"round-bar", "chs"});
+}
+
+TEST_CASE("a ratio of a job is a number, a text, a range, or left out and free") {
+  const auto shape = [](const std::string& ratios) {
+    const std::string text = with(small_job, R"("round": {})", R"("rectangle": {)" + ratios + "}");
+    return load_job_text(text, "job.json").parts.at(0).body.shapes.at(0);
+  };
+  CHECK(shape(R"("height_to_width": 1.25)").height_to_width == Ratio(1.25));
+  CHECK(shape(R"("height_to_width": "1.25")").height_to_width == Ratio(1.25));
+  CHECK(shape(R"("height_to_width": "125 %")").height_to_width == Ratio(1.25));
+  CHECK(shape(R"("height_to_width": "0.5..2")").height_to_width == Ratio(0.5, 2.0));
+  CHECK(shape(R"("height_to_width": "50..200 %")").height_to_width == Ratio(0.5, 2.0));
+  CHECK(shape(R"("height_to_width": "2..2")").height_to_width->is_fixed());
+  CHECK_FALSE(shape("").height_to_width.has_value());
+  // Left out it is free in the documented range: h/b from 0.2 to 5 is a width of h/5 to 5 h.
+  const auto free = free_dimensions(shape(""));
+  REQUIRE(free.size() == 1);
+  CHECK(free[0].name == "width");
+  CHECK(free[0].to_height == Ratio(0.2, 5.0));
+}
+
+TEST_CASE("the margins of the search are read as ratios") {
+  const Settings settings = load_job_text(full_job, "full.json").settings;
+  CHECK(settings.explain == Explain::full);
+  CHECK(settings.epsilon == Approx(0.005).epsilon(1e-15));
+  CHECK(settings.delta == 1e-5);
 }
 
 TEST_CASE("loads of a job are read in SI units") {

@@ -7,7 +7,9 @@
 #include "support/catch.hpp"
 
 #include <algorithm>
+#include <limits>
 #include <string>
+#include <utility>
 #include <vector>
 
 using namespace bismar;
@@ -43,6 +45,7 @@ const Solved& solved() {
   static const Solved one = [] {
     Solved made;
     made.job = load_job_text(lever_job, "lever.json");
+    made.job.settings.explain = Explain::full;
     const Part& part = made.job.parts.at(0);
     PartResult found;
     found.result = front(part, made.job.catalogue, made.job.settings);
@@ -112,6 +115,110 @@ TEST_CASE("a stored result of today verifies without a difference") {
   CHECK(found.designs == solved().results.at(0).result.designs.size());
   CHECK(found.values > 5 * found.designs);
   CHECK(found.largest_difference <= 1e-12);
+}
+
+TEST_CASE("work done is stored and read back, and lies outside the digest") {
+  Solved other = solved();
+  other.results.at(0).result.telemetry = {
+      .evaluations = 11, .boxes = 22, .skipped = 33, .dominated = 44, .seconds = 0.5};
+  const StoredResult read = read_result_text(result_json(other.job, other.results), "r.json");
+  const Telemetry& work = read.results.at(0).result.telemetry;
+  CHECK(work.evaluations == 11);
+  CHECK(work.boxes == 22);
+  CHECK(work.skipped == 33);
+  CHECK(work.dominated == 44);
+  CHECK(work.seconds == 0.5);
+  CHECK(read.digest == read_result_text(stored_text(), "r.json").digest);
+}
+
+TEST_CASE("what the search reached is stored and read back, infinity too") {
+  Solved other = solved();
+  Result& result = other.results.at(0).result;
+  result.delta = 1e-6;
+  for (const double reached : {0.0, 9.7e-4, std::numeric_limits<double>::infinity()}) {
+    result.epsilon_reached = reached;
+    const std::string text = result_json(other.job, other.results);
+    const StoredResult read = read_result_text(text, "r.json");
+    CHECK(read.results.at(0).result.epsilon_reached == reached);
+    CHECK(read.results.at(0).result.delta == 1e-6);
+    CHECK(read.digest == read.actual_digest);
+    CHECK(result_json(read.job, read.results) == text);
+  }
+}
+
+TEST_CASE("free sizes are stored and read back, as many as the shape has") {
+  // Invented sizes: storing them asks for no search.
+  Solved other;
+  const std::string job =
+      with(lever_job,
+           R"({ "ellipse": { "height_to_width": 1.25, "height": "8 mm..60 mm" } })",
+           R"({ "ellipse": {} }, { "elliptical_tube": {} })");
+  other.job = load_job_text(job, "lever.json");
+  other.results = solved().results;
+  other.results.at(0).ruler.reset();
+  Result& result = other.results.at(0).result;
+  result.others.resize(1);
+  for (Design& design : result.designs) {
+    design.candidate.stock = Candidate::none;
+    design.candidate.shape = 1;
+    design.size = 0.03;
+    design.free_sizes = {0.0231, 0.0, 0.0};
+  }
+  FeasiblePoint& point = result.others.front();
+  point.candidate.stock = Candidate::none;
+  point.candidate.shape = 2;
+  point.size = 0.04;
+  point.free_sizes = {0.031, 0.0017, 0.0};
+  const std::string text = result_json(other.job, other.results);
+  const StoredResult read = read_result_text(text, "r.json");
+  const Result& back = read.results.at(0).result;
+  REQUIRE(back.designs.size() == result.designs.size());
+  CHECK(back.designs.at(0).free_sizes == FreeSizes{0.0231, 0.0, 0.0});
+  CHECK(back.others.at(0).free_sizes == FreeSizes{0.031, 0.0017, 0.0});
+  CHECK(result_json(read.job, read.results) == text);
+  // One size too few or too many, or no list of numbers.
+  for (const char* wrong : {"[]", "[0.031]", "[0.031,0.0017,0.002]", R"(["a",0.0017])", "0.031"}) {
+    INFO(wrong);
+    CHECK_THROWS_AS(read_result_text(with(text, "[0.031,0.0017]", wrong), "r.json"), Error);
+  }
+}
+
+TEST_CASE("a solved design with free sizes verifies, and a changed free size is found") {
+  Solved free;
+  free.job = load_job_text(R"json({
+    "bismar": 1,
+    "parts": [{
+      "name": "lever", "quantity": 2000,
+      "member": {
+        "length": "300 mm",
+        "shapes": [{ "ellipse": { "height_to_width": "0.8..2", "height": "8 mm..60 mm" } }],
+        "load_cases": [{ "support": "cantilever", "loads": [{ "force": "655 N", "at": "end" }] }]
+      },
+      "limits": { "deflection": "10 mm", "classes": ["aluminium"], "routes": ["hot-forging"] }
+    }]
+  })json",
+                           "free.json");
+  PartResult found;
+  found.result = front(free.job.parts.at(0), free.job.catalogue, free.job.settings);
+  REQUIRE(found.result.front_count > 0);
+  CHECK(found.result.delta == 1e-6);
+  CHECK(found.result.epsilon_reached <= 1e-3);
+  CHECK(found.result.telemetry.boxes > 0);
+  free.results.push_back(std::move(found));
+  const Design& first = free.results[0].result.designs[0];
+  CHECK(first.free_sizes[0] == Approx(first.section.width).epsilon(1e-12));
+  CHECK(first.free_sizes[1] == 0.0);
+  const Verification sound =
+      verify(read_result_text(result_json(free.job, free.results), "r.json"));
+  for (const Difference& difference : sound.differences) {
+    UNSCOPED_INFO(difference.text());
+  }
+  CHECK(sound.differences.empty());
+  CHECK(sound.largest_difference <= 1e-12);
+  free.results[0].result.designs[0].free_sizes[0] *= 1.001;
+  const Verification changed =
+      verify(read_result_text(result_json(free.job, free.results), "r.json"));
+  CHECK(has_difference(changed, "/ mass"));
 }
 
 TEST_CASE("telemetry is outside the digest, everything else is inside") {
@@ -185,7 +292,10 @@ TEST_CASE("what is no stored result, or one of another version, is refused with 
   CHECK(fault("{}").code == Code::missing);
   CHECK(fault("{").code == Code::json_malformed);
   CHECK(fault(R"({"bismar_result": 99})").code == Code::version_unsupported);
-  CHECK(fault(R"({"bismar_result": 2})").message == "the stored result lacks its job.");
+  CHECK(fault(R"({"bismar_result": 3})").message == "the stored result lacks its job.");
+  const Fault old = fault(with(stored_text(), "\"bismar_result\": 3", "\"bismar_result\": 2"));
+  CHECK(old.code == Code::version_unsupported);
+  CHECK(old.message == "this result has format version 2; this program reads version 3.");
   const Fault kind =
       fault(with(stored_text(), "\"front_count\": ", "\"front_count\": \"x\", \"y\": "));
   CHECK(kind.code == Code::wrong_type);

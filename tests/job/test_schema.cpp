@@ -224,8 +224,6 @@ TEST_CASE("schema and loader refuse a job that lacks a required key") {
       "/parts/0/member/load_cases/0/support/y",
       "/parts/0/member/load_cases/0/loads/0/at",
       "/parts/0/member/load_cases/0/loads/5/from_preload/preload",
-      "/parts/0/member/shapes/3/ellipse/height_to_width",
-      "/parts/0/member/shapes/4/round_tube/wall_to_diameter",
       "/parts/0/limits/properties/0/property",
       "/parts/0/operations/0/operation",
   };
@@ -237,6 +235,27 @@ TEST_CASE("schema and loader refuse a job that lacks a required key") {
     CHECK_FALSE(judge().accepts(job));
     CHECK_FALSE(loads(job));
   }
+}
+
+TEST_CASE("schema and loader take the same texts for a ratio") {
+  const auto both = [](const json& ratio) {
+    json job = read(job_test::small_job);
+    job.at("/parts/0/member/shapes/0"_json_pointer) = {{"ellipse", {{"height_to_width", ratio}}}};
+    const bool loaded = loads(job);
+    CHECK(judge().accepts(job) == loaded);
+    return loaded;
+  };
+  for (const char* text : {"0.5..2", "50..200 %", "50 %..200 %", "1.25", "125 %", " .5 .. 2 "}) {
+    INFO(text);
+    CHECK(both(text));
+  }
+  for (const char* text : {"0.5..", "..2", "0.5..-2", "-1..2", "a..b", "", "0.5...2"}) {
+    INFO(text);
+    CHECK_FALSE(both(text));
+  }
+  CHECK(both(2));
+  CHECK_FALSE(both(0));
+  CHECK_FALSE(both(json::array({0.5, 2})));
 }
 
 TEST_CASE("the schema knows quantities by their form") {

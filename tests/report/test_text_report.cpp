@@ -5,6 +5,7 @@
 
 #include <algorithm>
 #include <charconv>
+#include <limits>
 #include <string>
 
 #include "report/synthetic.hpp"
@@ -319,6 +320,74 @@ TEST_CASE("check names sizes, supports, angles and what fatigue reads as the tra
   CHECK(has(swinging, "surface machined"));
   CHECK(has(swinging, "reliability in fatigue 0.99"));
   CHECK(has(swinging, "mean stress in fatigue Goodman"));
+}
+
+TEST_CASE("check names every free size of a shape with its range") {
+  Part part;
+  part.body.length = 1.0;
+  part.body.shapes = {rectangle({.height_to_width = Ratio(0.5, 2.0),
+                                 .height_min = 8e-3,
+                                 .height_max = 40e-3,
+                                 .sizes = Sizes::multiples_of(1e-3)}),
+                      round_tube({.wall_to_height = Ratio(0.02, 0.2)}),
+                      elliptical_tube({.wall_to_height = 0.06}),
+                      i_section({.height_to_width = Ratio(1.0, 2.0),
+                                 .flange_to_height = 0.08,
+                                 .root_radius_to_height = 0.02})};
+  const std::string text = unwrapped(check_text(part, {}));
+  for (const char* words :
+       {"solid rectangle, 2 free sizes: height 8.00 to 40.0 mm, width 0.500 to 2.00 times the "
+        "height, each in steps of 1.00 mm",
+        "round tube, 2 free sizes: diameter 4.00 to 500 mm, wall 0.0200 to 0.200 times the "
+        "diameter, each any size",
+        // Left out: free in the default range of part.hpp, h/b = 0.2..5.
+        "elliptical tube, wall/height 0.06, 2 free sizes: height 4.00 to 500 mm, width 0.200 to "
+        "5.00 times the height",
+        "I section, flange/height 0.08, root radius/height 0.02, 3 free sizes: height 4.00 to 500 "
+        "mm, width 0.500 to 1.00 times the height, web 0.00500 to 0.100 times the height"}) {
+    INFO(words);
+    CHECK(has(text, words));
+  }
+}
+
+TEST_CASE("the report states what the search of several free sizes promises") {
+  synthetic::Study study = synthetic::lever();
+  Result& result = study.result;
+  const auto text = [&] { return unwrapped(front_text(result, &study.ruler)); };
+  CHECK_FALSE(has(text(), "margin"));
+  result.delta = 1e-6;
+  result.telemetry.boxes = 12345;
+  result.epsilon_reached = 1e-3;
+  CHECK(has(text(),
+            "Front complete within 0.10 % for every design with a margin of 1e-6; boxes examined: "
+            "12 345."));
+  result.epsilon_reached = 0.000331;  // never stated tighter than it is
+  CHECK(has(text(), "Front complete within 0.034 % for"));
+  result.epsilon_reached = 0.0996;
+  CHECK(has(text(), "Front complete within 10 % for"));
+  result.epsilon_reached = 0.0;
+  CHECK(has(text(), "Front complete for every design with a margin of 1e-6;"));
+  result.epsilon_reached = std::numeric_limits<double>::infinity();
+  CHECK(has(text(), "Front not proven complete"));
+  CHECK_FALSE(has(text(), "Front complete"));
+  result.epsilon_reached = 1e-3;
+  result.exact = false;  // stopped, or a design left out
+  CHECK(has(text(), "Front not proven complete"));
+
+  Result empty = synthetic::nothing_feasible().result;
+  empty.delta = 1e-5;
+  CHECK(has(unwrapped(front_text(empty, nullptr)),
+            "Proven: no decided candidate has a design with a margin of 1e-5"));
+  empty.exact = false;
+  CHECK_FALSE(has(unwrapped(front_text(empty, nullptr)), "Proven"));
+}
+
+TEST_CASE("the next size of a design with several free sizes says what becomes of the others") {
+  synthetic::Study study = synthetic::lever();
+  CHECK(has(unwrapped(front_text(study.result, nullptr)), "next size 30.0 mm: 0.458 kg"));
+  study.result.designs[2].free_sizes[0] = 0.0234;
+  CHECK(has(unwrapped(front_text(study.result, nullptr, {.width = 200})),
+            "next size 30.0 mm, same proportions: 0.458 kg"));
 }
 
 TEST_CASE("the front as CSV reads back to the same numbers and texts") {

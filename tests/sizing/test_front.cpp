@@ -225,7 +225,7 @@ TEST_CASE("limits on properties exclude by the end of the range that is on the s
 
 TEST_CASE("grouped fronts keep what a shared choice needs and the front loses") {
   const auto part = starter_lever();
-  const auto whole = front(part, test::starter());
+  const auto whole = front(part, test::starter(), {.explain = Explain::full});
   const auto groups = fronts(part, test::starter(), GroupBy::material);
   CHECK(groups.size() > whole.front_count);
   std::size_t points = 0;

@@ -203,7 +203,7 @@ TEST_CASE("a finish adds its mass and its cost, and its rating counts in the med
   part.limits.materials = {"steel-a"};
   part.limits.medium = "fresh water";
   part.finishes = {"none", "paint"};
-  const auto result = front(part, test::small_catalogue());
+  const auto result = front(part, test::small_catalogue(), {.explain = Explain::full});
   REQUIRE(result.front_count == 1);
   const auto& lever = result.designs[0];
   CHECK(lever.finish == "paint");  // bare steel is only fair

@@ -19,7 +19,8 @@ ResolvedMaterial resolved(const char* id,
   const auto& catalogue = test::starter();
   const auto material = catalogue.materials.find(id).value();
   const PropertyReader reader(catalogue, settings);
-  return resolve(reader, material, catalogue.materials.steps(material)[0].row, load_case, {service});
+  return resolve(
+      reader, material, catalogue.materials.steps(material)[0].row, load_case, {service});
 }
 
 LoadCase lasting(double seconds) {

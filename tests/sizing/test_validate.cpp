@@ -4,8 +4,13 @@
 
 #include <bismar/error.hpp>
 
+#include <algorithm>
+#include <cmath>
 #include <functional>
 #include <limits>
+#include <optional>
+#include <random>
+#include <vector>
 
 using namespace bismar;
 
@@ -53,14 +58,49 @@ TEST_CASE("each fault of a part has its code, its place and a remedy") {
        [](Part& p, Settings&) { p.quantity = 0.0; }},
       {"/batch", Code::out_of_range, "batch", [](Part& p, Settings&) { p.batch = 5000.0; }},
       {"/member/shapes", Code::empty, "neither", [](Part& p, Settings&) { p.body.shapes.clear(); }},
-      {"/member/shapes/0",
-       Code::unsupported,
-       "two or more free sizes",
-       [](Part& p, Settings&) { p.body.shapes = {ellipse({})}; }},
-      {"/member/shapes/0",
-       Code::unsupported,
-       "wall_to_height",
-       [](Part& p, Settings&) { p.body.shapes = {round_tube({})}; }},
+      {"/member/shapes/0/height_to_width",
+       Code::conflict,
+       "from high to low",
+       [](Part& p, Settings&) { p.body.shapes = {ellipse({.height_to_width = Ratio(2.0, 0.5)})}; }},
+      {"/member/shapes/0/height_to_width",
+       Code::out_of_range,
+       "above zero",
+       [](Part& p, Settings&) { p.body.shapes = {ellipse({.height_to_width = Ratio(0.0, 2.0)})}; }},
+      {"/member/shapes/0/height_to_width",
+       Code::not_finite,
+       "finite",
+       [&](Part& p, Settings&) {
+         p.body.shapes = {ellipse({.height_to_width = Ratio(0.5, nan)})};
+       }},
+      {"/member/shapes/0/wall_to_height",
+       Code::conflict,
+       "has no",
+       [](Part& p, Settings&) { p.body.shapes = {ellipse({.wall_to_height = Ratio(0.1, 0.2)})}; }},
+      {"/member/shapes/0/root_radius_to_height",
+       Code::conflict,
+       "has no",
+       [](Part& p, Settings&) { p.body.shapes = {ellipse({.root_radius_to_height = 0.1})}; }},
+      {"/member/shapes/0/wall_to_height",
+       Code::out_of_range,
+       "no bore",
+       [](Part& p, Settings&) {
+         p.body.shapes = {round_tube({.wall_to_height = Ratio(0.5, 0.6)})};
+       }},
+      // At a height of 1 the web is thicker than the widest flange.
+      {"/member/shapes/0/web_to_height",
+       Code::out_of_range,
+       "does not fit the other ratios",
+       [](Part& p, Settings&) {
+         p.body.shapes = {
+             i_section({.height_to_width = Ratio(4.0, 5.0), .web_to_height = Ratio(0.3, 0.4)})};
+       }},
+      // Widths up to 5 x 0.5 m in steps of 0.02 mm are more than 100,000, heights are not.
+      {"/member/shapes/0/sizes/step",
+       Code::out_of_range,
+       "100,000",
+       [](Part& p, Settings&) {
+         p.body.shapes = {rectangle({.sizes = Sizes::multiples_of(2e-5)})};
+       }},
       {"/member/shapes/0/height_to_width",
        Code::conflict,
        "has no",
@@ -207,6 +247,14 @@ TEST_CASE("each fault of a part has its code, its place and a remedy") {
        Code::out_of_range,
        "between 0 and 1",
        [](Part&, Settings& s) { s.near = -0.1; }},
+      {"/settings/epsilon",
+       Code::out_of_range,
+       "at most 0.1",
+       [](Part&, Settings& s) { s.epsilon = 0.2; }},
+      {"/settings/delta",
+       Code::out_of_range,
+       "at most 0.01",
+       [](Part&, Settings& s) { s.delta = 0.0; }},
       {"/settings/kerf", Code::out_of_range, "negative", [](Part&, Settings& s) { s.kerf = -1.0; }},
   };
   for (const auto& one : cases) {
@@ -217,6 +265,93 @@ TEST_CASE("each fault of a part has its code, its place and a remedy") {
     CHECK(faults[0].code == one.code);
     CHECK(faults[0].message.find(one.says) != std::string::npos);
   }
+}
+
+TEST_CASE("ratios that are ranges or left out are no faults") {
+  const std::vector<Shape> shapes = {rectangle({}),
+                                     ellipse({.height_to_width = Ratio(0.5, 2.0)}),
+                                     round_tube({}),
+                                     elliptical_tube({}),
+                                     rectangular_tube({.height_to_width = 1.5}),
+                                     i_section({}),
+                                     channel({.root_radius_to_height = 0.02}),
+                                     tee({}),
+                                     angle({}),
+                                     // Only a part of the range makes a tube.
+                                     round_tube({.wall_to_height = Ratio(0.3, 0.9)})};
+  CHECK(faults_after([&](Part& p, Settings&) { p.body.shapes = shapes; }).empty());
+}
+
+// Oracle: a dense grid over the ranges, each place as a shape of fixed ratios, which the section
+// functions judge themselves.
+TEST_CASE("a range is refused exactly when no place in it makes a section") {
+  struct Family {
+    Shape (*make)(const ShapeOptions&);
+    bool width;
+    bool wall;
+    bool flanged;
+    bool root;
+  };
+  const Family families[] = {{round_tube, false, true, false, false},
+                             {elliptical_tube, true, true, false, false},
+                             {rectangular_tube, true, true, false, false},
+                             {i_section, true, false, true, true},
+                             {channel, true, false, true, true},
+                             {tee, true, false, true, true},
+                             {angle, true, true, false, true}};
+  std::mt19937 random(20);
+  const auto between = [&](double low, double high) {
+    return low * std::pow(high / low, static_cast<double>(random() % 1000) / 999.0);
+  };
+  const auto range = [&](double low, double high) {
+    const double from = between(low, high);
+    return Ratio(from, std::min(high, from * between(1.01, 3.0)));
+  };
+  const auto is_sound = [](const Shape& shape) {
+    return faults_after([&](Part& p, Settings&) { p.body.shapes = {shape}; }).empty();
+  };
+  constexpr int places = 5;
+  const auto at = [](const Ratio& ratio, int place) {
+    return ratio.low + (ratio.high - ratio.low) * place / (places - 1);
+  };
+  int refused = 0;
+  int accepted = 0;
+  for (int trial = 0; trial < 40; ++trial) {
+    for (const Family& family : families) {
+      ShapeOptions free;
+      free.height_to_width = family.width ? std::optional(range(0.3, 6.0)) : std::nullopt;
+      free.wall_to_height = family.wall ? std::optional(range(0.1, 1.5)) : std::nullopt;
+      free.web_to_height = family.flanged ? std::optional(range(0.1, 1.5)) : std::nullopt;
+      free.flange_to_height = family.flanged ? std::optional(range(0.1, 1.5)) : std::nullopt;
+      if (family.root && trial % 2 == 0) {
+        free.root_radius_to_height = between(0.01, 0.3);
+      }
+      bool any = false;
+      for (int a = 0; a < (family.width ? places : 1) && !any; ++a) {
+        for (int b = 0; b < places && !any; ++b) {
+          for (int c = 0; c < (family.flanged ? places : 1) && !any; ++c) {
+            ShapeOptions fixed = free;
+            if (family.width) {
+              fixed.height_to_width = at(*free.height_to_width, a);
+            }
+            if (family.wall) {
+              fixed.wall_to_height = at(*free.wall_to_height, b);
+            } else {
+              fixed.web_to_height = at(*free.web_to_height, b);
+              fixed.flange_to_height = at(*free.flange_to_height, c);
+            }
+            any = is_sound(family.make(fixed));
+          }
+        }
+      }
+      const Shape shape = family.make(free);
+      INFO(name(shape.family) << ", trial " << trial);
+      CHECK(is_sound(shape) == any);
+      ++(any ? accepted : refused);
+    }
+  }
+  CHECK(accepted > 50);
+  CHECK(refused > 50);
 }
 
 TEST_CASE("a load outside the member is a fault of its load case") {

@@ -23,12 +23,15 @@ struct PartResult {
 /// of the tables it was read with, every kept design with all utilisations and cost lines, every
 /// other feasible point, funnel, ruler, undecided candidates, notes and the caution.
 ///
-/// Values are SI and in the job's currency. Numbers are the shortest text that reads back as the
-/// same double. `digest` is taken over everything but itself and `telemetry`, so equal results have
-/// equal digests; it notices accidents, not forgery. Ends with a line end.
+/// Values are SI and in the job's currency. A design and a point carry "size", the height of a
+/// shape or the id of a stock size, and "free_sizes", the free dimensions beside the height in the
+/// order of free_dimensions(), as many as the shape has. "epsilon_reached" is null where a search
+/// could not be finished. Numbers are the shortest text that reads back as the same double.
+/// `digest` is taken over everything but itself and `telemetry`, so equal results have equal
+/// digests; it notices accidents, not forgery. Ends with a line end.
 ///
 /// @throws bismar::Error  unknown_name: a result of a part that the job does not have.
-/// @throws bismar::InternalError  a number that is not finite.
+/// @throws bismar::InternalError  a number that is not finite, `epsilon_reached` apart.
 [[nodiscard]] BISMAR_API std::string result_json(const Job& job,
                                                  std::span<const PartResult> results);
 

@@ -163,6 +163,28 @@ struct Explanation {
   std::vector<std::string> steps;  ///< The formula, its numbers, its result, one step a line.
 };
 
+/// Which made-up section bounds a limit state over a box of sections, see section_box.hpp. All have
+/// the largest resistances and stiffnesses of the box, the least plate ratios and outline, but for
+/// what is said here.
+enum class BestSection : std::uint8_t {
+  stiff,
+  /// For columns that twist: I_t and I_w are raised as far as the polar radius of gyration, made of
+  /// the largest I and A, lies above the least one.
+  column,
+  slim,     ///< For radii of gyration: an area so small that they are the largest.
+  swift,    ///< For vibration: the same, for a material whose density is lightened().
+  large,    ///< The largest outline: for webs that resist with their height.
+  cracked,  ///< The same, the stresses so low that no geometry factor of a smaller depth lies
+            ///< below.
+  /// For the size factor of fatigue, which jumps up by 4e-4 at 51 mm: 0.8 % less height.
+  tired,
+  /// Where an axial stress relieves bending: bending, shear and torsion resisted as much better as
+  /// the area varies; twisting as for a column.
+  relieved,
+};
+
+class SeparableBound;
+
 /// One way to fail. Utilisation u = demand / capacity; feasible when u <= 1.
 ///
 /// Adding one: a file in lib/mechanics/limit_states/, its test, and one line in the list.
@@ -197,8 +219,17 @@ class BISMAR_API LimitState {
   [[nodiscard]] virtual Explanation explain(const CheckInput& input) const = 0;
   /// When the whole section is scaled up with its ratios fixed.
   [[nodiscard]] virtual Trend trend_with_scale() const = 0;
+  /// The made-up section of a box (section_box.hpp) at which u is nowhere above u of a real section
+  /// of the box, held against the same load case and limits, with the material lightened().
+  [[nodiscard]] virtual BestSection best_section(const LoadEffects& /*effects*/,
+                                                 const MemberMaterial& /*material*/) const {
+    return BestSection::stiff;
+  }
   /// When one material value grows.
   [[nodiscard]] virtual Trend trend_with(Symbol symbol) const = 0;
+  /// Conditions that u <= 1 implies, each a number of the section against a number of the material
+  /// (separable_bound.hpp); null where there are none.
+  [[nodiscard]] virtual const SeparableBound* separable() const { return nullptr; }
 };
 
 /// The built-in limit states in the stated order in which exclusions are reported.

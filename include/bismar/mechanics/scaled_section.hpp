@@ -13,5 +13,9 @@ namespace bismar {
 /// fixed ratios is the root of monotone utilisations: stresses fall as powers of the factor.
 /// Agrees with the section functions to a few units in the last place while the corners scale too.
 [[nodiscard]] BISMAR_API SectionProperties scaled(const SectionProperties& section, double factor);
+/// The same into a section that is there already, whose memory is used again. Not onto itself.
+BISMAR_API void scale_into(const SectionProperties& section,
+                           double factor,
+                           SectionProperties& out);
 
 }  // namespace bismar

@@ -2,6 +2,7 @@
 #pragma once
 
 #include <bismar/export.hpp>
+#include <bismar/numeric/parallel.hpp>
 #include <bismar/sizing/result.hpp>
 
 #include <functional>
@@ -11,11 +12,25 @@
 
 namespace bismar {
 
+/// What spares a front work. None changes the result; each can be switched off to see that, and
+/// what it is worth.
+struct Reductions {
+  bool material_limits = true;  ///< What a material fails by itself is asked before any section.
+  bool dominance = true;   ///< A material that another replaces is looked at only near the front.
+  bool bounds = true;      ///< Bounds in which powers of material values stand outside the loop.
+  bool skipping = true;    ///< What lies beyond the front and its near designs is not solved.
+  bool one_point = true;   ///< Where mass and cost agree a candidate has one point, polished.
+  bool directions = true;  ///< The size along which all is monotone is solved for, not split.
+};
+
 struct RunOptions {
   /// Called with the share done in [0, 1], from the calling thread, at most about 20 times a
   /// second.
-  std::function<void(double)> progress;
-  std::stop_token stop;
+  std::function<void(double)> progress = {};
+  std::stop_token stop = {};
+  unsigned threads = 1;    ///< 0: as the machine has.
+  Executor executor = {};  ///< The host's threads; empty: threads of this call's own.
+  Reductions reductions = {};
 };
 
 /// Mass-cost front of a part: minimise (mass, unit cost) over material x section x size x route,
@@ -90,6 +105,7 @@ struct Answer {
 
 /// Re-evaluates one candidate at one size on the plain scalar path.
 /// @param size height [m], or the index of the item for stock.
+/// @param free_sizes  The other free dimensions of its shape [m].
 /// @throws bismar::Error  when the part does not admit the candidate, it cannot exist, a property
 /// it needs is
 ///   missing, or the size is not one of those that the part asks for.
@@ -97,6 +113,12 @@ struct Answer {
                                          const Catalogue& catalogue,
                                          const Candidate& candidate,
                                          double size,
+                                         const Settings& settings = {});
+[[nodiscard]] BISMAR_API Design evaluate(const Part& part,
+                                         const Catalogue& catalogue,
+                                         const Candidate& candidate,
+                                         double size,
+                                         const FreeSizes& free_sizes,
                                          const Settings& settings = {});
 
 }  // namespace bismar

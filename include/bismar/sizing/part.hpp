@@ -10,6 +10,7 @@
 #include <map>
 #include <optional>
 #include <string>
+#include <string_view>
 #include <vector>
 
 namespace bismar {
@@ -33,15 +34,27 @@ struct Sizes {
   }
 };
 
-/// A parametric shape. Its size is its height (diameter, side, width across flats); the other
-/// dimensions follow by ratios. A ratio that is left out where the shape has one is free, and makes
-/// a second free size; radii left out are zero.
+/// A ratio of two dimensions of a shape: one number, or a range inside which the sizing is free.
+struct Ratio {
+  double low = 0.0;
+  double high = 0.0;
+  // Implicit: a plain number is the usual case.
+  constexpr Ratio(double value) : low(value), high(value) {}  // NOLINT(google-explicit-constructor)
+  constexpr Ratio(double from, double to) : low(from), high(to) {}
+  [[nodiscard]] constexpr bool is_fixed() const { return low == high; }
+  friend bool operator==(const Ratio&, const Ratio&) = default;
+};
+
+/// A parametric shape. Its height (diameter, side, width across flats) is free; the other
+/// dimensions follow by ratios, or are free too: a ratio that is a range is free inside it, and one
+/// that is left out where the shape has one is free inside default_ratio(). Radii left out are
+/// zero.
 struct Shape {
   SectionFamily family = SectionFamily::solid_round;
-  std::optional<double> height_to_width = {};        ///< h/b: all but round, square and hexagon.
-  std::optional<double> wall_to_height = {};         ///< t/h (t/d): tubes; both legs of an angle.
-  std::optional<double> web_to_height = {};          ///< t_w/h: I, channel, T.
-  std::optional<double> flange_to_height = {};       ///< t_f/h: I, channel, T.
+  std::optional<Ratio> height_to_width = {};         ///< h/b: all but round, square and hexagon.
+  std::optional<Ratio> wall_to_height = {};          ///< t/h (t/d): tubes; both legs of an angle.
+  std::optional<Ratio> web_to_height = {};           ///< t_w/h: I, channel, T.
+  std::optional<Ratio> flange_to_height = {};        ///< t_f/h: I, channel, T.
   std::optional<double> root_radius_to_height = {};  ///< r/h: I, channel, T, angle.
   /// Corners of a polygon and of its holes, any scale and origin: the size is its height along z.
   std::vector<SectionPoint> outline = {};
@@ -54,10 +67,10 @@ struct Shape {
 
 /// Options of the short forms below.
 struct ShapeOptions {
-  std::optional<double> height_to_width = {};
-  std::optional<double> wall_to_height = {};
-  std::optional<double> web_to_height = {};
-  std::optional<double> flange_to_height = {};
+  std::optional<Ratio> height_to_width = {};
+  std::optional<Ratio> wall_to_height = {};
+  std::optional<Ratio> web_to_height = {};
+  std::optional<Ratio> flange_to_height = {};
   std::optional<double> root_radius_to_height = {};
   double height_min = 4e-3;  ///< [m]
   double height_max = 0.5;   ///< [m]
@@ -78,6 +91,24 @@ struct ShapeOptions {
 [[nodiscard]] BISMAR_API Shape polygon_shape(std::vector<SectionPoint> outline,
                                              std::vector<std::vector<SectionPoint>> holes = {},
                                              const ShapeOptions& options = {});
+
+/// A dimension of a shape that the sizing chooses beside the height.
+struct FreeDimension {
+  std::string_view name;  ///< As dimensions(family) calls it: "width", "wall", "web", "flange".
+  Ratio to_height;        ///< Its range over the height.
+};
+/// The free dimensions of a shape, in the order of dimensions(family); none where every ratio is
+/// fixed.
+[[nodiscard]] BISMAR_API std::vector<FreeDimension> free_dimensions(const Shape& shape);
+
+/// The range of a ratio that a shape leaves out, by its key ("height_to_width", ...): wide enough
+/// for usual sections, engineering defaults from memory.
+///
+///     height_to_width   0.2 .. 5;  I, channel 1 .. 5;  T, angle 0.5 .. 2
+///     wall_to_height    0.005 .. 0.45 (round and elliptical tube), 0.005 .. 0.25 (rectangular),
+///                       0.02 .. 0.2 (angle)
+///     web_to_height     0.005 .. 0.1;  flange_to_height  0.005 .. 0.15
+[[nodiscard]] BISMAR_API Ratio default_ratio(SectionFamily family, std::string_view key);
 
 /// A prismatic member: tie, strut, beam, shaft, or all at once.
 struct Member {
@@ -157,11 +188,21 @@ enum class Missing : std::uint8_t {
   class_median,  ///< Take the median of the material's class and flag every use.
 };
 
+/// How much of what is not on or near the front is examined.
+enum class Explain : std::uint8_t {
+  front,  ///< What cannot come near the front is skipped: "not better", its feasibility unknown.
+  full,   ///< Every candidate is solved.
+};
+
 /// How a study reads ranges, what it keeps, and what it shows.
 struct Settings {
   Missing missing = Missing::undecided;
   std::map<Property, RangeEnd> range_ends = {};  ///< Overrides of the properties' default ends.
   RangeEnd route_end = RangeEnd::geometric_mid;  ///< Of route, finish and operation ranges.
+  /// How far the search of shapes with several free sizes goes, and what is examined (see front()).
+  double epsilon = 1e-3;  ///< 0 < epsilon <= 0.1.
+  double delta = 1e-6;    ///< 0 < delta <= 0.01.
+  Explain explain = Explain::front;
   double near = 0.05;                 ///< beta: designs within this of the front are kept.
   double fold = 0.02;                 ///< Designs this close are shown under one representative.
   bool doubtful_sizes = false;        ///< Offer stock sizes marked doubtful.

@@ -4,6 +4,7 @@
 #include <bismar/export.hpp>
 #include <bismar/sizing/part.hpp>
 
+#include <array>
 #include <cstddef>
 #include <cstdint>
 #include <optional>
@@ -13,7 +14,7 @@
 namespace bismar {
 
 /// Version of the stored result; raised when a reader of the old one could misread the new one.
-inline constexpr int result_format_version = 2;
+inline constexpr int result_format_version = 3;
 
 /// One utilisation of a design.
 struct Utilisation {
@@ -54,6 +55,10 @@ struct Candidate {
   friend bool operator==(const Candidate&, const Candidate&) = default;
 };
 
+/// The free dimensions of a shape beside its height [m], in the order of free_dimensions(); unused
+/// ones are 0.
+using FreeSizes = std::array<double, 3>;
+
 /// A candidate with its size.
 struct Design {
   std::string
@@ -69,6 +74,7 @@ struct Design {
   std::string treatment;  ///< Empty for none.
   std::string finish;     ///< "none" for none.
   double size = 0.0;      ///< Height [m]; for stock the index of the item in its list.
+  FreeSizes free_sizes = {};
   SectionProperties section;
   double mass = 0.0;                      ///< [kg], finish included.
   double cost = 0.0;                      ///< [currency] a part.
@@ -106,13 +112,17 @@ struct Funnel {
 struct FeasiblePoint {
   Candidate candidate;
   double size = 0.0;
+  FreeSizes free_sizes = {};
   double mass = 0.0;
   double cost = 0.0;
 };
 
-/// Work done; outside the result's digest.
+/// Work done; outside the result's digest. It may differ from run to run.
 struct Telemetry {
-  std::size_t evaluations = 0;
+  std::size_t evaluations = 0;  ///< Designs evaluated.
+  std::size_t boxes = 0;        ///< Boxes of sizes bounded.
+  std::size_t skipped = 0;      ///< Candidates that others beat before they were solved.
+  std::size_t dominated = 0;    ///< Materials set aside because another is no worse in anything.
   double seconds = 0.0;
 };
 
@@ -120,7 +130,13 @@ struct Result {
   int version = result_format_version;
   std::string part;
   std::string currency;
-  bool exact = true;  ///< Stock, size lists and one-size shapes: exact to 1e-9 in the size.
+  /// Stock, size lists and one-size shapes: exact to 1e-9 in the size.
+  bool exact = true;
+  /// Where shapes have several free sizes: for every design whose utilisations are all <= 1 -
+  /// `delta` some design of the front is within this in both objectives, relative. 0 where none
+  /// has; infinity where a search could not be finished.
+  double epsilon_reached = 0.0;
+  double delta = 0.0;                 ///< 0 where no shape has several free sizes.
   std::vector<Design> designs;        ///< Front first, then near designs; each in canonical order.
   std::size_t front_count = 0;        ///< designs[0, front_count) is the front, by rising mass.
   std::vector<FeasiblePoint> others;  ///< Every other feasible point, canonical order.

@@ -15,7 +15,8 @@ namespace bismar {
 struct Variable {
   enum class Kind : std::uint8_t {
     continuous,   ///< Any value in [lower, upper].
-    ordered_set,  ///< One of `values`, ascending; integers are an ordered set of whole numbers.
+    integer,      ///< A whole number in [lower, upper].
+    ordered_set,  ///< One of `values`, ascending.
   };
   Kind kind = Kind::continuous;
   double lower = 0.0;
@@ -39,6 +40,20 @@ struct BoundBatch {
   std::span<double> objective_lower;    ///< [objectives x count]
   std::span<double> utilisation_lower;  ///< [constraints x count]
   std::span<double> utilisation_upper;  ///< [constraints x count]
+};
+
+/// No constraint, no variable.
+inline constexpr std::uint32_t no_index = UINT32_MAX;
+
+/// Boxes that are cut down to what may matter, with lower bounds over the rest.
+struct ContractBatch {
+  std::size_t count = 0;
+  std::span<double> lower;            ///< [variables x count], moved up only.
+  std::span<double> upper;            ///< [variables x count], moved down only.
+  std::span<double> objective_lower;  ///< [objectives x count], over what is left.
+  /// [count]: a constraint that nothing of the box meets, or no_index. A box that only several
+  /// constraints together empty has any one of them.
+  std::span<std::uint32_t> broken;
 };
 
 /// What the solver sees of a design problem: variables, objectives to minimise, utilisations that
@@ -76,8 +91,34 @@ class BISMAR_API BoxProblem {
                         std::span<double> utilisations) const = 0;
   /// Bounds over boxes. The default takes them from the declared trends by evaluating the corners
   /// of each piece, outward by `outward_ulps` units in the last place; an output with trend
-  /// `neither` gets no bound (lower -infinity, upper +infinity).
+  /// `neither` in a variable that the box leaves room gets no bound (lower -infinity, upper
+  /// +infinity). Trends in a whole number hold over its whole range, so it makes one piece; of an
+  /// ordered set nothing is known between the values, so each is a piece of its own, and a box of
+  /// several variables with more than 64 pieces gets no bound: it is cut until it has fewer.
   virtual void bound(std::size_t group, const BoxBatch& boxes, BoundBatch bounds) const;
+
+  // What follows lets a solver do better; the defaults are right for every problem.
+
+  /// A continuous variable that can be solved for, or no_index: whatever the others are, on each of
+  /// its pieces every objective rises or stays with it and no utilisation has the trend `neither`.
+  [[nodiscard]] virtual std::uint32_t size_direction(std::size_t group) const;
+  /// Whether all objectives are functions of one and the same number that never fall with it, so
+  /// that the point where the first is least is the only non-dominated one (ties apart). Default:
+  /// where there is one objective only.
+  [[nodiscard]] virtual bool objectives_agree(std::size_t group) const;
+  /// Cuts from each box what has a utilisation above `allowed`, and bounds the objectives over what
+  /// is left. The default bounds, and solves the bounds along the size direction where there is one
+  /// that has no breakpoints inside the box.
+  /// @param allowed  > 0, 1 - delta: what is cut off has no point whose utilisations are all <= it.
+  virtual void contract(std::size_t group, double allowed, ContractBatch boxes) const;
+  /// Sets the size direction of `x` to its least value within [lower, upper] at which every
+  /// utilisation is at most 1; the other variables stay. To adjacent doubles or a relative width of
+  /// 1e-12, on the feasible side.
+  /// @return false: there is none, or no size direction; x is then unspecified along it.
+  [[nodiscard]] virtual bool settle(std::size_t group,
+                                    std::span<double> x,
+                                    double lower,
+                                    double upper) const;
 };
 
 /// Outward rounding of bounds taken from trends. Covers the rounding of an evaluation of a few

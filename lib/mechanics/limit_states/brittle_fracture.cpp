@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
 #include "mechanics/limit_states/own_mass.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -140,6 +141,35 @@ Worst worst_point(const CheckInput& input) {
   return worst;
 }
 
+/// Each side against its own strength. On the tension side bending and axial tension have
+/// different ones: with the larger for both, every part of the ratio becomes smaller or stays, and
+/// the principal stress rises with its parts.
+class BrittleBound final : public SeparableBound {
+ public:
+  std::size_t terms() const override { return 2; }
+  void demands(const DemandInput& input, std::span<double> out) const override {
+    std::fill(out.begin(), out.end(), 0.0);
+    const Strengths one{.bending = 1.0, .tension = 1.0, .compression = 1.0};
+    const bool relieves = !own_mass_acts(input.effects);
+    for (const Station& station : input.effects.stations) {
+      for (const StressPoint& point :
+           stress_points(input.section, station_stresses(input.section, station.forces))) {
+        out[0] = std::max(out[0], side_ratio(point, one, true, relieves));
+        out[1] = std::max(out[1], side_ratio(point, one, false, relieves));
+      }
+    }
+  }
+  void capacities(const CapacityInput& input, std::span<double> out) const override {
+    const Strengths strength = strengths(input.effects, input.material);
+    // Without bending its strength is infinite here, and no stress is held against it.
+    out[0] = input.effects.bends ? std::max(strength.tension, strength.bending) : strength.tension;
+    out[1] = strength.compression;
+  }
+  bool exact(const CapacityInput& input) const override {
+    return !input.effects.bends && !own_mass_acts(input.effects);
+  }
+};
+
 class BrittleFracture final : public LimitState {
  public:
   std::string_view id() const override { return "brittle fracture"; }
@@ -172,6 +202,10 @@ class BrittleFracture final : public LimitState {
   /// with them, so that it falls. With own mass no sign of N relieves, and each stress falls or, as
   /// the shear stress of own mass, stays.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// Axial stress of one sense relieves the side that bends the other way.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::relieved;
+  }
   /// Each strength only ever divides a stress that is zero or above, or the whole principal stress.
   Trend trend_with(Symbol symbol) const override {
     if (symbol == Symbol::rho) {
@@ -181,6 +215,10 @@ class BrittleFracture final : public LimitState {
                ? Trend::falls
                : Trend::constant;
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  BrittleBound bound_;
 };
 
 Explanation BrittleFracture::explain(const CheckInput& input) const {

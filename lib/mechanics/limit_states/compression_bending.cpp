@@ -303,6 +303,10 @@ class CompressionBending final : public LimitState {
   Explanation explain(const CheckInput& input) const override;
   /// Every resistance rises with the scale, every k falls or stays, C_m does not move.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// The twisting load has the polar radius of gyration in it.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::column;
+  }
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
       case Symbol::E:

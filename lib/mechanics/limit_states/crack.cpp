@@ -197,6 +197,10 @@ class CrackFracture final : public LimitState {
   /// were found to fall over the whole range. A crack beyond the formulas' range is infinite, which
   /// only smaller sections can be.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// The relative depth falls with the depth, the relative length with the width.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::cracked;
+  }
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
       case Symbol::K_Ic:

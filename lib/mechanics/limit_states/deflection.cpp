@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/deformation.hpp"
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/text.hpp"
 
@@ -18,7 +19,9 @@ class Deflection final : public LimitState {
  public:
   explicit Deflection(bool with_shear)
       : with_shear_(with_shear),
-        kind_(with_shear ? Deformation::deflection_with_shear : Deformation::deflection) {}
+        kind_(with_shear ? Deformation::deflection_with_shear : Deformation::deflection),
+        bound_(with_shear ? DeformationBound::Kind::deflection_with_shear
+                          : DeformationBound::Kind::deflection) {}
 
   std::string_view id() const override {
     return with_shear_ ? "deflection with shear" : "deflection";
@@ -87,10 +90,12 @@ class Deflection final : public LimitState {
         return Trend::constant;
     }
   }
+  const SeparableBound* separable() const override { return &bound_; }
 
  private:
   bool with_shear_;
   Deformation kind_;
+  DeformationBound bound_;
 };
 
 }  // namespace

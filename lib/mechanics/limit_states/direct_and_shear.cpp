@@ -2,12 +2,14 @@
 #include "mechanics/limit_states/direct_stress.hpp"
 #include "mechanics/limit_states/list.hpp"
 #include "mechanics/limit_states/own_mass.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
 
 #include <algorithm>
 #include <cmath>
+#include <limits>
 #include <string>
 #include <string_view>
 #include <vector>
@@ -50,6 +52,35 @@ Worst worst_station(const CheckInput& input) {
   return worst;
 }
 
+/// Each part of the direct stress alone, and the shear stress. Cracks raise the part of the shear
+/// force only.
+class DirectAndShearBound final : public SeparableBound {
+ public:
+  std::size_t terms() const override { return 5; }
+  void demands(const DemandInput& input, std::span<double> out) const override {
+    std::fill(out.begin(), out.end(), 0.0);
+    for (const Station& station : input.effects.stations) {
+      const StationStresses s = station_stresses(input.section, station.forces);
+      const double force = std::sqrt(s.shear_y * s.shear_y + s.shear_z * s.shear_z);
+      out[0] = std::max(out[0], s.bending);
+      out[1] = std::max(out[1], s.axial);
+      out[2] = std::max(out[2], -s.axial);
+      out[3] = std::max(out[3], force);
+      out[4] = std::max(out[4], force + s.torsion);
+    }
+  }
+  void capacities(const CapacityInput& input, std::span<double> out) const override {
+    constexpr double none = std::numeric_limits<double>::infinity();
+    const MemberMaterial& m = input.material;
+    out[0] = input.effects.bends ? bending_strength(m) : none;
+    out[1] = m.tensile.value_or(none);
+    out[2] = m.compressive.value_or(none);
+    out[3] = m.shear ? *m.shear * m.k_cr : none;
+    out[4] = m.shear ? *m.shear * std::max(1.0, m.k_cr) : none;
+  }
+  bool exact(const CapacityInput&) const override { return false; }
+};
+
 class DirectAndShear final : public LimitState {
  public:
   std::string_view id() const override { return "direct and shear strength"; }
@@ -88,6 +119,10 @@ class DirectAndShear final : public LimitState {
         return Trend::constant;
     }
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  DirectAndShearBound bound_;
 };
 
 std::vector<Symbol> DirectAndShear::needs(const LoadEffects& effects,

@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/text.hpp"
 
 #include <algorithm>
@@ -51,6 +52,10 @@ class Envelope final : public LimitState {
   }
   Trend trend_with_scale() const override { return Trend::rises; }
   Trend trend_with(Symbol) const override { return Trend::constant; }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  MaterialFreeBound bound_{*this};
 };
 
 }  // namespace

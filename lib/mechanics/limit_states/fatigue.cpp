@@ -79,6 +79,10 @@ class Fatigue final : public LimitState {
   /// most, or jumps up; the rise by compression falls; all else depends on the material and the
   /// notch, which stay.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// The size factor has a jump.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::tired;
+  }
   /// A higher tensile strength raises the estimated endurance limit to its cap and lowers the
   /// surface factor, and with it S_e beyond the cap or of a table value; notches are felt more.
   Trend trend_with(Symbol symbol) const override {

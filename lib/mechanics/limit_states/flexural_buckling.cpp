@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/column_resistance.hpp"
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/text.hpp"
 
 #include <string>
@@ -56,6 +57,10 @@ class FlexuralBuckling final : public LimitState {
         return Trend::constant;
     }
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  FlexuralBound bound_;
 };
 
 Explanation FlexuralBuckling::explain(const CheckInput& input) const {

@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/text.hpp"
 
 #include <string>
@@ -38,6 +39,10 @@ class MinimumWall final : public LimitState {
   /// The wall rises with the scale.
   Trend trend_with_scale() const override { return Trend::falls; }
   Trend trend_with(Symbol) const override { return Trend::constant; }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  MaterialFreeBound bound_{*this};
 };
 
 }  // namespace

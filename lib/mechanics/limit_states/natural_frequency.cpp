@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/text.hpp"
 
@@ -133,6 +134,38 @@ Planes planes(const CheckInput& input) {
 
 std::string hertz(double value) { return number(value) + " Hz"; }
 
+/// The bare slender member against sqrt(E / rho): carried masses, shear and compression only lower
+/// the frequency (Rayleigh's quotient gains in the denominator or loses in the numerator).
+class FrequencyBound final : public SeparableBound {
+ public:
+  std::size_t terms() const override { return 1; }
+  void demands(const DemandInput& input, std::span<double> out) const override {
+    out[0] = 0.0;
+    if (!input.limits.frequency) {
+      return;
+    }
+    const SectionProperties& s = input.section;
+    const auto add = [&](double second_moment, Support support) {
+      const double frequency = lowest_natural_frequency(
+          {.bending_stiffness = second_moment, .mass_per_length = s.area, .length = input.length},
+          support,
+          {},
+          input.effects.second_support);
+      out[0] = std::max(out[0], *input.limits.frequency / frequency);
+    };
+    add(s.I_yz != 0.0 ? s.I_v() : s.I_y, input.effects.support_z);
+    add(s.I_yz != 0.0 ? s.I_v() : s.I_z, input.effects.support_y);
+  }
+  void capacities(const CapacityInput& input, std::span<double> out) const override {
+    out[0] =
+        std::sqrt(needed(input.material.E, Symbol::E) / needed(input.material.rho, Symbol::rho));
+  }
+  bool exact(const CapacityInput& input) const override {
+    return input.limits.details.masses.empty() && !input.limits.shear_deflection &&
+           input.effects.compression == 0.0;
+  }
+};
+
 class NaturalFrequency final : public LimitState {
  public:
   std::string_view id() const override { return "natural frequency"; }
@@ -177,6 +210,10 @@ class NaturalFrequency final : public LimitState {
   /// so that every quotient rises, and with them the least; N / N_cr falls. 1 / f_s^2 is a mass
   /// over G A_s, constant for the member itself and falling for what it carries.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// What counts is I over the mass.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::swift;
+  }
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
       case Symbol::E:
@@ -188,6 +225,10 @@ class NaturalFrequency final : public LimitState {
         return Trend::constant;
     }
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  FrequencyBound bound_;
 };
 
 Explanation NaturalFrequency::explain(const CheckInput& input) const {

@@ -213,6 +213,10 @@ class NetSection final : public LimitState {
   /// The stresses are those of yield, brittle fracture and direct and shear strength times
   /// constants; the rise by compression falls.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// Axial stress of one sense relieves the side that bends the other way.
+  BestSection best_section(const LoadEffects&, const MemberMaterial& material) const override {
+    return material.rule == StressRule::principal ? BestSection::relieved : BestSection::stiff;
+  }
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
       case Symbol::E:

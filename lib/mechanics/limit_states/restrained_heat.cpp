@@ -212,6 +212,11 @@ class RestrainedHeat final : public LimitState {
   /// every critical load falls with the square of the scale, as does the slenderness. The loads'
   /// own stresses fall, and each limit state rises with each of them.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// As for the limit states that it asks. The force grows with A: lightened() lets alpha fall as
+  /// much as A varies, so that it is the least of the box.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::relieved;
+  }
   /// A stiffer member is pushed harder and buckles later.
   Trend trend_with(Symbol symbol) const override;
 };

@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/deformation.hpp"
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/text.hpp"
 
@@ -60,6 +61,10 @@ class Rotation final : public LimitState {
            : symbol == Symbol::rho ? Trend::rises
                                    : Trend::constant;
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  DeformationBound bound_{DeformationBound::Kind::rotation};
 };
 
 }  // namespace

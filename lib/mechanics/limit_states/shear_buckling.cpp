@@ -131,6 +131,10 @@ class ShearBuckling final : public LimitState {
   Explanation explain(const CheckInput& input) const override;
   /// h_w / t stays, V_b grows with the square of the scale like the own mass.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// A slender web resists with t^2, a stocky one with h_w t.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::large;
+  }
   /// V_b rises with the root of f_y E where the web is slender.
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {

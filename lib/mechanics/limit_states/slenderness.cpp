@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/text.hpp"
 
 #include <algorithm>
@@ -82,7 +83,15 @@ class Slenderness final : public LimitState {
   }
   /// The radii of gyration rise with the scale.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// K L / i grows with A where I stays.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::slim;
+  }
   Trend trend_with(Symbol) const override { return Trend::constant; }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  MaterialFreeBound bound_{*this};
 };
 
 }  // namespace

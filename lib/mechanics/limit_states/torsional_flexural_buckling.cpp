@@ -63,6 +63,10 @@ class TorsionalFlexuralBuckling final : public LimitState {
   /// shear centre's offset to i_0, which does not change: it rises with each of the three, which
   /// grow at least with the square of the scale like A; so the slenderness does not rise.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// The twisting load has the polar radius of gyration in it.
+  BestSection best_section(const LoadEffects&, const MemberMaterial&) const override {
+    return BestSection::column;
+  }
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {
       case Symbol::E:

@@ -1,5 +1,6 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/text.hpp"
 
@@ -14,6 +15,21 @@ namespace {
 double twist_angle(const CheckInput& input) {
   return input.effects.twist / (needed(input.material.G, Symbol::G) * input.section.I_t);
 }
+
+/// Against G.
+class TwistBound final : public SeparableBound {
+ public:
+  std::size_t terms() const override { return 1; }
+  void demands(const DemandInput& input, std::span<double> out) const override {
+    out[0] = input.limits.twist && input.effects.twist > 0.0
+                 ? input.effects.twist / input.section.I_t / *input.limits.twist
+                 : 0.0;
+  }
+  void capacities(const CapacityInput& input, std::span<double> out) const override {
+    out[0] = needed(input.material.G, Symbol::G);
+  }
+  bool exact(const CapacityInput&) const override { return true; }
+};
 
 class Twist final : public LimitState {
  public:
@@ -53,6 +69,10 @@ class Twist final : public LimitState {
   Trend trend_with(Symbol symbol) const override {
     return symbol == Symbol::G ? Trend::falls : Trend::constant;
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  TwistBound bound_;
 };
 
 }  // namespace

@@ -195,6 +195,10 @@ class WallSlenderness final : public LimitState {
   Explanation explain(const CheckInput& input) const override;
   /// The ratios of the walls stay; the acting stress falls, and the plain limit does not move.
   Trend trend_with_scale() const override { return Trend::falls; }
+  /// Tension relieves the compressed side.
+  BestSection best_section(const LoadEffects& effects, const MemberMaterial&) const override {
+    return effects.tension > 0.0 ? BestSection::relieved : BestSection::stiff;
+  }
   /// A stronger grade is allowed more stress and so gets the stricter limit.
   Trend trend_with(Symbol symbol) const override {
     switch (symbol) {

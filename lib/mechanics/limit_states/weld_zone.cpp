@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
 #include "mechanics/limit_states/own_mass.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -64,6 +65,19 @@ ZoneStrengths strengths(const MemberMaterial& material) {
           .rupture = rupture};
 }
 
+/// The von Mises stress of the loads against the lower of both strengths.
+class WeldBound final : public SeparableBound {
+ public:
+  std::size_t terms() const override { return 1; }
+  void demands(const DemandInput& input, std::span<double> out) const override {
+    out[0] = input.limits.details.welded ? equivalent_stress_of_loads(input) : 0.0;
+  }
+  void capacities(const CapacityInput& input, std::span<double> out) const override {
+    out[0] = strengths(input.material).least();
+  }
+  bool exact(const CapacityInput& input) const override { return !own_mass_acts(input.effects); }
+};
+
 class WeldZone final : public LimitState {
  public:
   std::string_view id() const override { return "weld zone"; }
@@ -111,6 +125,10 @@ class WeldZone final : public LimitState {
         return Trend::constant;
     }
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  WeldBound bound_;
 };
 
 Explanation WeldZone::explain(const CheckInput& input) const {

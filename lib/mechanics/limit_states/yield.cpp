@@ -1,6 +1,7 @@
 // SPDX-License-Identifier: MIT
 #include "mechanics/limit_states/list.hpp"
 #include "mechanics/limit_states/own_mass.hpp"
+#include "mechanics/limit_states/separable.hpp"
 #include "mechanics/limit_states/value.hpp"
 #include "mechanics/stress_points.hpp"
 #include "mechanics/text.hpp"
@@ -56,6 +57,19 @@ std::string bending_terms(const SectionProperties& section, const InternalForces
          ", I_yz = " + fourth_millimetres(section.I_yz) + " at the worst corner";
 }
 
+/// The von Mises stress of the loads against the yield strength.
+class YieldBound final : public SeparableBound {
+ public:
+  std::size_t terms() const override { return 1; }
+  void demands(const DemandInput& input, std::span<double> out) const override {
+    out[0] = equivalent_stress_of_loads(input);
+  }
+  void capacities(const CapacityInput& input, std::span<double> out) const override {
+    out[0] = needed(input.material.sigma_y, Symbol::sigma_y);
+  }
+  bool exact(const CapacityInput& input) const override { return !own_mass_acts(input.effects); }
+};
+
 class Yield final : public LimitState {
  public:
   std::string_view id() const override { return "yield"; }
@@ -89,6 +103,10 @@ class Yield final : public LimitState {
            : symbol == Symbol::rho   ? Trend::rises
                                      : Trend::constant;
   }
+  const SeparableBound* separable() const override { return &bound_; }
+
+ private:
+  YieldBound bound_;
 };
 
 Explanation Yield::explain(const CheckInput& input) const {

@@ -21,11 +21,20 @@ struct Case {
   const Outcome* outcome = nullptr;
 
   Case() {
+    outcome = ellipse();
+    if (outcome != nullptr) {
+      // Of one material the groups are kept.
+      solved = solve_candidates(part, starter(), settings, {}, outcome->candidate.material);
+      outcome = ellipse();
+    }
+  }
+
+  [[nodiscard]] const Outcome* ellipse() const {
     const auto found =
         std::find_if(solved.outcomes.begin(), solved.outcomes.end(), [](const Outcome& one) {
-          return one.kind == Outcome::Kind::feasible && one.candidate.shape == 3;  // ellipse
+          return one.kind == Outcome::Kind::feasible && one.candidate.shape == 3;
         });
-    outcome = found == solved.outcomes.end() ? nullptr : &*found;
+    return found == solved.outcomes.end() ? nullptr : &*found;
   }
 };
 

@@ -64,6 +64,7 @@
 #include <bismar/sizing/existence.hpp>
 #include <bismar/sizing/front.hpp>
 #include <bismar/sizing/index.hpp>
+#include <bismar/sizing/study.hpp>
 
 #include <bismar/report/pictures.hpp>
 #include <bismar/report/text_report.hpp>

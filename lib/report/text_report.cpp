@@ -141,8 +141,10 @@ std::string headline(const Result& result, std::size_t shown) {
 
 std::string funnel_line(const Funnel& funnel) {
   std::array<std::size_t, 6> at{};
+  bool examined = true;
   for (const FunnelLine& line : funnel.lines) {
     at[static_cast<std::size_t>(line.stage)] += line.candidates;
+    examined = examined && (line.stage != FunnelLine::Stage::not_better || line.reason.empty());
   }
   std::string text = "Candidates: " + report::count(funnel.considered) + " considered = ";
   constexpr std::array<std::string_view, 6> words = {
@@ -151,6 +153,7 @@ std::string funnel_line(const Funnel& funnel) {
     if (s > 0) text += " + ";
     text += report::count(at[s]) + " ";
     text += words[s];
+    text += s == 3 && !examined ? " (feasible or not: not examined)" : "";
   }
   text += ".";
   if (funnel.doubtful_sizes > 0) {

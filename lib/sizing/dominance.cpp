@@ -2,6 +2,7 @@
 #include "sizing/dominance.hpp"
 
 #include "sizing/enumeration.hpp"
+#include "sizing/gaps.hpp"
 
 #include <bismar/mechanics/section.hpp>
 
@@ -89,6 +90,7 @@ class Directions {
 struct Profile {
   std::vector<double> equal;
   std::vector<double> better;
+  std::vector<double> densities;  ///< A step; among `better` too.
 };
 
 class Search {
@@ -100,6 +102,7 @@ class Search {
     Dominance out;
     const auto& table = problem_.catalogue().materials;
     out.by.assign(table.size(), Dominance::none);
+    out.is_lighter.assign(table.size(), 0);
     std::vector<std::uint32_t> sorted(materials.begin(), materials.end());
     const auto less = [&](std::uint32_t a, std::uint32_t b) {
       return kinds_(&table.info(a), &table.info(b));
@@ -150,6 +153,7 @@ class Search {
         kept.push_back(&row);
       } else {
         out.by[row.material] = (*by)->material;
+        out.is_lighter[row.material] = (*by)->profile.densities != row.profile.densities ? 1 : 0;
         ++out.replaced;
       }
     }
@@ -164,11 +168,35 @@ class Search {
       out.equal.insert(out.equal.end(), {steps[s].above, steps[s].up_to});
       out.equal.push_back(state.priced ? 1.0 : 0.0);
       out.better.insert(out.better.end(), {state.density, state.usual_price});
+      out.densities.push_back(state.density);
+      add_limits(material, state, out);
       for (std::size_t c = 0; c < state.cases.size(); ++c) {
         add_case(state.cases[c], c, out);
       }
     }
     return out;
+  }
+
+  /// What the job asks of a material by itself.
+  void add_limits(std::uint32_t material, const StepState& state, Profile& out) {
+    const auto& limits = problem_.part().limits;
+    out.equal.push_back(static_cast<double>(open_limits(problem_, material, state).size()));
+    for (std::size_t p = 0; p < limits.properties.size(); ++p) {
+      const auto u = problem_.property_utilisation(p, state.row);
+      out.equal.push_back(u ? 1.0 : 0.0);
+      out.better.push_back(u && *u > 1.0 ? 1.0 : 0.0);
+    }
+    if (limits.temperature) {
+      const auto lowest = problem_.reader().value(Property::service_temperature_min, state.row);
+      const auto highest = highest_temperature(problem_.reader(),
+                                               problem_.catalogue().materials.info(material),
+                                               state.row,
+                                               *limits.temperature,
+                                               problem_.part().body.load_cases);
+      const bool fails =
+          (lowest && *limits.temperature < *lowest) || (highest && *limits.temperature > *highest);
+      out.better.push_back(fails ? 1.0 : 0.0);
+    }
   }
 
   void add_case(const ResolvedMaterial& resolved, std::size_t load_case, Profile& out) {

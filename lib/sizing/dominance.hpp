@@ -22,12 +22,14 @@ namespace bismar {
 /// factors, and what one limit state wants high and another low (the yield strength of a section
 /// with walls). Of equals the one that stands first in the table replaces the others.
 ///
-/// Not for jobs with limits on properties, which a dominated material may pass and its dominator
-/// not: those materials that fail them are left out before.
+/// Limits on properties and the service temperature count by whether each step meets them.
 struct Dominance {
   static constexpr std::uint32_t none = UINT32_MAX;
   /// Per material of the table: one that is not replaced itself and replaces it, or `none`.
   std::vector<std::uint32_t> by;
+  /// Per material: whether that one has a lower density in some step, so that a part of it may be
+  /// too light for a route that makes the same part of this one.
+  std::vector<char> is_lighter;
   std::size_t replaced = 0;
 };
 

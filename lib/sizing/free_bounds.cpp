@@ -190,6 +190,7 @@ void FreeSizeProblem::leave_whole(const Mode& mode,
 void FreeSizeProblem::lower_objectives(const Mode& mode,
                                        const SectionBox& box,
                                        double scale,
+                                       double least_mass,
                                        Scratch& scratch,
                                        std::span<double> objectives) const {
   SectionProperties& least = scratch.lower;
@@ -201,10 +202,8 @@ void FreeSizeProblem::lower_objectives(const Mode& mode,
   least.inner_perimeter = box.inner_perimeter.lower() * scale;
   least.area = box.area.lower() * scale * scale;
   const auto& step = *mode.piece.step;
-  // Below its least mass the route makes nothing: without this the designs at that mass would be a
-  // plateau that no splitting ends.
   const double net_mass =
-      std::max(step.density * least.area * sizing_.part().body.length, sizing_.least_mass(base_));
+      std::max(step.density * least.area * sizing_.part().body.length, least_mass);
   const auto bought = sizing_.purchase(base_, mode.piece, least, net_mass);
   objectives[0] = (net_mass + base_.cost->finish_mass(least)) * (1.0 - slack);
   objectives[1] =
@@ -246,8 +245,10 @@ void FreeSizeProblem::contract_similar(const Mode& mode,
   if (own_thickness) {
     const Interval thickness =
         equivalent_diameter_ ? box.ruling_by_surface() : box.ruling_dimension;
-    at_least(mode.thickness_above / thickness.upper(), extra(FreeConstraint::thickness_above));
-    at_most(mode.thickness_up_to / thickness.lower(), extra(FreeConstraint::thickness_up_to));
+    at_least(mode.thickness_above / (thickness.upper() * allowed),
+             extra(FreeConstraint::thickness_above));
+    at_most(mode.thickness_up_to * allowed / thickness.lower(),
+            extra(FreeConstraint::thickness_up_to));
   } else {
     scratch.lower.family = shape_.family;
     scratch.lower.height = box.height.lower();
@@ -313,7 +314,9 @@ void FreeSizeProblem::contract_similar(const Mode& mode,
   boxes.lower[b] = low;
   boxes.upper[b] = high;
   std::array<double, 2> objectives{};
-  lower_objectives(mode, box, low, scratch, objectives);
+  // Below its least mass the route makes nothing: without this the designs at that mass would be a
+  // plateau that no splitting ends.
+  lower_objectives(mode, box, low, sizing_.least_mass(base_), scratch, objectives);
   boxes.objective_lower[b] = objectives[0];
   boxes.objective_lower[n + b] = objectives[1];
   const auto& limits = sizing_.part().limits;
@@ -375,7 +378,7 @@ void FreeSizeProblem::contract_any(const Mode& mode,
     hold(ratio.lower() / proportion.range.high / (1.0 + 1e-9), next++);
   }
   std::array<double, 2> objectives{};
-  lower_objectives(mode, box, 1.0, scratch, objectives);
+  lower_objectives(mode, box, 1.0, sizing_.least_mass(base_), scratch, objectives);
   boxes.objective_lower[b] = objectives[0];
   boxes.objective_lower[n + b] = objectives[1];
   const auto& step = *mode.piece.step;
@@ -471,7 +474,7 @@ void FreeSizeProblem::bound_box(const Mode& mode,
   // What falls with the size is least at the largest, what rises at the least.
   const double low = mode.similar ? boxes.lower[b] : 1.0;
   const double high = mode.similar ? boxes.upper[b] : 1.0;
-  lower_objectives(mode, box, low, scratch, objectives);
+  lower_objectives(mode, box, low, 0.0, scratch, objectives);
   const auto& step = *mode.piece.step;
   const auto& limits = sizing_.part().limits;
   const double most_mass =

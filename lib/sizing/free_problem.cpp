@@ -50,12 +50,15 @@ std::size_t FreeSizeProblem::constraints(std::size_t group) const {
          2 * modes_[group].proportions.size();
 }
 
-bool FreeSizeProblem::fits_with_room(std::size_t group,
-                                     std::span<const CertifiedPoint> points) const {
+bool FreeSizeProblem::has_own_blank(std::size_t group, std::span<const double> x) const {
   const Mode& mode = modes_[group];
-  return mode.piece.blank != nullptr && mode.piece.blank->item != nullptr &&
-         mode.objectives_agree && points.size() == 1 &&
-         points[0].utilisations[constraints_.size() + FreeConstraint::blank] < 1.0 - 1e-6;
+  if (mode.piece.blank == nullptr || mode.piece.blank->item == nullptr) {
+    return true;
+  }
+  const auto section = section_at(mode, x);
+  return std::none_of(&*blanks_.begin(), mode.piece.blank, [&](const Blank& lighter) {
+    return room_in(lighter, section, sizing_.settings()) >= 1.0;
+  });
 }
 
 std::string FreeSizeProblem::label(std::size_t constraint) const {
@@ -166,7 +169,7 @@ bool FreeSizeProblem::in_proportion(const Mode& mode, std::span<const double> al
       root_radius = all[i];
     }
   }
-  return is_enclosable(
+  return may_be_usual(
       {shape_.family, std::span(sizes).first(count), root_radius, 0.0, forming_of(route_)});
 }
 

@@ -6,7 +6,6 @@
 #include <bismar/export.hpp>
 #include <bismar/mechanics/section_box.hpp>
 #include <bismar/solver/box_problem.hpp>
-#include <bismar/solver/certified_front.hpp>
 
 #include <cstdint>
 #include <set>
@@ -64,9 +63,8 @@ class BISMAR_API FreeSizeProblem : public BoxProblem {
   [[nodiscard]] const std::vector<std::string>& open_limits() const { return open_limits_; }
   [[nodiscard]] const std::vector<Property>& missing() const { return missing_; }
   [[nodiscard]] const Mode& mode(std::size_t group) const { return modes_[group]; }
-  /// Whether a mode that is cut from a bar has one point, which its bar does not hold down.
-  [[nodiscard]] bool fits_with_room(std::size_t group,
-                                    std::span<const CertifiedPoint> points) const;
+  /// Whether no lighter blank than the mode's holds these sizes; true where there are no blanks.
+  [[nodiscard]] bool has_own_blank(std::size_t group, std::span<const double> x) const;
   [[nodiscard]] std::string label(std::size_t constraint) const;
 
   /// The height and the free dimensions that the variables stand for.
@@ -179,9 +177,11 @@ class BISMAR_API FreeSizeProblem : public BoxProblem {
                              std::size_t stride,
                              bool unit_height,
                              Scratch& scratch) const;
+  /// Of the sections of a box that have this mass or more [kg].
   void lower_objectives(const Mode& mode,
                         const SectionBox& box,
                         double scale,
+                        double least_mass,
                         Scratch& scratch,
                         std::span<double> objectives) const;
 

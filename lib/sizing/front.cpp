@@ -202,7 +202,9 @@ class FrontBuilder {
     add(Stage::cannot_exist, solved_.excluded);
     add(Stage::undecided, solved_.undecided);
     add(Stage::infeasible, solved_.infeasible);
-    funnel.lines.push_back({Stage::not_better, "", not_better});
+    const bool examined = settings_.explain == Explain::full || not_better == 0;
+    funnel.lines.push_back(
+        {Stage::not_better, examined ? "" : "feasibility not examined", not_better});
     funnel.lines.push_back({Stage::near, "", near});
     funnel.lines.push_back({Stage::front, "", front});
     result.undecided.assign(solved_.undecided_text.begin(), solved_.undecided_text.end());
@@ -327,10 +329,11 @@ void check_free_sizes(const Candidate& candidate,
 Result build_front(const Part& part,
                    const Catalogue& catalogue,
                    const Settings& settings,
-                   const RunOptions& run) {
+                   const RunOptions& run,
+                   FrontMemory* memory) {
   const bool full = settings.explain == Explain::full;
   auto solved = full ? solve_candidates(part, catalogue, settings, run)
-                     : search_front(part, catalogue, settings, run);
+                     : search_front(part, catalogue, settings, run, memory);
   if (!full && solved.outcomes.empty() && !solved.stopped) {
     // Nothing is feasible: then the reasons are the answer.
     Settings examined = settings;
@@ -343,6 +346,29 @@ Result build_front(const Part& part,
 
 }  // namespace
 
+Result make_front(const Part& part,
+                  const Catalogue& catalogue,
+                  const Settings& settings,
+                  const RunOptions& run,
+                  FrontMemory* memory) {
+  return build_front(part, catalogue, settings, run, memory);
+}
+
+const Design* choice(const Result& result, ExchangeConstant alpha) {
+  const Design* best = nullptr;
+  // From the cheapest on: a lighter one must pay for itself.
+  for (std::size_t i = result.front_count; i-- > 0;) {
+    const Design& next = result.designs[i];
+    const double saved = best != nullptr ? best->mass - next.mass : 0.0;
+    const double paid = best != nullptr ? next.cost - best->cost : 0.0;
+    const bool is_equal = saved == 0.0 && paid == 0.0;
+    if (is_equal || alpha.value_per_kilogram() * saved > paid) {
+      best = &next;
+    }
+  }
+  return best;
+}
+
 Result front(const Part& part,
              const Catalogue& catalogue,
              const Settings& settings,
@@ -350,7 +376,7 @@ Result front(const Part& part,
   const auto start = std::chrono::steady_clock::now();
   const FloatingPointGuard guard;
   validate(part, catalogue, settings);
-  Result result = build_front(part, catalogue, settings, run);
+  Result result = build_front(part, catalogue, settings, run, nullptr);
   result.telemetry.seconds =
       std::chrono::duration<double>(std::chrono::steady_clock::now() - start).count();
   return result;

@@ -39,7 +39,8 @@ bool has_walls(const Part& part) {
          !std::all_of(part.body.shapes.begin(), part.body.shapes.end(), solid);
 }
 
-std::optional<std::string> Screening::failed_by_itself(std::uint32_t material) {
+std::optional<std::string> Screening::failed_by_itself(std::uint32_t material,
+                                                       std::span<const Candidate> candidates) {
   const auto& limits = problem_.part().limits;
   if (limits.properties.empty()) {
     return std::nullopt;
@@ -55,7 +56,13 @@ std::optional<std::string> Screening::failed_by_itself(std::uint32_t material) {
       fails = fails && *u > 1.0;
     }
     if (fails) {
-      const bool open = bismar::lacks_value(problem_, material);
+      set_material(material);
+      const bool open = std::any_of(candidates.begin(), candidates.end(), [&](Candidate one) {
+        one.material = material;
+        return lacks_value(one);
+      });
+      problem_.forget(material);
+      current_.material = UINT32_MAX;
       return open ? std::nullopt : std::optional("limit on " + limits.properties[p].property);
     }
   }
@@ -85,9 +92,16 @@ std::size_t Screening::bounds_of(const Candidate& candidate) {
 }
 
 bool Screening::lacks_value(const Candidate& candidate) {
-  const auto [entry, added] = lacking_.try_emplace({candidate.shape, traits_}, true);
+  const auto [entry, added] =
+      lacking_.try_emplace({candidate.shape, candidate.stock, traits_}, true);
   if (added) {
-    entry->second = bismar::lacks_value(problem_, candidate);
+    if (candidate.shape != Candidate::none) {
+      entry->second = bismar::lacks_value(problem_, candidate);
+    } else {
+      const auto& compiled = problem_.add(candidate);
+      entry->second = !compiled.undecided.empty() || !compiled.undecided_limits.empty();
+      problem_.remove_last();
+    }
   }
   return entry->second;
 }
@@ -110,7 +124,8 @@ Screening::Lower Screening::lower_at(const Candidate& candidate, double area) co
   least.perimeter = 2.0 * std::sqrt(std::numbers::pi * area);
   const bool has_least_mass = route.rate_basis != RateBasis::metre;
   const double net_mass = std::max(density * area * length, has_least_mass ? route.mass_min : 0.0);
-  const double bought = machines_blank(route) ? net_mass : net_mass / (1.0 - route.scrap);
+  const bool as_bought = candidate.stock != Candidate::none || machines_blank(route);
+  const double bought = as_bought ? net_mass : net_mass / (1.0 - route.scrap);
   const CandidateCost cost(problem_.part(), problem_.catalogue(), problem_.settings(), candidate);
   return {(net_mass + cost.finish_mass(least)) * (1.0 - slack),
           cost.total({least, net_mass, {bought, 0.0, 1.0}}, {price, price}, price) * (1.0 - slack)};
@@ -136,6 +151,23 @@ double Screening::promise(std::uint32_t material, std::span<const Candidate> can
   problem_.forget(material);
   current_.material = UINT32_MAX;
   return least;
+}
+
+bool Screening::is_beaten_at_least_mass(std::uint32_t material,
+                                        std::span<const Candidate> candidates,
+                                        const Incumbent& incumbent) {
+  const bool beaten = std::all_of(candidates.begin(), candidates.end(), [&](Candidate candidate) {
+    const Route& route = problem_.catalogue().routes[candidate.route];
+    if (route.rate_basis == RateBasis::metre || !(route.mass_min > 0.0)) {
+      return true;
+    }
+    candidate.material = material;
+    const auto lower = lower_at(candidate, 0.0);
+    const double objectives[] = {lower.mass, lower.cost};
+    return incumbent.beats(objectives);
+  });
+  problem_.forget(material);
+  return beaten;
 }
 
 bool Screening::is_beaten(const Candidate& candidate, const Incumbent& incumbent) {

@@ -13,6 +13,7 @@
 #include <optional>
 #include <span>
 #include <string>
+#include <tuple>
 #include <utility>
 #include <vector>
 
@@ -27,9 +28,10 @@ class BISMAR_API Screening {
   /// Keeps a view of the problem.
   explicit Screening(SizingProblem& problem) : problem_(problem) {}
 
-  /// The limit on a property or the service temperature that the material exceeds in every
-  /// thickness step, so that none of its candidates is feasible; nothing where a value is missing.
-  [[nodiscard]] std::optional<std::string> failed_by_itself(std::uint32_t material);
+  /// The limit on a property that the material exceeds in every thickness step, so that none of its
+  /// candidates is feasible; nothing where one of them lacks a value.
+  [[nodiscard]] std::optional<std::string> failed_by_itself(std::uint32_t material,
+                                                            std::span<const Candidate> candidates);
 
   /// The least product of the lower bounds of mass and cost over the material's candidates; 0 where
   /// nothing is known of one.
@@ -37,6 +39,12 @@ class BISMAR_API Screening {
 
   /// Whether the incumbent beats the candidate's lower bounds; never one that lacks a value.
   [[nodiscard]] bool is_beaten(const Candidate& candidate, const Incumbent& incumbent);
+
+  /// Whether the incumbent beats all candidates of the material even at the least mass that their
+  /// routes make; trivially so where routes have none.
+  [[nodiscard]] bool is_beaten_at_least_mass(std::uint32_t material,
+                                             std::span<const Candidate> candidates,
+                                             const Incumbent& incumbent);
 
  private:
   struct Lower {
@@ -57,8 +65,8 @@ class BISMAR_API Screening {
   SizingProblem& problem_;
   std::vector<std::unique_ptr<ShapeBounds>> bounds_;
   std::map<std::pair<std::uint32_t, Forming>, std::size_t> places_;
-  /// Whether a material of these traits lacks a value for a shape.
-  std::map<std::pair<std::uint32_t, std::string>, bool> lacking_;
+  /// Whether a material of these traits lacks a value for a shape, or for a stock list.
+  std::map<std::tuple<std::uint32_t, std::uint32_t, std::string>, bool> lacking_;
   std::string traits_;
   Current current_;
 };

@@ -25,7 +25,9 @@ constexpr double large_size = 1e7;
 /// Rounding of demands, capacities and powers.
 constexpr double slack = 1e-8;
 
-constexpr std::size_t most_boxes = 600;
+constexpr std::size_t most_boxes = 6000;
+/// Boxes split for one question at most.
+constexpr std::size_t most_splits = 100;
 /// Boxes narrower than this in every ratio are not split further.
 constexpr double narrow = 1.02;
 
@@ -50,6 +52,11 @@ ShapeBounds::ShapeBounds(const SizingProblem& problem, std::size_t shape, Formin
   ratios_.push_back(std::move(root));
   look(ratios_.front());
   fill(0);
+  // Boxes that cannot be enclosed yet bound nothing.
+  for (std::size_t b = 0; b < ratios_.size(); ++b) {
+    while (rough_[b] != 0 && split(b)) {
+    }
+  }
 }
 
 /// Limit states that every section of the shape meets, with conditions of their own.
@@ -167,6 +174,8 @@ void ShapeBounds::fill(std::size_t box) {
   const std::size_t n = conditions_.size();
   factors_.resize(std::max(factors_.size(), (box + 1) * n));
   areas_.resize(std::max(areas_.size(), box + 1));
+  rough_.resize(std::max(rough_.size(), box + 1));
+  rough_[box] = !enclosed_ && rough_area_ < infinity ? 1 : 0;
   double* factors = &factors_[box * n];
   if (!enclosed_ || !enclosure_.any) {
     // Not enclosed yet: only its rough area is known, infinite where no section is.
@@ -291,12 +300,12 @@ double ShapeBounds::least_area(const Needs& needs, FunctionRef<bool(double)> eno
   for (std::size_t b = 0; b < ratios_.size(); ++b) {
     areas_[b] = area_of(b, needs);
   }
-  for (;;) {
+  for (std::size_t splits = 0;; ++splits) {
     const auto least = std::min_element(areas_.begin(), areas_.end());
     if (least == areas_.end()) {
       return infinity;  // the shape has no section at all
     }
-    if (*least == infinity || enough(*least)) {
+    if (*least == infinity || splits >= most_splits || enough(*least)) {
       return *least;
     }
     const auto box = static_cast<std::size_t>(least - areas_.begin());

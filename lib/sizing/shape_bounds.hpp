@@ -74,6 +74,7 @@ class BISMAR_API ShapeBounds {
   std::vector<Condition> conditions_;  ///< The last one, of the least height, has no source.
   std::vector<std::vector<Interval>> ratios_;  ///< [box][dimension], the height's 1.
   std::vector<double> factors_;                ///< [box][condition]: the first brackets.
+  std::vector<char> rough_;                    ///< [box] not enclosed yet.
   std::vector<double> areas_;                  ///< [box] for the material being asked for.
   SectionProperties sample_;                   ///< One of the shape at a height of 1 m.
   SectionBox enclosure_;

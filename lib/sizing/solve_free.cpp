@@ -4,6 +4,7 @@
 #include "sizing/words.hpp"
 
 #include <bismar/error.hpp>
+#include <bismar/sizing/existence.hpp>
 
 #include <algorithm>
 #include <cmath>
@@ -64,6 +65,11 @@ Outcome solve_free(SizingProblem& problem,
   }
   CertifyOptions options;
   options.epsilon = shape.sizes.kind == Sizes::Kind::continuous ? settings.epsilon : 0.0;
+  if (machines_blank(problem.catalogue().routes[candidate.route])) {
+    // A part is cut from the lightest blank that holds it, so that a point of a heavier blank may
+    // stand for nothing but a point of a lighter one: each within the root of what is promised.
+    options.epsilon = std::sqrt(1.0 + options.epsilon) - 1.0;
+  }
   options.delta = settings.delta;
   options.near = settings.near;
   options.stop = run.stop;
@@ -73,11 +79,7 @@ Outcome solve_free(SizingProblem& problem,
   out.least_utilisation = infinity;
   out.reason = "no size in the range asked for";
   bool skipped = false;
-  const StepState* settled_step = nullptr;
   for (std::size_t g = 0; g < free.groups(); ++g) {
-    if (settled_step == free.mode(g).piece.step && settled_step != nullptr) {
-      continue;
-    }
     const auto found = certified_group(free, g, options, incumbent);
     solved.boxes += found.boxes;
     solved.evaluations += found.evaluations;
@@ -88,11 +90,15 @@ Outcome solve_free(SizingProblem& problem,
           found.excluded_by == no_index ? "several limits together" : free.label(found.excluded_by);
     }
     solved.incomplete = solved.incomplete || found.state == GroupState::incomplete;
-    if (found.state == GroupState::solved && free.fits_with_room(g, found.points)) {
-      // A heavier blank of the same strength gives the same part for more.
-      settled_step = free.mode(g).piece.step;
+    if (found.state == GroupState::skipped) {
+      continue;  // what it had found by then depends on when the others' points came
     }
     for (const auto& point : found.points) {
+      // A part is cut from the lightest blank that holds it: what fits a lighter one is that
+      // mode's.
+      if (!free.has_own_blank(g, point.x)) {
+        continue;
+      }
       const auto sizes = free.sizes(g, point.x);
       out.points.push_back({sizes.height,
                             sizes.free_sizes,
@@ -121,6 +127,7 @@ Outcome solve_free(SizingProblem& problem,
   }
   std::erase_if(out.points, [](const auto& point) { return point.mass == infinity; });
   keep_non_dominated(out.points);
+  out.partly_skipped = skipped;
   out.kind = !out.points.empty() ? Outcome::Kind::feasible
              : skipped           ? Outcome::Kind::skipped
                                  : Outcome::Kind::infeasible;

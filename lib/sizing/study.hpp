@@ -37,6 +37,7 @@ struct Outcome {
   double least_utilisation = 0.0;   ///< Infeasible: the least value the excluding limit can have.
   std::vector<Point> points;        ///< Feasible: its non-dominated points.
   bool searched = false;            ///< Its shape has free dimensions.
+  bool partly_skipped = false;      ///< Some of its groups were beaten before they were solved.
 };
 
 /// The candidates of a part, solved as far as asked.

@@ -78,8 +78,10 @@ bool GroupSearch::try_point() {
   if (!keep(x_, f_, u_)) {
     return true;
   }
-  // A point no better than rounding is not worth another polish.
-  if (one_point_ && (polished_.empty() || f_[0] < polished_[0] - 1e-9 * std::abs(polished_[0]))) {
+  // A point that is hardly better is polished at the end, if it still is the best then.
+  const double worth = 0.25 * options_.epsilon;
+  const bool better = polished_.empty() || f_[0] < polished_[0] - worth * std::abs(polished_[0]);
+  if (one_point_ && taken_ > polished_after && better) {
     polish_best();
   }
   return true;
@@ -147,6 +149,18 @@ void GroupSearch::polish_best() {
   keep(point.x, point.objectives, point.utilisations);
   const auto best = front_.objectives(0);
   polished_.assign(best.begin(), best.end());
+}
+
+void GroupSearch::polish_found() {
+  // No better than rounding is not worth another polish.
+  if (front_.empty() || (!polished_.empty() &&
+                         front_.objectives(0)[0] >= polished_[0] - 1e-9 * std::abs(polished_[0]))) {
+    return;
+  }
+  std::copy(front_.x(0).begin(), front_.x(0).end(), x_.begin());
+  std::copy(front_.objectives(0).begin(), front_.objectives(0).end(), f_.begin());
+  std::copy(front_.utilisations(0).begin(), front_.utilisations(0).end(), u_.begin());
+  polish_best();
 }
 
 bool GroupSearch::same_place(std::span<const double> a, std::span<const double> b) const {

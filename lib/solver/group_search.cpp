@@ -20,6 +20,10 @@ constexpr double infinity = std::numeric_limits<double>::infinity();
 /// less is taken for one that reaches zero.
 constexpr double narrow = 1e-6;
 
+/// Boxes whose points are tried in any case, and afterwards one in so many.
+constexpr std::size_t always_tried = 32;
+constexpr std::size_t tried_each = 4;
+
 /// A variable without effect so far keeps this share of the greatest one, so that none starves.
 constexpr double least_effect = 0.1;
 
@@ -77,6 +81,7 @@ GroupSearch::GroupSearch(const BoxProblem& problem,
 GroupFront GroupSearch::run() {
   const End end = search();
   if (one_point_ && end == End::done) {
+    polish_found();
     polish_starts();
   }
   GroupFront out;
@@ -178,8 +183,18 @@ void GroupSearch::take_next() {
     open_.free(box);
     return;
   }
-  const bool decided = try_points(box);
+  // Where one polished point is all that is wanted, points matter little once it is found: the
+  // boxes only prove it.
+  if (++taken_ == polished_after && one_point_) {
+    polish_found();
+  }
+  const bool worth =
+      !one_point_ || taken_ <= always_tried || taken_ % (front_.empty() ? 2 : tried_each) == 0;
+  const bool decided = worth && try_points(box);
   const std::uint32_t variable = decided || is_covered(box) ? no_index : choose_variable(box);
+  if (variable == no_index && !worth && !is_covered(box)) {
+    try_points(box);
+  }
   if (variable == no_index) {
     open_.free(box);
     return;

@@ -60,6 +60,8 @@ class GroupSearch {
   bool keep(std::span<const double> x, std::span<const double> f, std::span<const double> u);
   /// Within a twentieth of the range in every continuous variable but the size, equal in others.
   [[nodiscard]] bool same_place(std::span<const double> a, std::span<const double> b) const;
+  /// Polishes the best point, unless it comes from a polish.
+  void polish_found();
   void polish_starts();
 
   /// The variable to cut, or no_index for a box of which nothing is left to cut.
@@ -118,6 +120,9 @@ class GroupSearch {
   std::vector<std::vector<double>> origins_;  ///< Where polishes began.
   std::vector<double> polished_;              ///< Objectives of the last polished point.
   double reached_ = 0.0;
+  /// Boxes taken before the first polish: most groups that others beat are left by then.
+  static constexpr std::size_t polished_after = 24;
+  std::size_t taken_ = 0;  ///< Boxes taken out to be cut.
   std::size_t boxes_ = 0;
   std::size_t evaluations_ = 0;
   std::uint32_t unbeaten_ = no_index;  ///< A box known not to be beaten when last looked at.

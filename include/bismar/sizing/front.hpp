@@ -36,11 +36,22 @@ struct RunOptions {
 /// Mass-cost front of a part: minimise (mass, unit cost) over material x section x size x route,
 /// subject to every utilisation <= 1.
 ///
-/// Result by definition: for each candidate the exact non-dominated feasible points (stock and size
-/// lists: every size; one free size: the root to 1e-9 in the size on the feasible side); the front
-/// is the non-dominated subset of their union; equal objective vectors are kept as ties. Results
-/// are ordered by (mass, cost, material, shape, route, treatment, finish ids, size) and depend
-/// neither on the order of the tables nor on locale, flush-to-zero or rounding mode of the caller.
+/// Result by definition: for each candidate its own points, a function of the job and the candidate
+/// alone. Stock and size lists: every size. One free size: the root to 1e-9 in the size on the
+/// feasible side. Several free sizes: what branch and bound with certified bounds returns, so that
+/// for every size whose utilisations are all <= 1 - delta a point is within epsilon in mass and
+/// cost, relative; one polished point where cost follows mass. The front is the non-dominated
+/// subset of their union; equal objective vectors are kept as ties; designs within `near` of it
+/// follow. Under Explain::front what others beat by more than max(epsilon, near) is skipped: only
+/// the funnel tells less then, `others` is empty, and where nothing at all is feasible every
+/// candidate is examined after all, for the reasons.
+///
+/// Results are ordered by (mass, cost, material, shape, route, treatment, finish ids, sizes) and
+/// depend neither on the order of the tables, on threads or reductions (`telemetry` apart), nor on
+/// locale, flush-to-zero or rounding mode of the caller.
+///
+/// The bounds of shapes with several free sizes rest on trends of section properties that were
+/// observed on hundreds of thousands of random sections, not proved (section_box.hpp).
 ///
 /// @throws bismar::Error  every fault of the part (see validate()).
 /// A design whose re-evaluation on the plain path differs by more than 1e-12 is left out and named

@@ -214,7 +214,7 @@ struct Settings {
 /// Checks a part against a catalogue without solving it.
 /// @throws bismar::Error  every fault: names that the catalogue does not have (with the nearest
 /// one),
-///   impossible numbers, shapes with two or more free sizes (unsupported), contradictory limits.
+///   impossible numbers, ratios that make no section anywhere, contradictory limits.
 BISMAR_API void validate(const Part& part,
                          const Catalogue& catalogue,
                          const Settings& settings = {});

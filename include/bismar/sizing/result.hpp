@@ -95,7 +95,9 @@ struct Design {
 struct FunnelLine {
   enum class Stage : std::uint8_t { cannot_exist, undecided, infeasible, not_better, near, front };
   Stage stage = Stage::cannot_exist;
-  std::string reason;  ///< Rule, property, limit; empty for the last three.
+  /// Rule, property, limit. "feasibility not examined" of what Explain::front leaves out as not
+  /// better; else empty for the last three.
+  std::string reason;
   std::size_t candidates = 0;
 };
 

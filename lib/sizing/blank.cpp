@@ -177,6 +177,48 @@ double room_in(const Blank& blank, const SectionProperties& section, const Setti
                      : largest_size_in(*blank.item, section, blank.item->section.family, allowance);
 }
 
+bool holds_as_much(const Blank& other,
+                   const Blank& own,
+                   SectionFamily part,
+                   const Interval& height,
+                   const Interval& width,
+                   const Settings& settings) {
+  const bool round_part =
+      part == SectionFamily::solid_round || part == SectionFamily::solid_ellipse;
+  /// The larger and the smaller side; of a round bar for a round part only the larger one counts.
+  struct Sides {
+    double larger;
+    double smaller;
+  };
+  const auto sides = [&](const Blank& blank) -> std::optional<Sides> {
+    constexpr double any = std::numeric_limits<double>::infinity();
+    if (blank.plate) {
+      return Sides{any, blank.item->thickness - settings.machining_allowance};
+    }
+    const auto& section = blank.item->section;
+    const double large = std::max(section.height, section.width) - settings.machining_allowance;
+    const double small = std::min(section.height, section.width) - settings.machining_allowance;
+    if (section.family == SectionFamily::solid_round) {
+      return round_part ? std::optional(Sides{large, any}) : std::nullopt;
+    }
+    return Sides{large, small};
+  };
+  const auto theirs = sides(other);
+  const auto ours = sides(own);
+  if (!theirs || !ours) {
+    return false;
+  }
+  const double most_large = std::max(height.upper(), width.upper());
+  const double least_large = std::max(height.lower(), width.lower());
+  const double most_small = std::min(height.upper(), width.upper());
+  const double least_small = std::min(height.lower(), width.lower());
+  // The other one is limited by its larger side over the whole box, or by its smaller side.
+  const bool by_larger = theirs->larger * most_small <= theirs->smaller * least_large;
+  const bool by_smaller = theirs->smaller * most_large <= theirs->larger * least_small;
+  return (by_larger && ours->larger <= theirs->larger) ||
+         (by_smaller && ours->smaller <= theirs->smaller);
+}
+
 double strength_thickness(const SectionProperties& section, const MaterialInfo& material) {
   // EN 10083 and its kin give the steps of hardened bar by diameter; other solids count by their
   // equivalent diameter 4 A / U, which for a wide flat is twice its thickness (EN 10083-2, "d <= 16

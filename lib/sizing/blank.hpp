@@ -3,6 +3,7 @@
 
 #include <bismar/catalogue/catalogue.hpp>
 #include <bismar/mechanics/section.hpp>
+#include <bismar/numeric/interval.hpp>
 #include <bismar/sizing/part.hpp>
 
 #include <optional>
@@ -73,6 +74,16 @@ struct UsableItem {
 [[nodiscard]] double room_in(const Blank& blank,
                              const SectionProperties& section,
                              const Settings& settings);
+
+/// Whether `other` surely holds every section that `own` holds, of all with these heights and
+/// widths: where both are limited by the same side, which no comparison of room_in() over a box
+/// would tell.
+[[nodiscard]] bool holds_as_much(const Blank& other,
+                                 const Blank& own,
+                                 SectionFamily part,
+                                 const Interval& height,
+                                 const Interval& width,
+                                 const Settings& settings);
 
 /// Blanks for a machined part of these proportions (`unit`: its section at height 1 m) and length,
 /// by rising largest size, each the lightest that holds every size up to it. Bars first; plate

@@ -255,6 +255,20 @@ void FreeSizeProblem::contract_similar(const Mode& mode,
     scratch.lower.width = box.width.lower();
     at_most(room_in(*mode.piece.blank, scratch.lower, sizing_.settings()),
             extra(FreeConstraint::blank));
+    scratch.lower.width = box.width.upper();
+    for (const Blank* other : mode.others) {
+      if (holds_as_much(*other,
+                        *mode.piece.blank,
+                        shape_.family,
+                        box.height,
+                        box.width,
+                        sizing_.settings())) {
+        broken = extra(FreeConstraint::other_blank);
+        return;
+      }
+      at_least(room_in(*other, scratch.lower, sizing_.settings()) / allowed,
+               extra(FreeConstraint::other_blank));
+    }
   }
   const auto& step = *mode.piece.step;
   const double length = sizing_.part().body.length;
@@ -369,6 +383,12 @@ void FreeSizeProblem::contract_any(const Mode& mode,
     scratch.lower.width = box.width.lower();
     hold(1.0 / room_in(*mode.piece.blank, scratch.lower, sizing_.settings()) / (1.0 + 1e-9),
          base + FreeConstraint::blank);
+    scratch.lower.height = box.height.upper();
+    scratch.lower.width = box.width.upper();
+    for (const Blank* other : mode.others) {
+      hold(room_in(*other, scratch.lower, sizing_.settings()) / (1.0 + 1e-9),
+           base + FreeConstraint::other_blank);
+    }
   }
   std::uint32_t next = base + FreeConstraint::first_proportion;
   for (const auto& proportion : mode.proportions) {
@@ -528,6 +548,12 @@ void FreeSizeProblem::bound_box(const Mode& mode,
     scratch.lower.width = box.width.lower() * low;
     utilisations[base + FreeConstraint::blank] =
         (1.0 - 1e-9) / room_in(*mode.piece.blank, scratch.lower, sizing_.settings());
+    scratch.lower.height = box.height.upper() * high;
+    scratch.lower.width = box.width.upper() * high;
+    for (const Blank* other : mode.others) {
+      double& u = utilisations[base + FreeConstraint::other_blank];
+      u = std::max(u, room_in(*other, scratch.lower, sizing_.settings()) * (1.0 - 1e-9));
+    }
   }
   std::size_t next = base + FreeConstraint::first_proportion;
   for (const auto& proportion : mode.proportions) {

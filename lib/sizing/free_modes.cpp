@@ -22,6 +22,40 @@ constexpr double infinity = std::numeric_limits<double>::infinity();
 /// Sizes of a list or of a sheet are at the end of a step but for rounding.
 constexpr double rounding = 1e-12;
 
+/// Whether a state may leave undone what the other does: a value is lower, or missing on one side,
+/// density or price higher. As a rule a thicker step is the worse one.
+bool is_worse(const StepState& one, const StepState& other) {
+  if (one.density > other.density || one.usual_price > other.usual_price) {
+    return true;
+  }
+  for (std::size_t c = 0; c < one.cases.size(); ++c) {
+    const MemberMaterial& a = one.cases[c].member;
+    const MemberMaterial& b = other.cases[c].member;
+    for (const Symbol symbol : {Symbol::E,
+                                Symbol::E_05,
+                                Symbol::G,
+                                Symbol::sigma_y,
+                                Symbol::tensile,
+                                Symbol::compressive,
+                                Symbol::flexural,
+                                Symbol::shear,
+                                Symbol::K_Ic,
+                                Symbol::sigma_e,
+                                Symbol::weld_yield,
+                                Symbol::weld_tensile}) {
+      const auto& value = value_of(a, symbol);
+      const auto& beside = value_of(b, symbol);
+      if (value.has_value() != beside.has_value() || (value && *value < *beside)) {
+        return true;
+      }
+    }
+    if (a.rule != b.rule) {
+      return true;
+    }
+  }
+  return false;
+}
+
 }  // namespace
 
 Mode FreeSizeProblem::proportional_mode() const {
@@ -178,15 +212,25 @@ void FreeSizeProblem::machined_modes() {
   const auto steps = sizing_.catalogue().materials.steps(base_.candidate.material);
   const auto& material = sizing_.catalogue().materials.info(base_.candidate.material);
   const bool listed = shape_.sizes.kind != Sizes::Kind::continuous;
+  std::vector<std::pair<const Blank*, std::size_t>> before;  // with their strength steps
   for (const Blank& blank : blanks_) {
     const double thickness = blank_thickness(blank, material);
+    // steps.size(): no strength is tabulated for so thick a blank.
+    std::size_t own = steps.size();
     for (std::size_t s = 0; s < steps.size(); ++s) {
-      if (thickness > steps[s].above && thickness <= steps[s].up_to) {
-        Mode mode = listed ? listed_mode() : proportional_mode();
-        mode.thickness_up_to = infinity;
-        add_mode(std::move(mode), &states[s], &blank);
-      }
+      own = thickness > steps[s].above && thickness <= steps[s].up_to ? s : own;
     }
+    if (own < steps.size()) {
+      Mode mode = listed ? listed_mode() : proportional_mode();
+      mode.thickness_up_to = infinity;
+      for (const auto& [lighter, step] : before) {
+        if (step != own && (step == steps.size() || is_worse(states[step], states[own]))) {
+          mode.others.push_back(lighter);
+        }
+      }
+      add_mode(std::move(mode), &states[own], &blank);
+    }
+    before.emplace_back(&blank, own);
   }
 }
 

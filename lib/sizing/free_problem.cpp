@@ -71,6 +71,8 @@ std::string FreeSizeProblem::label(std::size_t constraint) const {
       return "tabulated thickness";
     case FreeConstraint::blank:
       return "blank or stock length";
+    case FreeConstraint::other_blank:
+      return "strength of the lightest blank";
     case FreeConstraint::section:
       return "proportions that make a section";
     default:
@@ -91,6 +93,7 @@ Trend FreeSizeProblem::utilisation_trend(std::size_t group, std::size_t i, std::
   }
   switch (i - constraints_.size()) {
     case FreeConstraint::thickness_above:
+    case FreeConstraint::other_blank:
       return Trend::falls;
     case FreeConstraint::thickness_up_to:
     case FreeConstraint::blank:
@@ -192,6 +195,12 @@ void FreeSizeProblem::own_utilisations(const Mode& mode,
   out[FreeConstraint::blank] =
       own_thickness ? 0.0 : (1.0 - slack) / room_in(*mode.piece.blank, section, sizing_.settings());
   out[FreeConstraint::section] = 0.0;
+  out[FreeConstraint::other_blank] = 0.0;
+  for (const Blank* other : mode.others) {
+    out[FreeConstraint::other_blank] =
+        std::max(out[FreeConstraint::other_blank],
+                 room_in(*other, section, sizing_.settings()) * (1.0 + rounding));
+  }
   std::size_t next = FreeConstraint::first_proportion;
   for (const auto& proportion : mode.proportions) {
     const double ratio = dimensions[proportion.dimension] / dimensions[0];

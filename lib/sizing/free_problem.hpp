@@ -42,6 +42,8 @@ struct Mode {
   /// The thickness that strength is read at lies in (above, up_to] [m].
   double thickness_above = 0.0;
   double thickness_up_to = 0.0;
+  /// Lighter blanks that are worse in something: what fits one is cut from it all the same.
+  std::vector<const Blank*> others;
   /// Ratios that are not variables: dimension index over the height inside the range.
   struct Proportion {
     std::size_t dimension = 0;

@@ -17,7 +17,8 @@ struct FreeConstraint {
   static constexpr std::size_t thickness_up_to = 1;
   static constexpr std::size_t blank = 2;
   static constexpr std::size_t section = 3;
-  static constexpr std::size_t first_proportion = 4;
+  static constexpr std::size_t other_blank = 4;  ///< Falls with the size.
+  static constexpr std::size_t first_proportion = 5;
 };
 
 /// What bounding a box needs, made once for a batch.

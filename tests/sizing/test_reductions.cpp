@@ -321,9 +321,10 @@ TEST_CASE("fronts of fixed shapes and stock do not depend on reductions or threa
 }
 
 TEST_CASE("fronts of free shapes do not depend on reductions or threads or order") {
-  std::mt19937 random(4102);
+  // The 25th of these has a bar that is weaker than the next thicker one.
+  std::mt19937 random(78);
   std::size_t designs = 0;
-  for (int turn = 0; turn < 6; ++turn) {
+  for (int turn = 0; turn < 26; ++turn) {
     INFO("round " << turn);
     const auto catalogue = hostile_catalogue(random, 5);
     auto part = hostile_part(random);

@@ -14,21 +14,6 @@ namespace bismar {
 
 namespace {
 
-constexpr std::array all_symbols = {Symbol::rho,
-                                    Symbol::E,
-                                    Symbol::E_05,
-                                    Symbol::G,
-                                    Symbol::sigma_y,
-                                    Symbol::tensile,
-                                    Symbol::compressive,
-                                    Symbol::flexural,
-                                    Symbol::shear,
-                                    Symbol::alpha,
-                                    Symbol::K_Ic,
-                                    Symbol::sigma_e,
-                                    Symbol::weld_yield,
-                                    Symbol::weld_tensile};
-
 /// How a value counts: -1 the higher the better, +1 the lower, 0 must be equal.
 class Directions {
  public:

@@ -71,6 +71,18 @@ std::vector<std::uint32_t> route_choices(const Part& part, const Catalogue& cata
   return out;
 }
 
+std::size_t doubtful_sizes(const Part& part, const Catalogue& catalogue, const Settings& settings) {
+  std::size_t count = 0;
+  for (const auto list : stock_lists(part, catalogue)) {
+    const auto& items = catalogue.stock[list].items;
+    count += static_cast<std::size_t>(
+        std::count_if(items.begin(), items.end(), [&](const StockItem& item) {
+          return !is_offered(item, settings);
+        }));
+  }
+  return count;
+}
+
 KindOrder::KindOrder(const Catalogue& catalogue) {
   for (const auto& list : catalogue.stock) {
     for (const auto& item : list.items) {

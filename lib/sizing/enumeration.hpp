@@ -24,6 +24,11 @@ namespace bismar {
 [[nodiscard]] std::vector<std::uint32_t> route_choices(const Part& part,
                                                        const Catalogue& catalogue);
 
+/// Stock sizes of the part's lists that are not offered because they are marked doubtful.
+[[nodiscard]] std::size_t doubtful_sizes(const Part& part,
+                                         const Catalogue& catalogue,
+                                         const Settings& settings);
+
 /// Materials of one kind have the same candidates: what the rules of existence read of them is
 /// equal.
 class KindOrder {

@@ -31,21 +31,11 @@ bool is_worse(const StepState& one, const StepState& other) {
   for (std::size_t c = 0; c < one.cases.size(); ++c) {
     const MemberMaterial& a = one.cases[c].member;
     const MemberMaterial& b = other.cases[c].member;
-    for (const Symbol symbol : {Symbol::E,
-                                Symbol::E_05,
-                                Symbol::G,
-                                Symbol::sigma_y,
-                                Symbol::tensile,
-                                Symbol::compressive,
-                                Symbol::flexural,
-                                Symbol::shear,
-                                Symbol::K_Ic,
-                                Symbol::sigma_e,
-                                Symbol::weld_yield,
-                                Symbol::weld_tensile}) {
+    for (const Symbol symbol : all_symbols) {
       const auto& value = value_of(a, symbol);
       const auto& beside = value_of(b, symbol);
-      if (value.has_value() != beside.has_value() || (value && *value < *beside)) {
+      if (value.has_value() != beside.has_value() ||
+          (value && symbol != Symbol::rho && symbol != Symbol::alpha && *value < *beside)) {
         return true;
       }
     }

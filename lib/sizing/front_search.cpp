@@ -386,15 +386,7 @@ Solved search_front(const Part& part,
                     FrontMemory* memory) {
   FrontMemory own;
   auto out = FrontSearch(part, catalogue, settings, run, memory != nullptr ? *memory : own).run();
-  if (!settings.doubtful_sizes) {
-    for (const auto list : stock_lists(part, catalogue)) {
-      const auto& items = catalogue.stock[list].items;
-      out.doubtful_sizes += static_cast<std::size_t>(
-          std::count_if(items.begin(), items.end(), [](const StockItem& item) {
-            return item.availability == Availability::doubtful;
-          }));
-    }
-  }
+  out.doubtful_sizes = doubtful_sizes(part, catalogue, settings);
   return out;
 }
 

@@ -11,21 +11,6 @@ namespace bismar {
 
 namespace {
 
-constexpr std::array all_symbols = {Symbol::rho,
-                                    Symbol::E,
-                                    Symbol::E_05,
-                                    Symbol::G,
-                                    Symbol::sigma_y,
-                                    Symbol::tensile,
-                                    Symbol::compressive,
-                                    Symbol::flexural,
-                                    Symbol::shear,
-                                    Symbol::alpha,
-                                    Symbol::K_Ic,
-                                    Symbol::sigma_e,
-                                    Symbol::weld_yield,
-                                    Symbol::weld_tensile};
-
 bool step_lacks_value(const SizingProblem& problem, std::uint32_t material, const StepState& step) {
   return !step.priced ||
          std::any_of(step.cases.begin(),

@@ -5,6 +5,7 @@
 #include <bismar/mechanics/limit_state.hpp>
 #include <bismar/sizing/part.hpp>
 
+#include <array>
 #include <map>
 #include <optional>
 #include <set>
@@ -14,6 +15,22 @@
 #include <vector>
 
 namespace bismar {
+
+/// Every symbol that a limit state may read.
+inline constexpr std::array all_symbols = {Symbol::rho,
+                                           Symbol::E,
+                                           Symbol::E_05,
+                                           Symbol::G,
+                                           Symbol::sigma_y,
+                                           Symbol::tensile,
+                                           Symbol::compressive,
+                                           Symbol::flexural,
+                                           Symbol::shear,
+                                           Symbol::alpha,
+                                           Symbol::K_Ic,
+                                           Symbol::sigma_e,
+                                           Symbol::weld_yield,
+                                           Symbol::weld_tensile};
 
 [[nodiscard]] bool is_metal(std::string_view material_class);
 /// Whether a steel in this condition owes nothing to hardening, ageing or cold work that a weld

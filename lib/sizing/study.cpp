@@ -195,15 +195,7 @@ Solved solve_candidates(const Part& part,
     }
     progress.at(static_cast<double>(m - from + 1) / static_cast<double>(to - from));
   }
-  if (!settings.doubtful_sizes) {
-    for (const auto list : stock_lists(part, catalogue)) {
-      const auto& items = catalogue.stock[list].items;
-      solved.doubtful_sizes += static_cast<std::size_t>(
-          std::count_if(items.begin(), items.end(), [](const StockItem& item) {
-            return item.availability == Availability::doubtful;
-          }));
-    }
-  }
+  solved.doubtful_sizes = doubtful_sizes(part, catalogue, settings);
   return solved;
 }
 

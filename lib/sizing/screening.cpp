@@ -23,20 +23,12 @@ constexpr double slack = 1e-9;
 }  // namespace
 
 bool has_walls(const Part& part) {
-  const auto solid = [](const Shape& shape) {
-    switch (shape.family) {
-      case SectionFamily::solid_round:
-      case SectionFamily::solid_square:
-      case SectionFamily::solid_rectangle:
-      case SectionFamily::solid_ellipse:
-      case SectionFamily::solid_hexagon:
-        return true;
-      default:
-        return false;
-    }
+  const auto walled = [](const Shape& shape) {
+    return is_tube(shape.family) || is_open_section(shape.family) ||
+           shape.family == SectionFamily::polygon;
   };
   return !part.body.stock.empty() ||
-         !std::all_of(part.body.shapes.begin(), part.body.shapes.end(), solid);
+         std::any_of(part.body.shapes.begin(), part.body.shapes.end(), walled);
 }
 
 std::optional<std::string> Screening::failed_by_itself(std::uint32_t material,

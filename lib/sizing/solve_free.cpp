@@ -54,12 +54,7 @@ Outcome solve_free(SizingProblem& problem,
   if (!free.missing().empty() || !free.open_limits().empty()) {
     out.kind =
         settings.missing == Missing::exclude ? Outcome::Kind::excluded : Outcome::Kind::undecided;
-    for (const Property property : free.missing()) {
-      out.reason += (out.reason.empty() ? "" : ", ") + std::string(info(property).name);
-    }
-    for (const auto& limit : free.open_limits()) {
-      out.reason += (out.reason.empty() ? "" : ", ") + limit;
-    }
+    out.reason = missing_text(free.missing(), free.open_limits());
     problem.remove_last();
     return out;
   }

@@ -18,17 +18,6 @@ namespace {
 
 constexpr double infinity = std::numeric_limits<double>::infinity();
 
-std::string missing_text(const CompiledCandidate& compiled) {
-  std::string out;
-  for (const Property property : compiled.undecided) {
-    out += (out.empty() ? "" : ", ") + std::string(info(property).name);
-  }
-  for (const auto& limit : compiled.undecided_limits) {
-    out += (out.empty() ? "" : ", ") + limit;
-  }
-  return out;
-}
-
 /// The constraints that exclude a candidate: one that fails everywhere, or two that clash.
 std::vector<std::size_t> failed_constraints(const GroupSolution& solution) {
   if (solution.excluded_by != SIZE_MAX) {
@@ -56,6 +45,18 @@ CandidateNames names(const Candidate& candidate, const Part& part, const Catalog
   return out;
 }
 
+std::string missing_text(std::span<const Property> properties,
+                         std::span<const std::string> limits) {
+  std::string out;
+  for (const Property property : properties) {
+    out += (out.empty() ? "" : ", ") + std::string(info(property).name);
+  }
+  for (const auto& limit : limits) {
+    out += (out.empty() ? "" : ", ") + limit;
+  }
+  return out;
+}
+
 Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t& evaluations) {
   const auto& compiled = problem.compiled(group);
   Outcome out;
@@ -64,7 +65,7 @@ Outcome solve_group(const SizingProblem& problem, std::size_t group, std::size_t
   if (!compiled.undecided.empty() || !compiled.undecided_limits.empty()) {
     out.kind = problem.settings().missing == Missing::exclude ? Outcome::Kind::excluded
                                                               : Outcome::Kind::undecided;
-    out.reason = missing_text(compiled);
+    out.reason = missing_text(compiled.undecided, compiled.undecided_limits);
     return out;
   }
   if (compiled.variable.kind == Variable::Kind::ordered_set && compiled.variable.values.empty()) {

@@ -96,6 +96,10 @@ struct CandidateNames {
                                                      bool keep_group,
                                                      Solved& solved);
 
+/// What a candidate is left undecided for: missing properties, then open limits.
+[[nodiscard]] std::string missing_text(std::span<const Property> properties,
+                                       std::span<const std::string> limits);
+
 /// Keeps what has points and counts the rest.
 void keep_or_count(Outcome outcome, const Part& part, const Catalogue& catalogue, Solved& solved);
 
